@@ -1,0 +1,14 @@
+//! Gapkeep: proves how parts of different materials fit together at every temperature.
+//!
+//! The rooms, from the ground up, are listed in `DEVELOPERS.md`; a room uses only those before it,
+//! which `tests/tidy.rs` holds.
+
+pub mod diagnostic;
+pub mod materials;
+pub mod mechanics;
+pub mod numeric;
+pub mod source;
+pub mod span;
+pub mod standards;
+pub mod syntax;
+pub mod units;

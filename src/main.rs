@@ -1,0 +1,3 @@
+//! The thin program: everything happens in the library.
+
+fn main() {}

@@ -1,0 +1,1 @@
+//! Distributions of a single unknown.

@@ -1,0 +1,1 @@
+//! Tails of sums of independent unknowns.
