@@ -1,0 +1,15 @@
+//! Every tolerance of the program, and the one comparison of a bound with a limit.
+
+/// How far apart, in the unit shown, the proven bound of an extreme and the value reached may stay:
+/// far below what a gauge resolves, far above rounding.
+pub const EXTREME_GAP: f64 = 1e-9;
+
+/// Most boxes one search for an extreme may look at before it gives up and says so.
+pub const MOST_BOXES: usize = 100_000;
+
+/// How far, in the unit shown, a proven bound may lie beyond its limit and still hold: a fit whose
+/// least clearance is exactly zero must hold `>= 0` whatever the last bit says.
+pub const LIMIT_SLACK: f64 = 1e-9;
+
+/// Slivers of a temperature window thinner than this, in kelvin, count as failing.
+pub const WINDOW_SLIVER: f64 = 1e-6;
