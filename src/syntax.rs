@@ -1,1 +1,17 @@
-//! (room under construction)
+//! Text to tree: what a `.gap` file says, with its places, its comments and its mistakes.
+//!
+//! Owns the grammar, the recovery from mistakes and the one layout of a file. Must not know units
+//! or what a name means.
+
+pub mod tree;
+
+use crate::diagnostic::Diagnostic;
+
+/// A tree, and what is wrong with the text it was read from.
+#[derive(Debug, Clone, PartialEq, Default)]
+pub struct Parsed {
+    /// Everything that could be read.
+    pub tree: tree::File,
+    /// What could not be read, in the order of the text.
+    pub diagnostics: Vec<Diagnostic>,
+}
