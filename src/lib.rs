@@ -6,6 +6,7 @@
 pub mod diagnostic;
 pub mod materials;
 pub mod mechanics;
+pub mod model;
 pub mod numeric;
 pub mod source;
 pub mod span;

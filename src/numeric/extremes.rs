@@ -1,1 +1,291 @@
-//! Proven extremes.
+//! Proven extremes of a recorded formula over a box.
+//!
+//! A search keeps, for each piece of the box, a bound that holds for certain, and one value that is
+//! reached for certain; it ends when the two meet. Unknowns whose derivative keeps its sign go to
+//! their end at once, so that an ordinary stack of forty dimensions needs three passes over its tape
+//! and never 2⁴⁰ corners; the rest is bisected, worst bound first (Moore, Kearfott and Cloud,
+//! *Introduction to Interval Analysis*, ch. 6 on mean value forms, from memory).
+
+use super::tolerance::MOST_BOXES;
+use super::{Interval, Tape};
+use std::cmp::Ordering;
+use std::collections::BinaryHeap;
+
+/// One end of the range of a formula.
+#[derive(Debug, Clone, PartialEq)]
+pub struct Extreme {
+    /// No value lies beyond this: proven.
+    pub bound: f64,
+    /// A value at or beyond this occurs, at `at`: proven.
+    pub reached: f64,
+    /// Where: one value for each input.
+    pub at: Vec<f64>,
+    /// True when bound and value reached are as close as was asked for.
+    pub met: bool,
+}
+
+/// Both ends of the range of a formula.
+#[derive(Debug, Clone, PartialEq)]
+pub struct Extremes {
+    /// The lower end.
+    pub least: Extreme,
+    /// The upper end.
+    pub greatest: Extreme,
+}
+
+/// Finds both ends of the range of `tape` over `ranges`.
+///
+/// `gap` is how far apart bound and value reached may stay, in the unit of the formula. Where that is
+/// not met within [`MOST_BOXES`] pieces, or where the formula is undefined for part of the box, the
+/// bounds still hold but `met` is false; a bound may then be infinite.
+///
+/// # Panics
+/// If there are fewer ranges than inputs.
+pub fn extremes(tape: &Tape, ranges: &[Interval], gap: f64) -> Extremes {
+    let breaks: Vec<Vec<f64>> = (0..tape.inputs()).map(|i| tape.breakpoints(i)).collect();
+    let whole = Piece::of(tape, ranges.to_vec());
+    let search = |side| Search::new(tape, &breaks, gap, side).run(whole.clone());
+    Extremes { least: search(Side::Least), greatest: search(Side::Greatest) }
+}
+
+/// A box with what is known of the formula on it.
+#[derive(Debug, Clone)]
+struct Piece {
+    ranges: Vec<Interval>,
+    value: Interval,
+    slopes: Vec<Interval>,
+}
+
+impl Piece {
+    fn of(tape: &Tape, ranges: Vec<Interval>) -> Self {
+        let (value, slopes) = tape.gradient(&ranges);
+        Piece { ranges, value, slopes }
+    }
+}
+
+#[derive(Debug, Clone, Copy, PartialEq)]
+enum Side {
+    Least,
+    Greatest,
+}
+
+impl Side {
+    /// Turns values so that the search is always for the greatest.
+    fn turn(self, x: Interval) -> Interval {
+        match self {
+            Side::Least => -x,
+            Side::Greatest => x,
+        }
+    }
+}
+
+/// A piece still open, ordered by how far it might reach.
+struct Open {
+    bound: f64,
+    piece: Piece,
+}
+
+impl PartialEq for Open {
+    fn eq(&self, o: &Self) -> bool {
+        self.cmp(o) == Ordering::Equal
+    }
+}
+
+impl Eq for Open {}
+
+impl PartialOrd for Open {
+    fn partial_cmp(&self, o: &Self) -> Option<Ordering> {
+        Some(self.cmp(o))
+    }
+}
+
+impl Ord for Open {
+    fn cmp(&self, o: &Self) -> Ordering {
+        self.bound.total_cmp(&o.bound)
+    }
+}
+
+struct Search<'a> {
+    tape: &'a Tape,
+    breaks: &'a [Vec<f64>],
+    gap: f64,
+    side: Side,
+    reached: f64,
+    at: Vec<f64>,
+}
+
+impl<'a> Search<'a> {
+    fn new(tape: &'a Tape, breaks: &'a [Vec<f64>], gap: f64, side: Side) -> Self {
+        Search { tape, breaks, gap, side, reached: f64::NEG_INFINITY, at: Vec::new() }
+    }
+
+    fn run(mut self, whole: Piece) -> Extreme {
+        // Even a formula that is nowhere defined must name some place.
+        self.at = whole.ranges.iter().map(|r| r.mid()).collect();
+        let mut open = BinaryHeap::new();
+        // What was settled without being split further: its bound counts to the end.
+        let mut settled = f64::NEG_INFINITY;
+        open.push(self.examine(whole));
+        let mut looked_at = 1;
+        let mut bound = f64::INFINITY;
+        while let Some(worst) = open.pop() {
+            bound = worst.bound.max(settled);
+            if bound <= self.reached + self.gap || looked_at >= MOST_BOXES {
+                break;
+            }
+            let Some((first, second)) = self.split(&worst.piece) else {
+                settled = settled.max(worst.bound);
+                if settled == f64::INFINITY {
+                    bound = settled;
+                    break;
+                }
+                continue;
+            };
+            for ranges in [first, second] {
+                looked_at += 1;
+                let examined = self.examine(Piece::of(self.tape, ranges));
+                if examined.bound > self.reached {
+                    open.push(examined);
+                }
+            }
+            bound = settled.max(self.reached);
+        }
+        let met = bound <= self.reached + self.gap;
+        // Whatever was dropped lay at or below the value reached.
+        let bound = bound.max(self.reached);
+        match self.side {
+            Side::Greatest => Extreme { bound, reached: self.reached, at: self.at, met },
+            Side::Least => Extreme { bound: -bound, reached: -self.reached, at: self.at, met },
+        }
+    }
+
+    /// Sends what has a proven sign to its end, bounds the piece, and tries points in it.
+    fn examine(&mut self, mut piece: Piece) -> Open {
+        let mut corner = Vec::with_capacity(piece.ranges.len());
+        let mut moved = false;
+        for (range, slope) in piece.ranges.iter_mut().zip(&piece.slopes) {
+            let slope = self.side.turn(*slope);
+            let end = if slope.mid() >= 0.0 { range.hi() } else { range.lo() };
+            corner.push(end);
+            if !range.is_point() && (slope.lo() >= 0.0 || slope.hi() <= 0.0) {
+                *range = Interval::point(end);
+                moved = true;
+            }
+        }
+        let here = self.try_point(&corner);
+        let all_points = piece.ranges.iter().all(|r| r.is_point());
+        if all_points {
+            // The corner is the whole piece.
+            return Open { bound: here.hi(), piece };
+        }
+        let mut bound = self.side.turn(piece.value).hi();
+        if moved {
+            bound = bound.min(self.side.turn(self.tape.value(&piece.ranges)).hi());
+        }
+        let middle: Vec<f64> = piece.ranges.iter().map(|r| r.mid()).collect();
+        let mut form = self.try_point(&middle);
+        for ((range, slope), m) in piece.ranges.iter().zip(&piece.slopes).zip(&middle) {
+            if !range.is_point() {
+                form = form + self.side.turn(*slope) * (*range - *m);
+            }
+        }
+        Open { bound: bound.min(form.hi()), piece }
+    }
+
+    /// Evaluates at a point, keeps it if it is the best so far, returns the enclosure (turned).
+    fn try_point(&mut self, point: &[f64]) -> Interval {
+        let at: Vec<Interval> = point.iter().map(|&x| Interval::point(x)).collect();
+        let value = self.side.turn(self.tape.value(&at));
+        if value.lo() > self.reached {
+            self.reached = value.lo();
+            self.at = point.to_vec();
+        }
+        value
+    }
+
+    /// Halves the piece across the unknown that costs most, at a place where its curve changes if
+    /// there is one inside; `None` when no unknown can be halved any further.
+    fn split(&self, piece: &Piece) -> Option<(Vec<Interval>, Vec<Interval>)> {
+        let mut worst = None;
+        let mut most = f64::NEG_INFINITY;
+        for (i, (range, slope)) in piece.ranges.iter().zip(&piece.slopes).enumerate() {
+            let width = range.width();
+            // A place between the ends must exist, and be worth finding.
+            if range.is_point() || width <= 1e-13 * range.magnitude() {
+                continue;
+            }
+            let cost = slope.magnitude().min(f64::MAX) * width;
+            if cost > most {
+                most = cost;
+                worst = Some(i);
+            }
+        }
+        let i = worst?;
+        let range = piece.ranges[i];
+        let middle = range.mid();
+        let at = self.breaks[i]
+            .iter()
+            .copied()
+            .filter(|&b| range.lo() < b && b < range.hi())
+            .min_by(|a, b| (a - middle).abs().total_cmp(&(b - middle).abs()))
+            .unwrap_or(middle);
+        let part = |r: Interval| {
+            let mut ranges = piece.ranges.clone();
+            ranges[i] = r;
+            ranges
+        };
+        Some((part(Interval::new(range.lo(), at)), part(Interval::new(at, range.hi()))))
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::numeric::{Number, Recorded};
+
+    fn ranges(pairs: &[(f64, f64)]) -> Vec<Interval> {
+        pairs.iter().map(|&(a, b)| Interval::new(a, b)).collect()
+    }
+
+    #[test]
+    fn a_sum_takes_its_corners_at_once() {
+        let tape = Tape::of(3, |x| x[0].clone() - x[1].clone() * 2.0 - x[2].clone());
+        let e = extremes(&tape, &ranges(&[(1.0, 2.0), (0.0, 0.5), (-1.0, 1.0)]), 1e-12);
+        assert!((e.least.bound + 1.0).abs() < 1e-14 && (e.greatest.bound - 3.0).abs() < 1e-14);
+        assert_eq!(e.least.at, [1.0, 0.5, 1.0]);
+        assert_eq!(e.greatest.at, [2.0, 0.0, -1.0]);
+    }
+
+    #[test]
+    fn an_extreme_inside_the_box_is_found() {
+        // x·sin x on 0 … 3 is greatest where tan x = −x, at x = 2.028757838110434.
+        let tape = Tape::of(1, |x| x[0].clone() * x[0].clone().sin());
+        let e = extremes(&tape, &ranges(&[(0.0, 3.0)]), 1e-10);
+        assert!(e.greatest.met);
+        assert!((e.greatest.bound - 1.819_705_741_159_653).abs() < 2e-10);
+        assert!((e.greatest.at[0] - 2.028_757_838).abs() < 1e-4);
+    }
+
+    #[test]
+    fn common_unknowns_cancel() {
+        let tape = Tape::of(2, |x| x[0].clone() * x[1].clone() - x[0].clone());
+        let e = extremes(&tape, &ranges(&[(10.0, 10.1), (0.999, 1.001)]), 1e-12);
+        assert!((e.greatest.bound - 0.0101).abs() < 1e-12);
+        assert!((e.least.bound + 0.0101).abs() < 1e-12);
+    }
+
+    #[test]
+    fn where_a_formula_is_undefined_nothing_is_claimed() {
+        let tape = Tape::of(1, |x| Recorded::exact(1.0) / x[0].clone());
+        let e = extremes(&tape, &ranges(&[(-1.0, 1.0)]), 1e-9);
+        assert!(!e.greatest.met && e.greatest.bound == f64::INFINITY);
+        assert!(!e.least.met && e.least.bound == f64::NEG_INFINITY);
+    }
+
+    #[test]
+    fn a_kink_is_no_obstacle() {
+        let tape = Tape::of(2, |x| x[0].clone().max(Recorded::exact(0.0)) * x[1].clone());
+        let e = extremes(&tape, &ranges(&[(-1.0, 2.0), (-0.5, 0.5)]), 1e-9);
+        assert!((e.greatest.bound - 1.0).abs() < 2e-9 && (e.least.bound + 1.0).abs() < 2e-9);
+    }
+}
