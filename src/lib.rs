@@ -4,6 +4,7 @@
 //! which `tests/tidy.rs` holds.
 
 pub mod diagnostic;
+pub mod evaluate;
 pub mod materials;
 pub mod mechanics;
 pub mod model;

@@ -1,0 +1,206 @@
+//! What an evaluation gives: figures for every subject at every condition, and verdicts. SI
+//! throughout; a bound is never on the safe side of what was proven.
+
+use crate::model::{ConditionId, Owner, PartId, Quantity, SubjectId, Unknown};
+
+/// Everything that was computed of one assembly.
+#[derive(Debug, Clone, Default)]
+pub struct Evaluation {
+    /// Figures: each subject's quantities, subject by subject, condition by condition.
+    pub figures: Vec<Figure>,
+    /// One for each requirement at each of its conditions, in the order of the spec.
+    pub verdicts: Vec<Verdict>,
+    /// Temperatures of every part and fill at every condition.
+    pub temperatures: Vec<PartTemperature>,
+    /// Temperatures outside what a material's data cover.
+    pub beyond_data: Vec<BeyondData>,
+    /// What a quantity needs and no material says.
+    pub missing: Vec<Missing>,
+    /// Each `one of` set that some requirement depends on.
+    pub selections: Vec<Selection>,
+}
+
+/// The range of one quantity of a subject at a condition.
+#[derive(Debug, Clone)]
+pub struct Figure {
+    /// Of what.
+    pub subject: SubjectId,
+    /// Which quantity.
+    pub quantity: Quantity,
+    /// Where; `None` for what has no condition.
+    pub condition: Option<ConditionId>,
+    /// The member of each `one of` set it was computed with.
+    pub members: Vec<Chosen>,
+    /// True where the quantity is a stress as a share of yield.
+    pub of_yield: bool,
+    /// Its range.
+    pub range: Range,
+}
+
+/// A member taken from a `one of` set.
+#[derive(Debug, Clone, Copy, PartialEq)]
+pub struct Chosen {
+    /// The set.
+    pub dimension: crate::model::DimensionId,
+    /// Which member, from 0.
+    pub member: u32,
+}
+
+/// Proven range of a quantity with its middle.
+#[derive(Debug, Clone, PartialEq)]
+pub struct Range {
+    /// Least value: bound proven.
+    pub least: End,
+    /// Value with everything in the middle of its limits.
+    pub mean: f64,
+    /// Greatest value: bound proven.
+    pub greatest: End,
+}
+
+/// One end of a range.
+#[derive(Debug, Clone, PartialEq)]
+pub struct End {
+    /// No value lies beyond.
+    pub bound: f64,
+    /// A value at or beyond this occurs.
+    pub reached: f64,
+    /// True when the two have met.
+    pub met: bool,
+    /// Where it is reached.
+    pub corner: Vec<(Unknown, f64)>,
+}
+
+/// Whether a requirement holds at a condition.
+#[derive(Debug, Clone)]
+pub struct Verdict {
+    /// Index of the requirement in the assembly.
+    pub requirement: usize,
+    /// Where; `None` for what has no condition.
+    pub condition: Option<ConditionId>,
+    /// Index of its figure in the evaluation; `None` where nothing could be computed.
+    pub figure: Option<usize>,
+    /// How it stands.
+    pub outcome: Outcome,
+    /// The limit that is nearer, or further passed.
+    pub governing: Side,
+    /// Distance to that limit, in the quantity's SI unit; negative when passed. Not a number where
+    /// nothing could be computed.
+    pub margin: f64,
+    /// What the range is made of, largest share first.
+    pub contributors: Vec<Contributor>,
+    /// Where it would hold if the temperatures were other ones.
+    pub window: Option<Window>,
+}
+
+/// How a requirement stands.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+pub enum Outcome {
+    /// Proven for everything the limits allow.
+    Holds,
+    /// A case that the limits allow is proven to break it.
+    Fails,
+    /// Neither could be proven.
+    Undecided,
+}
+
+/// One of two ends.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+pub enum Side {
+    /// The least value and the lower limit.
+    Least,
+    /// The greatest value and the upper limit.
+    Greatest,
+}
+
+/// What one unknown does to a quantity.
+#[derive(Debug, Clone, PartialEq)]
+pub struct Contributor {
+    /// Which.
+    pub unknown: Unknown,
+    /// Derivative of the quantity in the middle, in SI units of both.
+    pub sensitivity: f64,
+    /// Part of the range that it makes, in the quantity's SI unit; all of them sum to the range.
+    pub part: f64,
+    /// The same as a share of the range, 0 … 1.
+    pub share_of_range: f64,
+}
+
+/// The temperatures at which a requirement holds, as proven intervals of the scale λ, in
+/// `T = Tref + λ·(T − Tref)` of every part. Issued with the temperature unit by the report.
+#[derive(Debug, Clone, PartialEq)]
+pub struct Window {
+    /// The intervals in K where all parts share one temperature; open ends are infinite.
+    pub intervals: Vec<(f64, f64)>,
+    /// True where parts have unequal temperatures, so that the numbers are λ and not K.
+    pub scaled: bool,
+}
+
+/// The temperature of a part or fill at a condition.
+#[derive(Debug, Clone, PartialEq)]
+pub struct PartTemperature {
+    /// Whose.
+    pub owner: Owner,
+    /// Where.
+    pub condition: ConditionId,
+    /// Least, K.
+    pub least: f64,
+    /// Greatest, K.
+    pub greatest: f64,
+}
+
+/// A part that gets colder or hotter than its material's data go.
+#[derive(Debug, Clone, PartialEq)]
+pub struct BeyondData {
+    /// Which part.
+    pub part: PartId,
+    /// Where.
+    pub condition: ConditionId,
+    /// Its temperatures there, K.
+    pub temperature: (f64, f64),
+    /// What the data cover, K.
+    pub valid: (f64, f64),
+    /// True where the material says `extrapolate`, so that figures are given all the same.
+    pub extrapolated: bool,
+}
+
+/// A property that a quantity needs and a material does not state.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, PartialOrd, Ord)]
+pub struct Missing {
+    /// Of which subject.
+    pub subject: SubjectId,
+    /// Whose material.
+    pub part: PartId,
+    /// Which property.
+    pub property: Property,
+}
+
+/// Properties that a quantity may need.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, PartialOrd, Ord)]
+pub enum Property {
+    /// Young's modulus.
+    Modulus,
+    /// Poisson's ratio.
+    Poisson,
+    /// Yield strength.
+    Yield,
+    /// Density.
+    Density,
+    /// Bulk modulus.
+    BulkModulus,
+}
+
+/// Whether a `one of` set has a member for every assembly.
+#[derive(Debug, Clone)]
+pub struct Selection {
+    /// The set.
+    pub dimension: crate::model::DimensionId,
+    /// The requirements that contain it, by index.
+    pub requirements: Vec<usize>,
+    /// For each member, the values of the first requirement's quantity at reference, without the
+    /// set, for which that member meets all of them: least and greatest, empty where least is above.
+    pub covers: Vec<(f64, f64)>,
+    /// The values that occur: least and greatest.
+    pub occurs: (f64, f64),
+    /// How it stands.
+    pub outcome: Outcome,
+}
