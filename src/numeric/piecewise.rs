@@ -184,8 +184,7 @@ impl Piecewise {
     /// The curve plus the product of two, all three of the same breaks and centres.
     fn plus_product(&self, a: &Piecewise, b: &Piecewise) -> Self {
         let pieces = self.pieces.iter().zip(&a.pieces).zip(&b.pieces);
-        let pieces =
-            pieces.map(|((s, a), b)| s.polynomial.sum(&a.polynomial.product(&b.polynomial)));
+        let pieces = pieces.map(|((s, a), b)| s.polynomial.plus(&a.polynomial.by(&b.polynomial)));
         let mut sum = Piecewise::assembled(self.breaks.clone(), pieces.collect());
         sum.steps_above.clone_from(&self.steps_above);
         sum

@@ -90,15 +90,23 @@ impl Polynomial {
         self
     }
 
-    /// Sum and product of two polynomials that share their centre.
-    pub(super) fn sum(&self, other: &Self) -> Self {
+    /// The polynomial that is `x` itself, about the same centre.
+    #[must_use]
+    pub fn identity(&self) -> Self {
+        Polynomial::new(self.centre, vec![self.centre, 1.0])
+    }
+
+    /// The sum with a polynomial of the same centre.
+    #[must_use]
+    pub fn plus(&self, other: &Self) -> Self {
         let length = self.coefficients.len().max(other.coefficients.len());
         let pick = |p: &Self, k: usize| p.coefficients.get(k).copied().unwrap_or(0.0);
         Polynomial::new(self.centre, (0..length).map(|k| pick(self, k) + pick(other, k)).collect())
     }
 
-    /// See [`Polynomial::sum`].
-    pub(super) fn product(&self, other: &Self) -> Self {
+    /// The product with a polynomial of the same centre.
+    #[must_use]
+    pub fn by(&self, other: &Self) -> Self {
         let length = (self.coefficients.len() + other.coefficients.len()).saturating_sub(1);
         let mut product = vec![0.0; length];
         for (i, a) in self.coefficients.iter().enumerate() {
