@@ -13,6 +13,7 @@
 //! | [`Lanes`] | eight draws at a time |
 //! | [`Recorded`] | the formula itself, as a [`Tape`] that any of the others replays |
 
+pub mod complex;
 pub mod curve;
 pub mod distribution;
 pub mod dual;
@@ -22,6 +23,8 @@ pub mod lanes;
 pub mod number;
 pub mod piecewise;
 pub mod probability;
+pub mod quadrature;
+pub mod special;
 pub mod tape;
 pub mod tolerance;
 
