@@ -24,6 +24,7 @@ pub mod number;
 pub mod piecewise;
 pub mod probability;
 pub mod quadrature;
+pub mod random;
 pub mod special;
 pub mod tape;
 pub mod tolerance;

@@ -1,0 +1,14 @@
+//! Draws: random numbers that any thread can make for any draw of any unknown, and the loop that
+//! runs them over all cores with the same digits out for any number of threads.
+//!
+//! Knows nothing of what is drawn. The numbers are keyed, not drawn in turn: an unknown's draw
+//! depends on the seed, the unknown's key and the draw's number only, so that adding an unknown to
+//! a study leaves the draws of the others as they were.
+
+mod normal;
+mod run;
+mod stream;
+
+pub use normal::fast_normal_quantile;
+pub use run::{BLOCK, Merge, Moments, monte_carlo};
+pub use stream::Stream;
