@@ -1,3 +1,4 @@
 //! The integration tests: one binary, one module a subject.
 
 mod published;
+mod syntax;

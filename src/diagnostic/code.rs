@@ -35,6 +35,12 @@ codes! {
     StrayBrace = "stray-brace", Error;
     /// A string without its closing quote.
     UnclosedString = "unclosed-string", Error;
+    /// A clause or line that may stand once and stands twice.
+    StatedTwice = "stated-twice", Error;
+    /// A name that has a meaning of its own.
+    ReservedName = "reserved-name", Error;
+    /// A temperature written with a plus, which may be a difference.
+    SignedTemperature = "signed-temperature", Error;
     /// A comma where a decimal point is meant.
     DecimalComma = "decimal-comma", Error;
     /// Blocks nested deeper than the language allows.

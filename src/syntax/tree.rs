@@ -16,7 +16,7 @@ pub mod quantity;
 pub mod requirement;
 pub mod response;
 
-pub use condition::{Condition, Override, OwnTemperature, Speed, ThermalState};
+pub use condition::{Condition, Override, OwnTemperature, Sense, Speed, ThermalState};
 pub use expression::{Count, Expr, ExprKind, Operator, Path, Term};
 pub use head::{DecimalRow, Decimals, Drawing, General, GeneralKind};
 pub use material::{
