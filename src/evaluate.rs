@@ -1,7 +1,187 @@
 //! From the model to figures and verdicts: what every quantity can be at every condition, proven.
 //!
-//! Knows nothing of source texts, words or formats. SI throughout.
+//! A quantity is recorded once as a tape over its unknowns ([`scene`]), whatever it is; everything
+//! else (extremes, contributors, statistics, windows) works on tapes and knows no formula. Knows
+//! nothing of source texts, words or formats. SI throughout.
 
+mod contributor;
+mod data_range;
+mod elastic;
+mod expression;
+mod figure;
+mod joint;
 pub mod outcome;
+mod quantity;
+mod ranges;
+mod restraint;
+pub mod scene;
+mod selection;
+mod size;
+mod temperature;
+mod verdict;
 
+use crate::model::{Assembly, ConditionId, Quantity, SubjectId, SubjectKind};
+use figure::Asked;
 pub use outcome::Evaluation;
+use outcome::{Chosen, Outcome, Side, Verdict};
+use scene::{Response, Unable};
+
+/// How much is wanted besides figures and verdicts.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+pub enum Detail {
+    /// Contributors only of what does not hold.
+    Brief,
+    /// Contributors of everything.
+    Full,
+}
+
+/// Evaluates every quantity of an assembly at every condition, and every requirement.
+pub fn evaluate(assembly: &Assembly, detail: Detail) -> Evaluation {
+    let mut run =
+        Run { assembly, detail, responses: Vec::new(), evaluation: Evaluation::default() };
+    run.evaluation.temperatures = data_range::temperatures(assembly);
+    run.evaluation.beyond_data = data_range::beyond(assembly, &run.evaluation.temperatures);
+    for subject in assembly.subject_ids() {
+        run.subject(subject);
+    }
+    for index in 0..assembly.requirements.len() {
+        run.requirement(index);
+    }
+    selection::settle(assembly, &mut run.evaluation);
+    run.evaluation.missing.sort();
+    run.evaluation.missing.dedup();
+    run.evaluation
+}
+
+struct Run<'a> {
+    assembly: &'a Assembly,
+    detail: Detail,
+    /// One for each figure.
+    responses: Vec<Response>,
+    evaluation: Evaluation,
+}
+
+impl Run<'_> {
+    /// Figures of a subject at every condition, for each choice from the sets it contains.
+    fn subject(&mut self, subject: SubjectId) {
+        let choices = selection::choices(self.assembly, subject);
+        for quantity in self.shown_quantities(subject) {
+            for condition in self.conditions(quantity) {
+                for members in &choices {
+                    self.figure(Asked {
+                        subject,
+                        quantity,
+                        condition,
+                        of_yield: false,
+                        members: members.clone(),
+                    });
+                }
+            }
+        }
+    }
+
+    /// What a report shows of a subject even if nothing is required of it.
+    fn shown_quantities(&self, subject: SubjectId) -> Vec<Quantity> {
+        match &self.assembly.subject(subject).kind {
+            SubjectKind::Gap(_) => vec![Quantity::Gap],
+            SubjectKind::Result(_) => vec![Quantity::Value],
+            SubjectKind::Fit(fit) => match &fit.joint {
+                None => vec![Quantity::Clearance],
+                Some(joint) => joint::quantities(joint),
+            },
+            SubjectKind::Restraint(r) => restraint::quantities(r),
+            SubjectKind::Fill(_) => vec![Quantity::Ullage],
+        }
+    }
+
+    fn conditions(&self, quantity: Quantity) -> Vec<Option<ConditionId>> {
+        if quantity.is_unconditional() {
+            vec![None]
+        } else {
+            self.assembly.condition_ids().map(Some).collect()
+        }
+    }
+
+    /// The index of a figure, computed now if it is not there yet; `None` where it cannot be.
+    fn figure(&mut self, asked: Asked) -> Option<usize> {
+        let there = self.evaluation.figures.iter().position(|f| {
+            f.subject == asked.subject
+                && f.quantity == asked.quantity
+                && f.condition == asked.condition
+                && f.of_yield == asked.of_yield
+                && f.members == asked.members
+        });
+        if there.is_some() {
+            return there;
+        }
+        let subject = asked.subject;
+        match figure::compute(self.assembly, &self.evaluation.beyond_data, asked) {
+            Ok((figure, response)) => {
+                self.evaluation.figures.push(figure);
+                self.responses.push(response);
+                Some(self.responses.len() - 1)
+            }
+            Err(Unable::Missing(part, property)) => {
+                self.evaluation.missing.push(outcome::Missing { subject, part, property });
+                None
+            }
+            Err(Unable::BeyondData) => None,
+        }
+    }
+
+    fn requirement(&mut self, index: usize) {
+        let assembly = self.assembly;
+        let requirement = &assembly.requirements[index];
+        let conditions: Vec<Option<ConditionId>> = if requirement.quantity.is_unconditional() {
+            vec![None]
+        } else {
+            requirement.conditions.iter().map(|&c| Some(c)).collect()
+        };
+        let of_yield =
+            [&requirement.lower, &requirement.upper].into_iter().flatten().any(|l| l.of_yield);
+        // Requirements on sets are judged over all members at once, afterwards; they stand here
+        // with the first.
+        let members: Vec<Chosen> = selection::choices(assembly, requirement.subject).swap_remove(0);
+        for condition in conditions {
+            let figure = self.figure(Asked {
+                subject: requirement.subject,
+                quantity: requirement.quantity,
+                condition,
+                of_yield,
+                members: members.clone(),
+            });
+            self.evaluation.verdicts.push(match figure {
+                None => Verdict {
+                    requirement: index,
+                    condition,
+                    figure: None,
+                    outcome: Outcome::Undecided,
+                    governing: Side::Least,
+                    margin: f64::NAN,
+                    contributors: Vec::new(),
+                    window: None,
+                },
+                Some(at) => {
+                    let range = &self.evaluation.figures[at].range;
+                    let judged = verdict::judge(range, requirement);
+                    let wanted = self.detail == Detail::Full || judged.outcome != Outcome::Holds;
+                    let contributors = if wanted {
+                        contributor::contributors(&self.responses[at], range)
+                    } else {
+                        Vec::new()
+                    };
+                    Verdict {
+                        requirement: index,
+                        condition,
+                        figure: Some(at),
+                        outcome: judged.outcome,
+                        governing: judged.governing,
+                        margin: judged.margin,
+                        contributors,
+                        window: None,
+                    }
+                }
+            });
+        }
+    }
+}

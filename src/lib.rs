@@ -5,6 +5,7 @@
 
 pub mod diagnostic;
 pub mod evaluate;
+pub mod findings;
 pub mod materials;
 pub mod mechanics;
 pub mod model;

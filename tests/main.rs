@@ -1,4 +1,8 @@
 //! The integration tests: one binary, one module a subject.
 
+// A test that cannot go on should say so at once.
+#![allow(clippy::unwrap_used, clippy::expect_used)]
+
+mod interval_laws;
 mod published;
 mod syntax;

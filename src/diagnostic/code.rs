@@ -47,6 +47,74 @@ codes! {
     NestedTooDeep = "nested-too-deep", Error;
     /// A file that is not UTF-8 or holds NUL bytes.
     NotText = "not-text", Error;
+
+    /// A fit with less clearance than required.
+    ClearanceBelowLimit = "clearance-below-limit", Error;
+    /// A fit with more clearance than required.
+    ClearanceAboveLimit = "clearance-above-limit", Error;
+    /// A fit with less interference than required.
+    InterferenceBelowLimit = "interference-below-limit", Error;
+    /// A fit with more interference than required.
+    InterferenceAboveLimit = "interference-above-limit", Error;
+    /// A gap or separation narrower than required.
+    GapBelowLimit = "gap-below-limit", Error;
+    /// A gap or separation wider than required.
+    GapAboveLimit = "gap-above-limit", Error;
+    /// A result below its limit.
+    ResultBelowLimit = "result-below-limit", Error;
+    /// A result above its limit.
+    ResultAboveLimit = "result-above-limit", Error;
+    /// A pressure or stress below its limit.
+    StressBelowLimit = "stress-below-limit", Error;
+    /// A pressure or stress above its limit.
+    StressAboveLimit = "stress-above-limit", Error;
+    /// A force or torque below its limit.
+    ForceBelowLimit = "force-below-limit", Error;
+    /// A force or torque above its limit.
+    ForceAboveLimit = "force-above-limit", Error;
+    /// A joining or loosening temperature below its limit.
+    TemperatureBelowLimit = "temperature-below-limit", Error;
+    /// A joining or loosening temperature above its limit.
+    TemperatureAboveLimit = "temperature-above-limit", Error;
+    /// A cavity with less free volume than required.
+    UllageBelowLimit = "ullage-below-limit", Error;
+    /// A cavity with more free volume than required.
+    UllageAboveLimit = "ullage-above-limit", Error;
+    /// A requirement that could be proven neither to hold nor to fail.
+    NotDecided = "not-decided", Error;
+    /// A part colder or hotter than its material's data go.
+    TemperatureOutsideData = "temperature-outside-data", Error;
+    /// Figures beyond a material's data, as its `extrapolate` allows.
+    DataExtrapolated = "data-extrapolated", Warning;
+    /// A property that a quantity needs and a material does not state.
+    MissingProperty = "missing-property", Error;
+    /// Scatter in per cent of a coefficient of expansion near zero.
+    RelativeScatterNearZero = "relative-scatter-near-zero", Warning;
+    /// Free parts that would have to pass through each other.
+    ContactBeyondFreeExpansion = "contact-beyond-free-expansion", Note;
+    /// A set to select from that serves not every assembly.
+    SelectionIncomplete = "selection-incomplete", Error;
+    /// A departure that is accepted for now.
+    ConcessionInForce = "concession-in-force", Note;
+    /// A departure that was accepted once.
+    ConcessionExpired = "concession-expired", Error;
+    /// A departure greater than what was accepted.
+    ConcessionExceeded = "concession-exceeded", Error;
+    /// A concession for a requirement that holds.
+    ConcessionUnused = "concession-unused", Warning;
+}
+
+impl Code {
+    /// True for what is said of a requirement; every other error is a mistake in the spec itself.
+    pub fn is_about_requirement(self) -> bool {
+        let first = Code::ClearanceBelowLimit as u32;
+        let last = Code::NotDecided as u32;
+        (first..=last).contains(&(self as u32))
+            || matches!(
+                self,
+                Code::SelectionIncomplete | Code::ConcessionExpired | Code::ConcessionExceeded
+            )
+    }
 }
 
 impl std::fmt::Display for Code {

@@ -122,23 +122,21 @@ impl Interval {
         self.intersection(Interval { lo, hi }).unwrap_or(self)
     }
 
-    /// Sine by the extremes inside, which stand at π/2 + kπ.
-    fn sine(self) -> Interval {
-        use std::f64::consts::{FRAC_PI_2, PI};
+    /// Range of a sine or cosine, whose greatest values stand at `top + 2kπ` and least at
+    /// `top + (2k+1)π`.
+    fn wave(self, f: fn(f64) -> f64, top: f64) -> Interval {
+        use std::f64::consts::PI;
         if !self.is_bounded() || self.width() > 6.0 || self.magnitude() > 1e6 {
             return Interval { lo: -1.0, hi: 1.0 };
         }
-        let ends = widened(
-            libm::sin(self.lo).min(libm::sin(self.hi)),
-            libm::sin(self.lo).max(libm::sin(self.hi)),
-        );
+        let (a, b) = (f(self.lo), f(self.hi));
+        let ends = widened(a.min(b), a.max(b));
         let (mut lo, mut hi) = (ends.lo, ends.hi);
         // The quotient is off by far less than this at |x| < 1e6; too wide a margin only adds an
         // extreme that the end values nearly reach anyway.
         const MARGIN: f64 = 1e-9;
-        let first = libm::ceil((self.lo - FRAC_PI_2) / PI - MARGIN);
-        let last = libm::floor((self.hi - FRAC_PI_2) / PI + MARGIN);
-        let mut k = first;
+        let mut k = libm::ceil((self.lo - top) / PI - MARGIN);
+        let last = libm::floor((self.hi - top) / PI + MARGIN);
         while k <= last {
             if libm::fmod(k.abs(), 2.0) == 0.0 {
                 hi = 1.0;
@@ -304,14 +302,10 @@ impl Number for Interval {
         if self.lo <= 0.0 { Interval::ENTIRE } else { self.increasing(libm::log) }
     }
     fn sin(self) -> Self {
-        self.sine()
+        self.wave(libm::sin, std::f64::consts::FRAC_PI_2)
     }
     fn cos(self) -> Self {
-        // cos x = sin(x + π/2); the sum is taken outward, so the enclosure holds.
-        if self == Interval::ZERO {
-            return Interval::point(1.0);
-        }
-        (self + Interval::pi() / 2.0).sine()
+        self.wave(libm::cos, 0.0)
     }
     fn tan(self) -> Self {
         use std::f64::consts::{FRAC_PI_2, PI};

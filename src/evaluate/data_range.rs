@@ -1,0 +1,62 @@
+//! Temperatures of all parts, and where they leave the data of their materials. K.
+
+use super::outcome::{BeyondData, PartTemperature};
+use super::scene::{At, Scene};
+use super::temperature;
+use crate::model::{Assembly, Owner, PartId, SubjectId, SubjectKind};
+use crate::numeric::Interval;
+
+/// A temperature may lie this far beyond the data, K: 293 K and 20 °C are the same to every table.
+const SLACK: f64 = 0.2;
+
+/// The temperature of every part and fill at every condition.
+pub(crate) fn temperatures(assembly: &Assembly) -> Vec<PartTemperature> {
+    let parts = (0..assembly.parts.len() as u32).map(|i| Owner::Part(PartId(i)));
+    let fills = (0..assembly.subjects.len() as u32)
+        .map(SubjectId)
+        .filter(|&s| matches!(assembly.subject(s).kind, SubjectKind::Fill(_)))
+        .map(Owner::Fill);
+    let owners: Vec<Owner> = parts.chain(fills).collect();
+    let mut list = Vec::new();
+    for condition in assembly.condition_ids() {
+        for &owner in &owners {
+            let range = hull(assembly, At::Condition(condition), owner);
+            list.push(PartTemperature {
+                owner,
+                condition,
+                least: range.lo(),
+                greatest: range.hi(),
+            });
+        }
+    }
+    list
+}
+
+fn hull(assembly: &Assembly, at: At, owner: Owner) -> Interval {
+    // Each unknown occurs once in a temperature, so the natural enclosure is the hull.
+    match Scene::record(assembly, &[], &[], |scene| Ok(temperature::of(scene, at, owner))) {
+        Ok(response) => response.tape.value(&response.ranges),
+        Err(_) => Interval::ENTIRE,
+    }
+}
+
+/// The parts that leave the data of their materials.
+pub(crate) fn beyond(assembly: &Assembly, temperatures: &[PartTemperature]) -> Vec<BeyondData> {
+    let mut list = Vec::new();
+    for t in temperatures {
+        let Owner::Part(part) = t.owner else { continue };
+        let material = &assembly.part(part).material;
+        let valid = material.valid();
+        let (from, to) = (valid.lo(), valid.hi());
+        if t.least < from - SLACK || t.greatest > to + SLACK {
+            list.push(BeyondData {
+                part,
+                condition: t.condition,
+                temperature: (t.least, t.greatest),
+                valid: (from, to),
+                extrapolated: material.extrapolate,
+            });
+        }
+    }
+    list
+}

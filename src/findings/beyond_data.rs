@@ -1,0 +1,55 @@
+//! `temperature-outside-data`, `data-extrapolated`: a part colder or hotter than what is known of
+//! its material.
+
+use super::number::{Round, with_unit};
+use super::words;
+use crate::diagnostic::{Code, Diagnostic};
+use crate::evaluate::Evaluation;
+use crate::model::Assembly;
+
+pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec<Diagnostic>) {
+    let unit = assembly.defaults.temperature;
+    let range = |(from, to): (f64, f64)| {
+        format!("{} .. {}", with_unit(from, unit, Round::Down), with_unit(to, unit, Round::Up))
+    };
+    for beyond in &evaluation.beyond_data {
+        let part = assembly.part(beyond.part);
+        let condition = assembly.condition(beyond.condition);
+        let reached = if beyond.temperature.0 == beyond.temperature.1 {
+            with_unit(beyond.temperature.0, unit, Round::Nearest)
+        } else {
+            range(beyond.temperature)
+        };
+        let valid = format!(
+            "{} .. {}",
+            with_unit(beyond.valid.0, unit, Round::Nearest),
+            with_unit(beyond.valid.1, unit, Round::Nearest)
+        );
+        let source = match part.material.sources().first() {
+            Some(source) => format!(", {source}"),
+            None => String::new(),
+        };
+        let message = format!(
+            "{} reaches {reached} at {}, outside the data of {}",
+            words::name(&part.name),
+            words::name(&condition.name),
+            words::name(&part.material.name)
+        );
+        let (code, help) = if beyond.extrapolated {
+            (Code::DataExtrapolated, "figures beyond the data are an extrapolation".to_string())
+        } else {
+            (
+                Code::TemperatureOutsideData,
+                "take a material with data that far, or write one `like` it with `extrapolate` and \
+                 answer for it"
+                    .to_string(),
+            )
+        };
+        found.push(
+            Diagnostic::new(code, condition.span, message)
+                .here(reached)
+                .label(part.material_span, format!("known over {valid}{source}"))
+                .help(help),
+        );
+    }
+}

@@ -1,0 +1,51 @@
+//! `selection-incomplete`: assemblies for which no member of a `one of` set fits.
+
+use super::number::{Round, with_unit};
+use super::words;
+use crate::diagnostic::{Code, Diagnostic};
+use crate::evaluate::Evaluation;
+use crate::evaluate::outcome::Outcome;
+use crate::model::Assembly;
+
+pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec<Diagnostic>) {
+    for selection in evaluation.selections.iter().filter(|s| s.outcome != Outcome::Holds) {
+        let dimension = assembly.dimension(selection.dimension);
+        let unit = assembly.defaults.length;
+        let mut diagnostic = Diagnostic::new(
+            Code::SelectionIncomplete,
+            dimension.line,
+            format!(
+                "{} has no member for some assemblies",
+                words::name(&assembly.path(selection.dimension))
+            ),
+        )
+        .here(format!(
+            "needed from {} to {}",
+            with_unit(selection.occurs.0, unit, Round::Down),
+            with_unit(selection.occurs.1, unit, Round::Up)
+        ));
+        for &index in &selection.requirements {
+            diagnostic = diagnostic.label(assembly.requirements[index].span, "contains it");
+        }
+        let covered: Vec<String> = dimension
+            .members
+            .iter()
+            .zip(&selection.covers)
+            .map(|(member, (from, to))| {
+                let member = with_unit(*member, unit, Round::Nearest);
+                if from <= to {
+                    format!(
+                        "{member} serves {} .. {}",
+                        with_unit(*from, unit, Round::Up),
+                        with_unit(*to, unit, Round::Down)
+                    )
+                } else {
+                    format!("{member} serves none")
+                }
+            })
+            .collect();
+        found.push(
+            diagnostic.help(format!("add a member where they leave room: {}", covered.join("; "))),
+        );
+    }
+}
