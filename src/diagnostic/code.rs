@@ -48,6 +48,41 @@ codes! {
     /// A file that is not UTF-8 or holds NUL bytes.
     NotText = "not-text", Error;
 
+    /// A name of a condition that nothing defines.
+    UnknownCondition = "unknown-condition", Error;
+    /// A name of a part that nothing defines.
+    UnknownPart = "unknown-part", Error;
+    /// A unit that the language does not know.
+    UnknownUnit = "unknown-unit", Error;
+    /// A unit that means different things to different people, such as `mil`.
+    AmbiguousUnit = "ambiguous-unit", Error;
+    /// A number without the unit it needs.
+    UnitMissing = "unit-missing", Error;
+    /// A unit whose reach can be read in two ways, as in `58 ±50 um`.
+    UnitScope = "unit-scope", Error;
+    /// A quantity of another kind than its place asks for.
+    WrongKind = "wrong-kind", Error;
+    /// A range whose first end is the greater.
+    LimitsReversed = "limits-reversed", Error;
+    /// Two limit deviations that leave nothing between them.
+    DeviationsEqual = "deviations-equal", Error;
+    /// A spread of a value that has no limits.
+    SpreadOfNothing = "spread-of-nothing", Error;
+    /// A number that no such quantity can have.
+    ValueOutOfRange = "value-out-of-range", Error;
+    /// A temperature below absolute zero.
+    BelowAbsoluteZero = "below-absolute-zero", Error;
+    /// A path to a file that is not there.
+    FileMissing = "file-missing", Error;
+    /// A path out of the root of the run.
+    FileOutside = "file-outside", Error;
+    /// A file that is there and cannot be read.
+    FileUnreadable = "file-unreadable", Error;
+    /// A table whose rows and columns are not what its use asks for.
+    TableShape = "table-shape", Error;
+    /// A cell of a table that holds no number.
+    TableCell = "table-cell", Error;
+
     /// A fit with less clearance than required.
     ClearanceBelowLimit = "clearance-below-limit", Error;
     /// A fit with more clearance than required.

@@ -1,0 +1,86 @@
+//! Units as spelled: known or not, of the right kind or not.
+
+use super::{Context, Expect};
+use crate::diagnostic::{Code, Diagnostic};
+use crate::resolve::context::suggest;
+use crate::syntax::tree;
+use crate::units::{self, Kind, Unit};
+
+/// Spellings that mean one thing in one shop and another in the next.
+const AMBIGUOUS: [(&str, &str); 6] = [
+    ("mil", "a `mil` is a thousandth of an inch or a millimetre: write `thou` or `mm`"),
+    ("mils", "`mils` are thousandths of an inch or millimetres: write `thou` or `mm`"),
+    ("tenth", "a `tenth` is a tenth of a thou or of a millimetre: write `0.1 thou` or `0.1 mm`"),
+    ("tenths", "`tenths` are of a thou or of a millimetre: write `0.1 thou` or `0.1 mm`"),
+    ("grad", "a `grad` is a gon or, in some languages, a degree: write `deg`"),
+    ("deg.", "write `deg` for an angle, `degC` or `degF` for a temperature"),
+];
+
+/// The unit of that spelling, or a finding.
+pub(crate) fn unit(cx: &mut Context, written: &tree::Unit) -> Option<&'static Unit> {
+    let spelling = written.value.as_str();
+    if let Some(unit) = units::find(spelling) {
+        return Some(unit);
+    }
+    if let Some((_, help)) = AMBIGUOUS.iter().find(|(name, _)| *name == spelling) {
+        return cx.refuse(
+            Diagnostic::new(
+                Code::AmbiguousUnit,
+                written.span,
+                format!("`{spelling}` means different lengths to different people"),
+            )
+            .help(*help),
+        );
+    }
+    let mut finding =
+        Diagnostic::new(Code::UnknownUnit, written.span, format!("unknown unit `{spelling}`"));
+    let names =
+        units::all().flat_map(|u| std::iter::once(u.name).chain(u.spellings.iter().copied()));
+    if let Some(near) = suggest(spelling, names.filter(|n| !n.is_empty())) {
+        finding = finding.help(format!("did you mean `{near}`?"));
+    }
+    cx.refuse(finding)
+}
+
+/// The unit of that spelling, if it measures what is expected; else a finding.
+pub(crate) fn unit_for(
+    cx: &mut Context,
+    written: &tree::Unit,
+    expect: Expect,
+) -> Option<&'static Unit> {
+    let unit = unit(cx, written)?;
+    if measures(unit, expect) {
+        return Some(unit);
+    }
+    let finding = wrong_kind(written, unit, expect.kind());
+    cx.refuse(finding)
+}
+
+/// True where a unit measures what is expected; temperatures and their differences share units.
+pub(super) fn measures(unit: &Unit, expect: Expect) -> bool {
+    let wanted = expect.kind();
+    let of_temperature = |k: Kind| k == Kind::TEMPERATURE || k == Kind::DIFFERENCE;
+    unit.kind == wanted
+        || of_temperature(unit.kind) && of_temperature(wanted)
+        || Kind { tag: wanted.tag, ..unit.kind } == wanted && unit.kind == Kind::TORQUE
+}
+
+/// A unit that measures something else than is expected.
+pub(crate) fn wrong_kind(written: &tree::Unit, unit: &Unit, expected: Kind) -> Diagnostic {
+    let finding = Diagnostic::new(
+        Code::WrongKind,
+        written.span,
+        format!(
+            "expected a {}, found `{}`, a unit of {}",
+            expected.word(),
+            written.value,
+            unit.kind.word()
+        ),
+    );
+    // The grade of a class is easily forgotten, and `42 K` is then a temperature.
+    let letters = written.value.as_str();
+    if expected == Kind::LENGTH && letters.len() == 1 && unit.kind == Kind::TEMPERATURE {
+        return finding.help(format!("a class needs its grade, as `{letters}6`"));
+    }
+    finding
+}
