@@ -16,6 +16,27 @@ use crate::diagnostic::Diagnostic;
 use crate::span::FileId;
 pub use decode::{NotText, decode};
 
+/// The words that begin a statement.
+const STATEMENT_WORDS: [&str; 17] = [
+    "assembly",
+    "drawing",
+    "lengths",
+    "temperatures",
+    "reference",
+    "general",
+    "use",
+    "note",
+    "condition",
+    "material",
+    "part",
+    "fit",
+    "gap",
+    "result",
+    "let",
+    "restraint",
+    "fill",
+];
+
 /// A tree, and what is wrong with the text it was read from.
 #[derive(Debug, Clone, PartialEq, Default)]
 pub struct Parsed {

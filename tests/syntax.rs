@@ -1,5 +1,7 @@
 //! Text to tree: whole specs, mistakes, hostile input, layout, and the language page.
 
+mod hostile;
+mod mistakes;
 mod whole;
 
 use std::path::{Path, PathBuf};

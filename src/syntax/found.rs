@@ -20,8 +20,9 @@ pub(super) fn token(text: &str, at: usize) -> &str {
     } else if first == '\r' {
         0
     } else {
-        let sign =
-            ["..", ">=", "<=", "+/-", "+-", "=="].into_iter().find(|sign| rest.starts_with(sign));
+        let sign = ["..", ">=", "<=", "+/-", "+-", "==", "=>", "=<"]
+            .into_iter()
+            .find(|sign| rest.starts_with(sign));
         sign.map_or(first.len_utf8(), str::len)
     };
     &rest[..end]

@@ -9,7 +9,7 @@ use super::grammar::{self, Node, Place, Rule};
 use super::layout::{Layout, Line, word_at};
 use super::lower::Lower;
 use super::tree::{Broken, File, Name};
-use super::{Parsed, layout};
+use super::{Parsed, STATEMENT_WORDS, layout};
 use crate::diagnostic::{Code, Diagnostic};
 use crate::span::{FileId, Span, Spanned};
 
@@ -112,7 +112,13 @@ impl<'a> Reader<'a> {
             let diagnostic = Diagnostic::new(Code::SyntaxError, span, message);
             let first = self.first_word(line);
             let meant = words.iter().find(|word| word.eq_ignore_ascii_case(first)).copied();
+            let rest = &self.text[self.after_first_word(line)..line.end];
+            let dimension = !first.is_empty() && rest.starts_with('=') && words.contains(&"part");
             let help = match meant.or_else(|| expected::nearest(first, words)) {
+                _ if dimension => {
+                    "a dimension stands in the block of its part: is a brace missing above?"
+                        .to_owned()
+                }
                 Some(word) => format!("did you mean `{word}`?"),
                 None => {
                     let quoted: Vec<String> =
@@ -128,7 +134,7 @@ impl<'a> Reader<'a> {
     /// Keeps what a broken line seems to define.
     fn broken(&mut self, line: &Line) {
         let first = self.first_word(line);
-        let name = if file::WORDS.contains(&first) && !self.second_word(line).is_empty() {
+        let name = if STATEMENT_WORDS.contains(&first) && !self.second_word(line).is_empty() {
             let start = self.after_first_word(line);
             Some((self.second_word(line), start))
         } else {

@@ -308,9 +308,10 @@ impl<'a> Scanner<'a> {
         diagnostic = match next {
             Some(next) => {
                 let word = self.span(next, next + word_at(self.text, next).len());
+                let name = word_at(self.text, next);
                 diagnostic
                     .label(word, "this cannot stand inside of the block")
-                    .help("add a `}` before this line")
+                    .help(format!("add a `}}` before the line of `{name}`"))
             }
             None => diagnostic.help("add a `}` at the end of the block"),
         };

@@ -23,7 +23,12 @@ impl Lower {
             let place = child.span();
             match child.rule() {
                 Rule::string => id = Some(string(&child)),
-                Rule::measure => measure = Some(Measure { words: names(child), span: place }),
+                Rule::measure => {
+                    measure = Some(Measure {
+                        words: child.children().map(|word| spelled(&word)).collect(),
+                        span: place,
+                    })
+                }
                 Rule::limit => limit = Some(self.limit(child)?),
                 Rule::at_conditions => {
                     self.once(

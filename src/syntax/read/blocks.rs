@@ -126,6 +126,11 @@ impl Reader<'_> {
             "friction" => Rule::friction_line,
             "insertion" => Rule::insertion_line,
             "inner" | "outer" => Rule::ring_line,
+            _ if self.second_word(line).is_empty() => {
+                let words = ["length", "friction", "insertion", "inner", "outer"];
+                self.unknown(line, &words, "a line of a joint");
+                return None;
+            }
             _ => Rule::surface_line,
         };
         self.lone(line, rule, Lower::joint_line)

@@ -5,27 +5,7 @@ use super::super::layout::Line;
 use super::super::lower::Lower;
 use super::super::tree::{GeneralKind, Statement};
 use super::Reader;
-
-/// The words that begin a statement.
-pub(super) const WORDS: [&str; 17] = [
-    "assembly",
-    "drawing",
-    "lengths",
-    "temperatures",
-    "reference",
-    "general",
-    "use",
-    "note",
-    "condition",
-    "material",
-    "part",
-    "fit",
-    "gap",
-    "result",
-    "let",
-    "restraint",
-    "fill",
-];
+use crate::syntax::STATEMENT_WORDS;
 
 impl Reader<'_> {
     /// Reads a file-level statement with its block.
@@ -62,7 +42,7 @@ impl Reader<'_> {
             "restraint" => self.restraint(line),
             "fill" => self.fill(line),
             _ => {
-                self.unknown(line, &WORDS, "a statement");
+                self.unknown(line, &STATEMENT_WORDS, "a statement");
                 None
             }
         }

@@ -1,0 +1,1 @@
+condition reference 20

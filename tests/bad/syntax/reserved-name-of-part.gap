@@ -1,0 +1,1 @@
+part ambient of alloy { length = 3 ±0.1 }

@@ -1,0 +1,3 @@
+part housing of alloy { bore = 42 ±0.1 }
+}
+lengths in mm

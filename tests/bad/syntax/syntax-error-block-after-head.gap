@@ -1,0 +1,2 @@
+lengths in mm {
+}

@@ -1,0 +1,4 @@
+gap g = a.b {
+  require >= 0.1 {
+  }
+}

@@ -1,0 +1,1 @@
+part housing: alloy { bore = 42 ±0.1 }

@@ -1,0 +1,1 @@
+gap g = a.b - 2x (c.d + e.f)

@@ -1,0 +1,1 @@
+gap g = a.b - 0x shim.thickness

@@ -1,0 +1,1 @@
+gap g = a.b - 3 x shim.thickness

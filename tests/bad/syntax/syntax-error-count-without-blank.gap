@@ -1,0 +1,1 @@
+gap g = a.b - 2xlength

@@ -1,0 +1,2 @@
+gap g =
+let v = 1

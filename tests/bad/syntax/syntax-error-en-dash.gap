@@ -1,0 +1,1 @@
+condition service -40 – 85

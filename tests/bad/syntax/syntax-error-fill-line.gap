@@ -1,0 +1,3 @@
+fill tank {
+  cavty of body 240 cm3
+}

@@ -1,0 +1,1 @@
+fit f = a.b - c.d

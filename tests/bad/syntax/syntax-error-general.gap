@@ -1,0 +1,1 @@
+general ISO 2769-m

@@ -1,0 +1,5 @@
+fit f = a.b in c.d {
+  joint {
+    lenght 20
+  }
+}

@@ -1,0 +1,1 @@
+gap g = a.b { require "R-1" 0.05 }

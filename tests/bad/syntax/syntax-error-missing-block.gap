@@ -1,0 +1,1 @@
+restraint clamp

@@ -1,0 +1,1 @@
+part housing { bore = 42 ±0.1 }

@@ -1,0 +1,2 @@
+gap g = (a.b - c.d
+let v = 1

@@ -1,0 +1,4 @@
+part housing of alloy {
+  bore =
+  depth = 3 ±0.1
+}

@@ -1,0 +1,1 @@
+lengths in

@@ -1,0 +1,1 @@
+part housing off alloy { bore = 42 ±0.1 }

@@ -1,0 +1,1 @@
+part 2nd of alloy

@@ -1,0 +1,1 @@
+gap end-float = a.b - c.d

@@ -1,0 +1,1 @@
+condition hot 85 { shaft }

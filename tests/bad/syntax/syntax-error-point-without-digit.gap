@@ -1,0 +1,1 @@
+part housing of alloy { bore = 5. ±0.1 }

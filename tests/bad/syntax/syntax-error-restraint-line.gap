@@ -1,0 +1,3 @@
+restraint clamp {
+  squeezd a.b area 160 mm2
+}

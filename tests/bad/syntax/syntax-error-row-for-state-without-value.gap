@@ -1,0 +1,1 @@
+material alloy { swell { dry; wet 0.8 % } }

@@ -1,0 +1,3 @@
+material alloy {
+  expansion { 20 0 5 }
+}

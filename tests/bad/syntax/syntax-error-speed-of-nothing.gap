@@ -1,0 +1,1 @@
+condition hot 85 { speed 18000 rpm of }

@@ -1,0 +1,1 @@
+part housing of alloy { bore = 42 ±0.1 basis guessed }

@@ -1,0 +1,3 @@
+material alloy {
+  cet 23.4 ppm/K
+}

@@ -1,0 +1,1 @@
+prat housing of alloy { bore = 42 ±0.1 }

@@ -1,0 +1,1 @@
+Part housing of alloy { bore = 42 ±0.1 }

@@ -1,0 +1,2 @@
+assembly "Wheel
+lengths in mm
