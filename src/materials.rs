@@ -5,10 +5,13 @@
 //! whoever evaluates reads its curves.
 
 mod expansion;
+mod library;
 mod log_polynomial;
 mod property;
+pub mod yaml;
 
-pub use expansion::{Expansion, Expansions, Form, Per};
+pub use expansion::{Expansion, Expansions, Form, Per, Stretch};
+pub use library::Library;
 pub use property::{Grade, Property, Scatter, Source, SwellState};
 
 use crate::numeric::Interval;
@@ -41,6 +44,8 @@ pub struct Material {
     /// Free strain from moisture; the first state is that of the drawing. Empty where it does not
     /// swell.
     pub swell: Vec<SwellState>,
+    /// Temperatures in which it changes length abruptly, K: a size stated there means little.
+    pub transition: Option<Interval>,
     /// True where data may be continued outside their range, which every report then says.
     pub extrapolate: bool,
     /// What to beware of.
@@ -65,6 +70,7 @@ impl Material {
             bulk_modulus: None,
             limit: None,
             swell: Vec::new(),
+            transition: None,
             extrapolate: false,
             cautions: Vec::new(),
             source: None,
@@ -95,7 +101,8 @@ impl Material {
             .expansion
             .each()
             .into_iter()
-            .map(|(_, expansion)| expansion.source.as_ref())
+            .flat_map(|(_, expansion)| expansion.sources_within(Interval::ENTIRE))
+            .map(Some)
             .chain(properties.into_iter().flatten().map(|p| p.source.as_ref()))
             .chain([self.source.as_ref()]);
         for source in named.flatten() {

@@ -92,6 +92,19 @@ pub struct Expansion {
     pub range: Interval,
     /// Where the data come from, if not from where the material's do.
     pub source: Option<Source>,
+    /// Stretches of temperature (K) that come from elsewhere, as a hot end added to cryogenic data.
+    pub elsewhere: Vec<(Interval, Source)>,
+}
+
+/// One polynomial of several that follow each other.
+#[derive(Debug, Clone)]
+pub struct Stretch {
+    /// Up to which temperature it holds, K.
+    pub to: f64,
+    /// ΔL/L₀ against temperature in K.
+    pub polynomial: Polynomial,
+    /// True where it carries on from where the one before ends, whatever its own constant is.
+    pub continues: bool,
 }
 
 /// Absolute temperatures: what a constant without a stated range holds over.
@@ -105,6 +118,7 @@ impl Expansion {
             scatter: Scatter::NONE,
             range: Interval::new(lo, hi),
             source: None,
+            elsewhere: Vec::new(),
         }
     }
 
@@ -180,23 +194,31 @@ impl Expansion {
         Ok(Expansion::new(curve, Form::Total, extent(table)))
     }
 
-    /// Polynomials for ΔL/L₀, the first from `lo`, each up to the temperature beside it. Where two
-    /// do not meet, the curve steps.
+    /// Polynomials for ΔL/L₀, the first from `lo`, each up to its own end. Where one neither meets
+    /// nor continues the one before, the curve steps.
     ///
     /// # Errors
     /// When there is none, the temperatures do not rise, or a number is not finite.
-    pub fn polynomials(lo: f64, pieces: &[(f64, Polynomial)]) -> Result<Self, TableError> {
-        let (Some((_, first)), Some((hi, last))) = (pieces.first(), pieces.last()) else {
+    pub fn polynomials(lo: f64, stretches: &[Stretch]) -> Result<Self, TableError> {
+        let tangent = |p: &Polynomial, x: f64| Polynomial::line(x, p.at(x), p.derivative().at(x));
+        let mut rest: Vec<(f64, Polynomial)> = Vec::with_capacity(stretches.len() + 1);
+        let mut from = lo;
+        for stretch in stretches {
+            let mut polynomial = stretch.polynomial.clone();
+            if let (true, Some((_, before))) = (stretch.continues, rest.last()) {
+                let missing = before.at(from) - polynomial.at(from);
+                polynomial = polynomial.raised_by(missing);
+            }
+            rest.push((from, polynomial));
+            from = stretch.to;
+        }
+        let (Some((_, first)), Some((_, last))) = (rest.first(), rest.last()) else {
             return Err(TableError::TooFew { found: 0, needed: 1 });
         };
-        let tangent = |p: &Polynomial, x: f64| Polynomial::line(x, p.at(x), p.derivative().at(x));
-        let ends = pieces.iter().map(|(to, _)| *to);
-        let starts = std::iter::once(lo).chain(ends);
-        let mut rest: Vec<(f64, Polynomial)> =
-            starts.zip(pieces.iter().map(|(_, p)| p.clone())).collect();
-        rest.push((*hi, tangent(last, *hi)));
-        let curve = Piecewise::joined(tangent(first, lo), rest)?;
-        Ok(Expansion::new(curve, Form::Polynomial, (lo, *hi)))
+        let (before, after) = (tangent(first, lo), tangent(last, from));
+        rest.push((from, after));
+        let curve = Piecewise::joined(before, rest)?;
+        Ok(Expansion::new(curve, Form::Polynomial, (lo, from)))
     }
 
     /// ΔV/V₀ of a fluid from a table of (T, density): `ρ₀/ρ − 1` at the entries, ρ₀ being the first,
@@ -230,6 +252,21 @@ impl Expansion {
     pub fn from(mut self, source: Source) -> Self {
         self.source = Some(source);
         self
+    }
+
+    /// Every source of the data within `span`, K, each once; the general one first.
+    pub fn sources_within(&self, span: Interval) -> Vec<&Source> {
+        let meets = |range: &Interval| {
+            range.intersection(span).is_some_and(|common| common.width() > 0.0 || span.is_point())
+        };
+        let elsewhere = self.elsewhere.iter().filter(|(range, _)| meets(range));
+        let mut sources: Vec<&Source> = self.source.iter().collect();
+        for (_, source) in elsewhere {
+            if !sources.contains(&source) {
+                sources.push(source);
+            }
+        }
+        sources
     }
 
     /// The mean coefficient from `from` to `to`, K, on the length at `from`, 1/K.
