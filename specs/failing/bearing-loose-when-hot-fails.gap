@@ -1,0 +1,17 @@
+# The same kind of seat as in the gearbox, with the class that the catalogue suggests for a steel
+# housing. In aluminium the ring is loose from about 60 °C on.
+assembly "Conveyor drum, bearing in an aluminium hub"
+lengths in mm
+temperatures in degC
+
+condition cold -30
+condition shop  20
+condition hot   90 ±5 { ring 10 K above hub }
+
+part hub of aluminium_6082_t6 { bore = dia 62 N7 }
+part ring of steel_100cr6 { outside = dia 62 0/-0.013 }
+
+fit seat = ring.outside in hub.bore {
+  require "CD-1" clearance <= 0.015
+    because "the ring must not creep"
+}
