@@ -6,6 +6,7 @@
 
 mod contributor;
 mod data_range;
+mod depends;
 mod elastic;
 mod expression;
 mod figure;
@@ -19,6 +20,7 @@ mod selection;
 mod size;
 mod temperature;
 mod verdict;
+mod window;
 
 use crate::model::{Assembly, ConditionId, Quantity, SubjectId, SubjectKind};
 use figure::Asked;
@@ -48,6 +50,7 @@ pub fn evaluate(assembly: &Assembly, detail: Detail) -> Evaluation {
         run.requirement(index);
     }
     selection::settle(assembly, &mut run.evaluation);
+    run.windows();
     run.evaluation.missing.sort();
     run.evaluation.missing.dedup();
     run.evaluation
@@ -182,6 +185,18 @@ impl Run<'_> {
                     }
                 }
             });
+        }
+    }
+
+    /// Temperature windows of what is looked into.
+    fn windows(&mut self) {
+        for at in 0..self.evaluation.verdicts.len() {
+            let verdict = &self.evaluation.verdicts[at];
+            let wanted = self.detail == Detail::Full || verdict.outcome != Outcome::Holds;
+            let Some(figure) = verdict.figure.filter(|_| wanted) else { continue };
+            let members = &self.evaluation.figures[figure].members;
+            let found = window::window(self.assembly, verdict, members);
+            self.evaluation.verdicts[at].window = found;
         }
     }
 }

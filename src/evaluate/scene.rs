@@ -41,12 +41,21 @@ pub enum Unable {
     BeyondData,
 }
 
+/// How the temperatures of a condition are moved away from what the spec states, tolerances kept.
+#[derive(Debug, Clone)]
+pub(crate) enum Shift {
+    /// Every part to this temperature, K.
+    Common(Recorded),
+    /// Every departure from the reference temperature by this factor.
+    Scaled(Recorded),
+}
+
 /// A recording under way.
 pub(crate) struct Scene<'a> {
     pub(crate) assembly: &'a Assembly,
     members: RefCell<Vec<Chosen>>,
     beyond: &'a [BeyondData],
-    scale: Option<Recorded>,
+    shift: Option<Shift>,
     recorder: Recorder,
     met: RefCell<Vec<(Unknown, Recorded)>>,
 }
@@ -60,12 +69,26 @@ impl<'a> Scene<'a> {
         beyond: &'a [BeyondData],
         quantity: impl FnOnce(&Scene<'a>) -> Result<Recorded, Unable>,
     ) -> Result<Response, Unable> {
+        Scene::record_shifted(assembly, members, beyond, |_| None, quantity)
+    }
+
+    /// Records as [`Scene::record`] does, with temperatures moved by a variable that becomes the
+    /// first input of the tape (and stands in no list of unknowns).
+    pub(crate) fn record_shifted(
+        assembly: &'a Assembly,
+        members: &[Chosen],
+        beyond: &'a [BeyondData],
+        shift: impl FnOnce(&Recorder) -> Option<Shift>,
+        quantity: impl FnOnce(&Scene<'a>) -> Result<Recorded, Unable>,
+    ) -> Result<Response, Unable> {
+        let recorder = Recorder::new();
+        let shift = shift(&recorder);
         let scene = Scene {
             assembly,
             members: RefCell::new(members.to_vec()),
             beyond,
-            scale: None,
-            recorder: Recorder::new(),
+            shift,
+            recorder,
             met: RefCell::default(),
         };
         let result = quantity(&scene)?;
@@ -91,9 +114,9 @@ impl<'a> Scene<'a> {
         variable
     }
 
-    /// The factor on every departure from the reference temperature, where one is set.
-    pub(crate) fn scale(&self) -> Option<&Recorded> {
-        self.scale.as_ref()
+    /// How temperatures are moved, if they are.
+    pub(crate) fn shift(&self) -> Option<&Shift> {
+        self.shift.as_ref()
     }
 
     /// The member chosen from a `one of` set.

@@ -9,59 +9,20 @@
 //! `undecided` unless no member serves the extreme assembly itself.
 
 use super::outcome::{Chosen, Evaluation, Outcome, Selection};
-use super::quantity;
 use super::scene::{At, Scene};
-use crate::model::{
-    Assembly, ConditionId, DimensionId, Expr, ExprKind, Requirement, SubjectId, SubjectKind,
-};
+use super::{depends, quantity};
+use crate::model::{Assembly, ConditionId, DimensionId, Requirement, SubjectId};
 use crate::numeric::Recorded;
 use crate::numeric::extremes::{Extremes, extremes};
 use crate::numeric::tolerance::{EXTREME_GAP, LIMIT_SLACK};
-use std::collections::BTreeSet;
 
 /// Most combinations of members of several sets that one subject is computed for.
 const MOST_CHOICES: usize = 64;
 
-/// The sets that a subject contains, directly or through other subjects.
+/// The sets that a subject contains.
 pub(crate) fn sets(assembly: &Assembly, subject: SubjectId) -> Vec<DimensionId> {
-    let mut found = BTreeSet::new();
-    collect(assembly, subject, &mut BTreeSet::new(), &mut found);
-    found.into_iter().collect()
-}
-
-fn collect(
-    assembly: &Assembly,
-    subject: SubjectId,
-    seen: &mut BTreeSet<SubjectId>,
-    found: &mut BTreeSet<DimensionId>,
-) {
-    if !seen.insert(subject) {
-        return;
-    }
-    let mut below = Vec::new();
-    let mut visit = |e: &Expr| match e.kind {
-        ExprKind::Size { dimension, .. }
-        | ExprKind::Pieces { dimension, .. }
-        | ExprKind::After { dimension, .. }
-            if !assembly.dimension(dimension).members.is_empty() =>
-        {
-            found.insert(dimension);
-        }
-        ExprKind::Clearance(fit) | ExprKind::Play(fit) => below.push(fit),
-        _ => {}
-    };
-    match &assembly.subject(subject).kind {
-        SubjectKind::Gap(e) | SubjectKind::Result(e) => e.walk(&mut visit),
-        SubjectKind::Fit(fit) => {
-            fit.external.walk(&mut visit);
-            fit.internal.walk(&mut visit);
-        }
-        SubjectKind::Restraint(r) => r.members.iter().for_each(|m| m.length.walk(&mut visit)),
-        SubjectKind::Fill(f) => f.volume.iter().for_each(|v| v.walk(&mut visit)),
-    }
-    for fit in below {
-        collect(assembly, fit, seen, found);
-    }
+    let contained = depends::dimensions(assembly, subject).into_iter();
+    contained.filter(|&d| !assembly.dimension(d).members.is_empty()).collect()
 }
 
 /// Every choice of members that a subject is computed for; one empty choice where it has no sets.

@@ -1,7 +1,7 @@
 //! Temperatures of parts and fills, K.
 
-use super::scene::{At, Scene};
-use crate::model::{Condition, ConditionId, OwnTemperature, Owner, Thermal, Unknown};
+use super::scene::{At, Scene, Shift};
+use crate::model::{Assembly, Condition, ConditionId, OwnTemperature, Owner, Thermal, Unknown};
 use crate::numeric::{Number, Recorded};
 
 /// The temperature of a part or fill in a state of the world.
@@ -12,10 +12,27 @@ pub(crate) fn of(scene: &Scene<'_>, at: At, owner: Owner) -> Recorded {
     let reference = Recorded::exact(scene.assembly.reference);
     let At::Condition(id) = at else { return reference };
     let real = in_condition(scene, id, owner);
-    match scene.scale() {
-        Some(scale) => reference.clone() + scale.clone() * (real - reference),
+    match scene.shift() {
         None => real,
+        // A range is not a tolerance about its middle: it is asked point by point.
+        Some(Shift::Common(temperature)) if scene.assembly.condition(id).is_range() => {
+            temperature.clone()
+        }
+        Some(Shift::Common(temperature)) => {
+            temperature.clone() + (real - at_middle(scene.assembly, id, owner))
+        }
+        Some(Shift::Scaled(factor)) => {
+            let middle = at_middle(scene.assembly, id, owner);
+            let departure = factor.clone() * (middle - scene.assembly.reference);
+            reference + departure + (real - middle)
+        }
     }
+}
+
+/// The temperature of a part or fill in a condition with everything in the middle of its limits, K.
+pub(crate) fn at_middle(assembly: &Assembly, id: ConditionId, owner: Owner) -> f64 {
+    let recorded = Scene::record(assembly, &[], &[], |scene| Ok(in_condition(scene, id, owner)));
+    recorded.map_or(assembly.reference, |r| r.tape.value(&r.middle))
 }
 
 fn in_condition(scene: &Scene<'_>, id: ConditionId, owner: Owner) -> Recorded {

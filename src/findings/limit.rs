@@ -104,6 +104,9 @@ fn finding(
         let others: Vec<String> = broken[1..].iter().map(|b| at_condition(assembly, b)).collect();
         here.push_str(&format!("; also {}", others.join(", ")));
     }
+    if let Some(window) = &worst.verdict.window {
+        here.push_str(&format!("; {}", words::window(assembly, window)));
+    }
     let mut diagnostic =
         Diagnostic::new(code(requirement.quantity, side), requirement.span, message).here(here);
     if broken.iter().all(|b| standing(assembly, evaluation, b.verdict, today) == Standing::Conceded)

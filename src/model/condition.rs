@@ -106,6 +106,11 @@ impl Condition {
             .or(self.moisture.as_deref())
     }
 
+    /// True where it is stated as every temperature of a range, not as one with a tolerance.
+    pub fn is_range(&self) -> bool {
+        matches!(self.thermal, Thermal::Uniform(_)) && self.written.contains("..")
+    }
+
     /// True for a temperature without tolerance, range or history.
     pub fn is_single(&self) -> bool {
         matches!(&self.thermal, Thermal::Uniform(t) if t.is_exact())
