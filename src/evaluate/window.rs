@@ -114,7 +114,7 @@ struct Search<'a> {
 
 impl Search<'_> {
     fn look(&mut self, from: f64, to: f64, sliver: f64) {
-        if !(from <= to) || self.pieces >= MOST_PIECES {
+        if from > to || self.pieces >= MOST_PIECES {
             return;
         }
         self.pieces += 1;
