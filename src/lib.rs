@@ -10,6 +10,7 @@ pub mod materials;
 pub mod mechanics;
 pub mod model;
 pub mod numeric;
+pub mod report;
 pub mod resolve;
 pub mod source;
 pub mod span;

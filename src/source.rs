@@ -39,6 +39,12 @@ impl Source {
         (line, column + 1)
     }
 
+    /// Offset of the first byte of a line (from 1); the end of the text past the last line.
+    pub fn line_start(&self, line: usize) -> usize {
+        let start = line.checked_sub(1).and_then(|i| self.line_starts.get(i));
+        start.map_or(self.text.len(), |&start| start as usize)
+    }
+
     /// The text of a line (from 1) without its line end; empty past the last line.
     pub fn line(&self, line: usize) -> &str {
         let start = match line.checked_sub(1).and_then(|i| self.line_starts.get(i)) {

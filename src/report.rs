@@ -1,0 +1,4 @@
+//! Renderings of a run.
+pub mod diagnostic;
+pub mod look;
+mod wrap;
