@@ -1,4 +1,211 @@
-//! Renderings of a run.
+//! One plain account of a run, from which every rendering is a pure function.
+//!
+//! An account names things in words and keeps figures in SI with the unit they are shown in; it
+//! holds no index into the model. Renderings differ in form only: all show the same findings. Must
+//! not know the syntax tree, files or the terminal.
+
+mod account;
+mod basis;
+mod cause;
+mod coordinate;
 pub mod diagnostic;
 pub mod look;
-mod wrap;
+pub mod summary;
+pub mod text;
+pub mod wire;
+pub(crate) mod wrap;
+
+use crate::diagnostic::Diagnostic;
+use crate::findings::Standing;
+use crate::source::Sources;
+use crate::units::Unit;
+pub use account::account;
+pub use basis::{Assumption, Grounds, MaterialNote, PartTemperature};
+pub use cause::Cause;
+pub use coordinate::Coordinate;
+
+/// Everything one run has to say.
+#[derive(Debug, Clone, Default)]
+pub struct Report {
+    /// One for each spec, in the order they were named.
+    pub specs: Vec<Spec>,
+}
+
+/// What there is to say about one spec.
+#[derive(Debug, Clone)]
+pub struct Spec {
+    /// Its file, relative to the root of the run.
+    pub file: String,
+    /// The texts that its findings point into.
+    pub sources: Sources,
+    /// Its figures; `None` where mistakes in the spec left nothing to compute.
+    pub account: Option<Account>,
+    /// What is wrong or worth knowing, in the order of the spec.
+    pub findings: Vec<Diagnostic>,
+}
+
+/// The figures of one assembly.
+#[derive(Debug, Clone)]
+pub struct Account {
+    /// The words after `assembly`.
+    pub title: String,
+    /// Drawing number and revision, if stated.
+    pub drawing: Option<(String, String)>,
+    /// Free remarks.
+    pub notes: Vec<String>,
+    /// Unit of temperatures.
+    pub temperature: &'static Unit,
+    /// Temperature the sizes are stated at, K.
+    pub reference: f64,
+    /// Name of each condition and what was written after it.
+    pub conditions: Vec<(String, String)>,
+    /// The range of each quantity at each condition, subject by subject.
+    pub figures: Vec<Figure>,
+    /// Each requirement at each of its conditions, in the order of the spec.
+    pub cases: Vec<Case>,
+    /// What the figures rest on.
+    pub grounds: Grounds,
+}
+
+/// The range of one quantity of a subject at a condition. Values are SI.
+#[derive(Debug, Clone)]
+pub struct Figure {
+    /// The name of the subject.
+    pub subject: String,
+    /// `fit`, `gap`, `result`, `restraint` or `fill`.
+    pub kind: &'static str,
+    /// The word of the quantity.
+    pub quantity: String,
+    /// Across what a length is measured.
+    pub measure: Option<Measure>,
+    /// The condition; `None` for what has none.
+    pub condition: Option<String>,
+    /// The member of each `one of` set it was computed with: name and size, SI.
+    pub members: Vec<(String, f64)>,
+    /// The unit it is shown in.
+    pub unit: &'static Unit,
+    /// No value lies below.
+    pub least: f64,
+    /// Value with everything in the middle of its limits.
+    pub mean: f64,
+    /// No value lies above.
+    pub greatest: f64,
+    /// True where values that near to both bounds are known to occur.
+    pub met: bool,
+    /// What kind of fit it is there, for fits.
+    pub character: Option<&'static str>,
+    /// Where the least value is reached.
+    pub least_at: Vec<Coordinate>,
+    /// Where the greatest value is reached.
+    pub greatest_at: Vec<Coordinate>,
+    /// True for what is shown only on demand unless something is required of it.
+    pub secondary: bool,
+}
+
+/// Across what a length is measured.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+pub enum Measure {
+    /// Across a round feature.
+    Diametral,
+    /// From its axis.
+    Radial,
+    /// Along a straight line.
+    Linear,
+}
+
+impl Measure {
+    /// The word for it.
+    pub fn word(self) -> &'static str {
+        match self {
+            Measure::Diametral => "diametral",
+            Measure::Radial => "radial",
+            Measure::Linear => "linear",
+        }
+    }
+}
+
+/// One requirement at one of its conditions. Values are SI.
+#[derive(Debug, Clone)]
+pub struct Case {
+    /// Counts the requirements of the spec from 0; cases of one requirement share it.
+    pub requirement: usize,
+    /// The id, if given.
+    pub id: Option<String>,
+    /// The id, or subject and quantity.
+    pub name: String,
+    /// The name of the subject.
+    pub subject: String,
+    /// The word of the quantity.
+    pub quantity: String,
+    /// Across what a length is measured.
+    pub measure: Option<Measure>,
+    /// The condition; `None` for what has none.
+    pub condition: Option<String>,
+    /// How it is shown to hold, in words.
+    pub method: String,
+    /// The limits, as written.
+    pub limits: String,
+    /// Least allowed value.
+    pub lower: Option<f64>,
+    /// Greatest allowed value.
+    pub upper: Option<f64>,
+    /// The unit it is shown in.
+    pub unit: &'static Unit,
+    /// Index of its figure; `None` where nothing could be computed.
+    pub figure: Option<usize>,
+    /// Distance to the nearer limit, negative when passed; not a number where nothing could be
+    /// computed.
+    pub margin: f64,
+    /// The margin as a share of what it is measured against (see [`Case::against`]).
+    pub reserve: Option<f64>,
+    /// How it stands, concessions taken into account.
+    pub standing: Standing,
+    /// The reason given.
+    pub because: Option<String>,
+    /// Id, last day and approver of a concession.
+    pub concession: Option<String>,
+    /// What the range is made of, largest share first.
+    pub contributors: Vec<Contribution>,
+    /// The mean here minus the mean at reference.
+    pub thermal_shift: Option<f64>,
+    /// Temperatures at which it would hold, K, open ends infinite; multiples of the condition's
+    /// distance from reference where `window_scaled`.
+    pub window: Option<Vec<(f64, f64)>>,
+    /// True where parts have unequal temperatures.
+    pub window_scaled: bool,
+}
+
+impl Case {
+    /// What a margin is measured against: the width of what is allowed where both limits are given,
+    /// else the size of the limit, else, where that is zero, the width of the range.
+    pub fn against(lower: Option<f64>, upper: Option<f64>, range: f64) -> f64 {
+        match (lower, upper) {
+            (Some(lower), Some(upper)) if upper > lower => upper - lower,
+            (Some(limit), _) | (_, Some(limit)) if limit != 0.0 => limit.abs(),
+            _ => range,
+        }
+    }
+}
+
+/// What one unknown does to a quantity.
+#[derive(Debug, Clone)]
+pub struct Contribution {
+    /// What it is.
+    pub name: String,
+    /// Its tolerance as written, where it has one in the spec.
+    pub written: String,
+    /// Which cause it belongs to.
+    pub cause: Cause,
+    /// Where its number comes from, if not from a drawing.
+    pub basis: Option<&'static str>,
+    /// Change of the quantity for each unit of the unknown, both in the units shown.
+    pub sensitivity: f64,
+    /// Unit of the unknown.
+    pub unit: &'static str,
+    /// Part of the range that it makes, SI.
+    pub part: f64,
+    /// The same as a share of the range.
+    pub share_of_range: f64,
+    /// Share of the variance, where statistics were asked for.
+    pub share_of_variance: Option<f64>,
+}

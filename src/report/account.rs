@@ -1,0 +1,263 @@
+//! From model and evaluation to an account in words. Values stay SI, each with its unit.
+
+use super::basis::grounds;
+use super::cause::Cause;
+use super::coordinate::{coordinates, scale};
+use super::{Account, Case, Contribution, Figure, Measure};
+use crate::evaluate::Evaluation;
+use crate::evaluate::outcome::{self, Verdict};
+use crate::findings::{standing, words};
+use crate::model::{
+    Assembly, Basis, Condition, Expr, ExprKind, Form, Method, Quantity, Requirement, Subject,
+    SubjectId, SubjectKind, Unknown,
+};
+use crate::units::{Kind, Unit, find};
+
+/// The account of an evaluated assembly on the day `today` (`YYYY-MM-DD`).
+pub fn account(assembly: &Assembly, evaluation: &Evaluation, today: &str) -> Account {
+    let figures = evaluation.figures.iter().map(|f| figure(assembly, f)).collect();
+    let cases = evaluation.verdicts.iter().map(|v| case(assembly, evaluation, v, today)).collect();
+    let written = |c: &Condition| (c.name.clone(), c.written.clone());
+    Account {
+        title: assembly.title.clone(),
+        drawing: assembly.drawing.as_ref().map(|d| (d.number.clone(), d.revision.clone())),
+        notes: assembly.notes.clone(),
+        temperature: assembly.defaults.temperature,
+        reference: assembly.reference,
+        conditions: assembly.conditions.iter().map(written).collect(),
+        figures,
+        cases,
+        grounds: grounds(assembly, evaluation),
+    }
+}
+
+fn figure(assembly: &Assembly, figure: &outcome::Figure) -> Figure {
+    let subject = assembly.subject(figure.subject);
+    let range = &figure.range;
+    let member = |c: &outcome::Chosen| {
+        let set = assembly.dimension(c.dimension);
+        let size = set.members.get(c.member as usize).copied().unwrap_or(set.nominal);
+        (assembly.path(c.dimension), size)
+    };
+    Figure {
+        subject: subject.name.clone(),
+        kind: kind_word(subject),
+        quantity: words::quantity(assembly, figure.quantity),
+        measure: measure(assembly, figure.subject, figure.quantity),
+        condition: figure.condition.map(|c| assembly.condition(c).name.clone()),
+        members: figure.members.iter().map(member).collect(),
+        unit: unit(assembly, figure),
+        least: range.least.bound,
+        mean: range.mean,
+        greatest: range.greatest.bound,
+        met: range.least.met && range.greatest.met,
+        character: character(figure),
+        least_at: coordinates(assembly, &range.least.corner),
+        greatest_at: coordinates(assembly, &range.greatest.corner),
+        secondary: !matches!(
+            figure.quantity,
+            Quantity::Clearance
+                | Quantity::Interference
+                | Quantity::RadialClearance
+                | Quantity::Gap
+                | Quantity::Value
+                | Quantity::Ullage
+        ),
+    }
+}
+
+/// The word a subject is declared with.
+fn kind_word(subject: &Subject) -> &'static str {
+    match subject.kind {
+        SubjectKind::Fit(_) => "fit",
+        SubjectKind::Gap(_) => "gap",
+        SubjectKind::Result(_) => "result",
+        SubjectKind::Restraint(_) => "restraint",
+        SubjectKind::Fill(_) => "fill",
+    }
+}
+
+/// The unit of a figure: that of a requirement on it, else the one its kind is shown in.
+fn unit(assembly: &Assembly, figure: &outcome::Figure) -> &'static Unit {
+    let required = assembly
+        .requirements
+        .iter()
+        .find(|r| r.subject == figure.subject && r.quantity == figure.quantity)
+        .filter(|r| of_yield(r) == figure.of_yield);
+    if let Some(requirement) = required {
+        return requirement.unit;
+    }
+    let share = figure.of_yield || figure.quantity == Quantity::Ullage;
+    match find("%") {
+        Some(percent) if share => percent,
+        _ => assembly.defaults.shown(kind(assembly, figure.subject, figure.quantity)),
+    }
+}
+
+fn of_yield(requirement: &Requirement) -> bool {
+    [&requirement.lower, &requirement.upper].into_iter().flatten().any(|l| l.of_yield)
+}
+
+/// The kind of a quantity; a result's is that of its expression.
+fn kind(assembly: &Assembly, subject: SubjectId, quantity: Quantity) -> Kind {
+    match (&assembly.subject(subject).kind, quantity.kind()) {
+        (_, Some(kind)) => kind,
+        (SubjectKind::Gap(e) | SubjectKind::Result(e), None) => e.quantity,
+        (_, None) => Kind::PURE,
+    }
+}
+
+/// Across what a length is measured: a fit says so itself, a sum by the sizes in it.
+fn measure(assembly: &Assembly, subject: SubjectId, quantity: Quantity) -> Option<Measure> {
+    if kind(assembly, subject, quantity) != Kind::LENGTH {
+        return None;
+    }
+    Some(match &assembly.subject(subject).kind {
+        SubjectKind::Fit(fit) if !fit.round => Measure::Linear,
+        SubjectKind::Fit(_) if quantity == Quantity::RadialClearance => Measure::Radial,
+        SubjectKind::Fit(_) => Measure::Diametral,
+        SubjectKind::Gap(e) | SubjectKind::Result(e) => measure_of(assembly, e),
+        SubjectKind::Restraint(_) | SubjectKind::Fill(_) => Measure::Linear,
+    })
+}
+
+fn measure_of(assembly: &Assembly, expr: &Expr) -> Measure {
+    let mut forms = Vec::new();
+    expr.walk(&mut |e| match e.kind {
+        ExprKind::Size { dimension, .. }
+        | ExprKind::Pieces { dimension, .. }
+        | ExprKind::After { dimension, .. } => forms.push(assembly.dimension(dimension).form),
+        ExprKind::Clearance(_) | ExprKind::Play(_) => forms.push(Form::Linear),
+        _ => {}
+    });
+    let all = |form| !forms.is_empty() && forms.iter().all(|&f| f == form);
+    if all(Form::Diameter) {
+        Measure::Diametral
+    } else if all(Form::Radius) {
+        Measure::Radial
+    } else {
+        Measure::Linear
+    }
+}
+
+/// The trade's word for a fit with this clearance (ISO 286-1, 3.3).
+fn character(figure: &outcome::Figure) -> Option<&'static str> {
+    let (least, greatest) = (figure.range.least.bound, figure.range.greatest.bound);
+    let (least, greatest) = match figure.quantity {
+        Quantity::Clearance | Quantity::RadialClearance => (least, greatest),
+        Quantity::Interference => (-greatest, -least),
+        _ => return None,
+    };
+    Some(if least >= 0.0 {
+        "clearance fit"
+    } else if greatest <= 0.0 {
+        "interference fit"
+    } else {
+        "transition fit"
+    })
+}
+
+fn case(assembly: &Assembly, evaluation: &Evaluation, verdict: &Verdict, today: &str) -> Case {
+    let requirement = &assembly.requirements[verdict.requirement];
+    let lower = requirement.lower.as_ref().map(|l| l.value);
+    let upper = requirement.upper.as_ref().map(|l| l.value);
+    let range = verdict.figure.and_then(|f| evaluation.figures.get(f)).map(|f| &f.range);
+    let width = range.map_or(0.0, |r| r.greatest.bound - r.least.bound);
+    let reserve = verdict.margin / Case::against(lower, upper, width);
+    Case {
+        requirement: verdict.requirement,
+        id: requirement.id.clone(),
+        name: words::requirement(assembly, requirement),
+        subject: assembly.subject(requirement.subject).name.clone(),
+        quantity: words::quantity(assembly, requirement.quantity),
+        measure: measure(assembly, requirement.subject, requirement.quantity),
+        condition: verdict.condition.map(|c| assembly.condition(c).name.clone()),
+        method: method(requirement.method),
+        limits: limits(requirement),
+        lower,
+        upper,
+        unit: requirement.unit,
+        figure: verdict.figure,
+        margin: verdict.margin,
+        reserve: reserve.is_finite().then_some(reserve),
+        standing: standing(assembly, evaluation, verdict, today),
+        because: requirement.because.clone(),
+        concession: requirement.concession.as_ref().map(|c| {
+            let by = c.approved.as_ref().map_or_else(String::new, |a| format!(", approved by {a}"));
+            format!("{} accepts {} until {}{by}", c.id, c.written, c.until)
+        }),
+        contributors: verdict
+            .contributors
+            .iter()
+            .map(|c| contribution(assembly, requirement, c))
+            .collect(),
+        thermal_shift: thermal_shift(assembly, evaluation, verdict),
+        window: verdict.window.as_ref().map(|w| w.intervals.clone()),
+        window_scaled: verdict.window.as_ref().is_some_and(|w| w.scaled),
+    }
+}
+
+/// The method in the words of the language.
+fn method(method: Method) -> String {
+    match method {
+        Method::WorstCase => "worst case".to_string(),
+        Method::Rss { sigmas } => format!("rss {sigmas} sigma"),
+        Method::Cpk(index) => format!("Cpk {index}"),
+        Method::Share(share) => {
+            // Per cent to twelve digits, so that 0.9999 is 99.99 and not 99.99000000000001.
+            let percent = libm::round(share * 1e14) / 1e12;
+            format!("for {percent} % of assemblies")
+        }
+    }
+}
+
+/// Both limits as they were written.
+fn limits(requirement: &Requirement) -> String {
+    match (&requirement.lower, &requirement.upper) {
+        (Some(lower), Some(upper)) => format!("{} .. {}", lower.written, upper.written),
+        (Some(lower), None) => format!(">= {}", lower.written),
+        (None, Some(upper)) => format!("<= {}", upper.written),
+        (None, None) => String::new(),
+    }
+}
+
+fn contribution(
+    assembly: &Assembly,
+    requirement: &Requirement,
+    contributor: &outcome::Contributor,
+) -> Contribution {
+    let scale = scale(assembly, contributor.unknown);
+    let dimension = match contributor.unknown {
+        Unknown::Size { dimension, .. } => Some(assembly.dimension(dimension)),
+        _ => None,
+    };
+    let condition = match contributor.unknown {
+        Unknown::Temperature(c) => Some(assembly.condition(c)),
+        _ => None,
+    };
+    let written = dimension.map(|d| &d.written).or(condition.map(|c| &c.written));
+    Contribution {
+        name: words::unknown(assembly, contributor.unknown),
+        written: written.cloned().unwrap_or_default(),
+        cause: Cause::of(assembly, contributor.unknown),
+        basis: dimension.filter(|d| d.basis != Basis::Drawing).map(|d| d.basis.word()),
+        sensitivity: requirement.unit.difference_from_si(contributor.sensitivity * scale.step()),
+        unit: scale.symbol(),
+        part: contributor.part,
+        share_of_range: contributor.share_of_range,
+        share_of_variance: None,
+    }
+}
+
+/// How far temperature alone moves the mean: here minus the same at the condition `reference`.
+fn thermal_shift(assembly: &Assembly, evaluation: &Evaluation, verdict: &Verdict) -> Option<f64> {
+    let here = evaluation.figures.get(verdict.figure?)?;
+    let reference = evaluation.figures.iter().find(|f| {
+        f.subject == here.subject
+            && f.quantity == here.quantity
+            && f.members == here.members
+            && f.of_yield == here.of_yield
+            && f.condition.is_some_and(|c| assembly.condition(c).name == "reference")
+    })?;
+    Some(here.range.mean - reference.range.mean)
+}
