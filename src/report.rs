@@ -9,7 +9,10 @@ mod basis;
 mod cause;
 mod coordinate;
 pub mod diagnostic;
+pub mod json;
 pub mod look;
+#[cfg(test)]
+mod sample;
 pub mod summary;
 pub mod text;
 pub mod wire;

@@ -158,7 +158,9 @@ fn signs(assembly: &Assembly) -> Vec<&'static str> {
         signs.push("a gap is positive when open; zero is contact");
     }
     if has(|k| matches!(k, SubjectKind::Restraint(_))) {
-        signs.push("a restraint's force is positive when it squeezes; no tension crosses an open face");
+        signs.push(
+            "a restraint's force is positive when it squeezes; no tension crosses an open face",
+        );
     }
     if has(|k| matches!(k, SubjectKind::Fill(_))) {
         signs.push("ullage is the free share of the cavity; zero is full");

@@ -61,7 +61,9 @@ impl Cause {
     /// The cause that an unknown belongs to.
     pub(super) fn of(assembly: &Assembly, unknown: Unknown) -> Cause {
         match unknown {
-            Unknown::Size { dimension, .. } if assembly.dimension(dimension).geometric.is_some() => {
+            Unknown::Size { dimension, .. }
+                if assembly.dimension(dimension).geometric.is_some() =>
+            {
                 Cause::Geometry
             }
             Unknown::Size { .. } => Cause::Size,

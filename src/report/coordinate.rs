@@ -23,7 +23,7 @@ pub(super) fn coordinates(assembly: &Assembly, corner: &[(Unknown, f64)]) -> Vec
             let scale = scale(assembly, unknown);
             Coordinate {
                 name: words::unknown(assembly, unknown),
-                value: scale.from_si(si),
+                value: scale.read(si),
                 unit: scale.symbol(),
             }
         })
@@ -43,7 +43,7 @@ impl Scale {
     }
 
     /// An SI value on this scale.
-    pub(super) fn from_si(self, si: f64) -> f64 {
+    pub(super) fn read(self, si: f64) -> f64 {
         match self.unit {
             Some(unit) if self.difference => unit.difference_from_si(si),
             Some(unit) => unit.from_si(si),
@@ -77,7 +77,8 @@ pub(super) fn scale(assembly: &Assembly, unknown: Unknown) -> Scale {
         Unknown::Coating { .. } => shown(Kind::LENGTH),
         Unknown::Temperature(_) => shown(Kind::TEMPERATURE),
         Unknown::OwnTemperature { condition, owner } => {
-            let own = assembly.condition(condition).state(owner).and_then(|s| s.temperature.as_ref());
+            let own =
+                assembly.condition(condition).state(owner).and_then(|s| s.temperature.as_ref());
             let difference = matches!(own, Some(OwnTemperature::Above { .. }));
             Scale { difference, ..shown(Kind::TEMPERATURE) }
         }

@@ -144,7 +144,7 @@ impl Page {
     fn row(&self, out: &mut String, number: &str, text: &str) {
         let bar = self.look.pick("\u{2502}", "|");
         let edge = self.look.paint(Role::Quiet, &format!("{} {bar}", right(number, self.gutter)));
-        out.push_str(&format!("{edge} {text}").trim_end());
+        out.push_str(format!("{edge} {text}").trim_end());
         out.push('\n');
     }
 

@@ -61,16 +61,17 @@ pub fn line(report: &Report) -> String {
         let verb = if summary.wrong == 1 { "has" } else { "have" };
         let mistakes = count(summary.errors, "mistake", "mistakes");
         let specs = if summary.wrong == 1 && !several { "spec" } else { "specs" };
-        parts.push(format!("{}{of} {specs} {verb} {mistakes} and could not be checked", summary.wrong));
+        parts.push(format!(
+            "{}{of} {specs} {verb} {mistakes} and could not be checked",
+            summary.wrong
+        ));
     }
     if summary.requirements > 0 {
         parts.push(standings(&summary));
     } else if summary.wrong == 0 {
         parts.push("nothing is required".to_string());
     }
-    if let Some((case, several)) = tightest(report) {
-        parts.push(tightest_words(case, several));
-    }
+    parts.extend(tightest(report).map(tightest_words));
     if summary.warnings > 0 {
         parts.push(count(summary.warnings, "warning", "warnings"));
     }
@@ -79,44 +80,40 @@ pub fn line(report: &Report) -> String {
 
 fn standings(summary: &Summary) -> String {
     let all = count(summary.requirements, "case", "cases");
-    let mut stand = Vec::new();
-    let mut say = |n: usize, one: &str, many: &str| {
-        if n > 0 {
-            stand.push(format!("{n} {}", if n == 1 { one } else { many }));
-        }
-    };
-    say(summary.fail, "fails", "fail");
-    say(summary.undecided, "is undecided", "are undecided");
-    say(summary.conceded, "is conceded", "are conceded");
-    if stand.is_empty() {
+    if summary.hold == summary.requirements {
         return match summary.requirements {
             1 => "the one case holds".to_string(),
             2 => "both cases hold".to_string(),
             _ => format!("all {all} hold"),
         };
     }
-    say(summary.hold, "holds", "hold");
+    let stand: Vec<String> = [
+        (summary.fail, "fails", "fail"),
+        (summary.undecided, "is undecided", "are undecided"),
+        (summary.conceded, "is conceded", "are conceded"),
+        (summary.hold, "holds", "hold"),
+    ]
+    .into_iter()
+    .filter(|(n, ..)| *n > 0)
+    .map(|(n, one, many)| count(n, one, many))
+    .collect();
     format!("{all}: {}", stand.join(", "))
 }
 
-/// The case with the least reserve, if any is known, and whether it is one of several specs.
-fn tightest(report: &Report) -> Option<(&Case, bool)> {
+/// The case with the least reserve, if any is known.
+fn tightest(report: &Report) -> Option<&Case> {
     let cases = report.specs.iter().filter_map(|s| s.account.as_ref()).flat_map(|a| &a.cases);
-    let known = cases.filter(|c| c.reserve.is_some());
-    let least = known.min_by(|a, b| {
-        a.reserve.unwrap_or(f64::INFINITY).total_cmp(&b.reserve.unwrap_or(f64::INFINITY))
-    })?;
-    Some((least, report.specs.len() > 1))
+    let reserve = |case: &Case| case.reserve.unwrap_or(f64::INFINITY);
+    cases.filter(|c| c.reserve.is_some()).min_by(|a, b| reserve(a).total_cmp(&reserve(b)))
 }
 
-fn tightest_words(case: &Case, _several: bool) -> String {
+fn tightest_words(case: &Case) -> String {
     let at = case.condition.as_ref().map_or_else(String::new, |c| format!(" at {c}"));
-    let margin = case.margin;
-    if margin < 0.0 {
-        let short = difference_with_unit(-margin, case.unit, Round::Up);
+    if case.margin < 0.0 {
+        let short = difference_with_unit(-case.margin, case.unit, Round::Up);
         format!("worst is {}{at}, short by {short}", case.name)
     } else {
-        let margin = difference_with_unit(margin, case.unit, Round::Down);
+        let margin = difference_with_unit(case.margin, case.unit, Round::Down);
         format!("least margin {margin} ({}{at})", case.name)
     }
 }

@@ -1,0 +1,227 @@
+//! The report as other programs read it: `gapkeep/1`.
+//!
+//! The types here are the format. They stand apart from the inner ones, so that a change inside does
+//! not change what is written; a change here that breaks a reader takes a new number. Figures are at
+//! full precision in the unit named beside them; what is not known or has no end is `null`.
+
+mod from;
+
+pub use from::document;
+use serde::ser::SerializeMap;
+use serde::{Serialize, Serializer};
+
+/// The name of the format.
+pub const SCHEMA: &str = "gapkeep/1";
+
+/// A whole run.
+#[derive(Debug, Serialize)]
+pub struct Document {
+    /// `gapkeep/1`.
+    pub schema: &'static str,
+    /// One for each spec, in the order they were named.
+    pub specs: Vec<SpecEntry>,
+    /// How many requirements at conditions stand how.
+    pub summary: SummaryEntry,
+}
+
+/// One spec.
+#[derive(Debug, Serialize)]
+pub struct SpecEntry {
+    /// Its file, relative to the root of the run.
+    pub file: String,
+    /// The words after `assembly`; `null` where nothing could be computed.
+    pub title: Option<String>,
+    /// Drawing number.
+    pub drawing: Option<String>,
+    /// Drawing revision.
+    pub revision: Option<String>,
+    /// Each quantity at each condition.
+    pub results: Vec<ResultEntry>,
+    /// Each requirement at each of its conditions.
+    pub requirements: Vec<RequirementEntry>,
+    /// What is wrong or worth knowing.
+    pub findings: Vec<FindingEntry>,
+}
+
+/// One quantity at a condition.
+#[derive(Debug, Serialize)]
+pub struct ResultEntry {
+    /// Name of the fit, gap, result, restraint or fill.
+    pub name: String,
+    /// Which of these it is.
+    pub kind: &'static str,
+    /// Which of its quantities.
+    pub quantity: String,
+    /// `diametral`, `radial` or `linear`, for lengths.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub measure: Option<&'static str>,
+    /// The condition; `null` for what has none.
+    pub condition: Option<String>,
+    /// The member of each `one of` set it was computed with, in mm.
+    #[serde(skip_serializing_if = "Map::is_empty")]
+    pub members: Map,
+    /// Unit of the figures.
+    pub unit: &'static str,
+    /// No value lies below.
+    pub least: Option<f64>,
+    /// Value with everything in the middle of its limits.
+    pub mean: Option<f64>,
+    /// No value lies above.
+    pub greatest: Option<f64>,
+    /// What kind of fit it is there.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub character: Option<&'static str>,
+    /// Where the least value is reached.
+    pub least_at: Map,
+    /// Where the greatest value is reached.
+    pub greatest_at: Map,
+}
+
+/// One requirement at a condition.
+#[derive(Debug, Serialize)]
+pub struct RequirementEntry {
+    /// The id; `null` where none is given.
+    pub id: Option<String>,
+    /// What it is about.
+    pub subject: String,
+    /// Which of its quantities.
+    pub quantity: String,
+    /// The condition; `null` for what has none.
+    pub condition: Option<String>,
+    /// How it is shown to hold.
+    pub method: String,
+    /// Unit of limits, figures and margin.
+    pub unit: &'static str,
+    /// Least allowed value; `null` where there is none.
+    pub lower: Option<f64>,
+    /// Greatest allowed value; `null` where there is none.
+    pub upper: Option<f64>,
+    /// Least value.
+    pub least: Option<f64>,
+    /// Value with everything in the middle of its limits.
+    pub mean: Option<f64>,
+    /// Greatest value.
+    pub greatest: Option<f64>,
+    /// Distance to the nearer limit, negative when passed.
+    pub margin: Option<f64>,
+    /// `holds`, `fails`, `undecided` or `conceded`.
+    pub verdict: &'static str,
+    /// The reason given.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub because: Option<String>,
+    /// The concession, if one is stated.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub concession: Option<String>,
+    /// Temperatures at which it would hold.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub window: Option<WindowEntry>,
+    /// What the range is made of, largest share first.
+    pub contributors: Vec<ContributorEntry>,
+}
+
+/// The temperatures at which a requirement would hold.
+#[derive(Debug, Serialize)]
+pub struct WindowEntry {
+    /// The file's temperature unit, or empty where the ends are multiples of the condition's
+    /// distance from reference.
+    pub unit: &'static str,
+    /// `[from, to]`, an open end `null`.
+    pub intervals: Vec<[Option<f64>; 2]>,
+}
+
+/// What one unknown does to a quantity.
+#[derive(Debug, Serialize)]
+pub struct ContributorEntry {
+    /// What it is.
+    pub name: String,
+    /// Its tolerance as written; empty where it has none.
+    pub written: String,
+    /// Which cause it belongs to.
+    pub cause: &'static str,
+    /// Change of the quantity for each unit of the unknown.
+    pub sensitivity: Option<f64>,
+    /// Unit of the unknown; empty for scatters, which run from −1 to 1.
+    pub unit: &'static str,
+    /// Part of the range that it makes, in the requirement's unit.
+    pub part: Option<f64>,
+    /// The same as a share, 0 … 1.
+    pub share_of_range: Option<f64>,
+    /// Share of the variance, where statistics were asked for.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub share_of_variance: Option<f64>,
+}
+
+/// One thing said about a spec.
+#[derive(Debug, Serialize)]
+pub struct FindingEntry {
+    /// Names the problem, for good.
+    pub code: &'static str,
+    /// `error`, `warning` or `note`.
+    pub severity: &'static str,
+    /// One sentence.
+    pub message: String,
+    /// Its file, relative to the root of the run.
+    pub file: String,
+    /// Line, from 1.
+    pub line: usize,
+    /// Column in characters, from 1.
+    pub column: usize,
+    /// What is said at the place itself and at others, the place itself first.
+    pub labels: Vec<LabelEntry>,
+    /// What would mend it.
+    pub help: Option<String>,
+}
+
+/// A place and what is said there.
+#[derive(Debug, Serialize)]
+pub struct LabelEntry {
+    /// Its file.
+    pub file: String,
+    /// First line, from 1.
+    pub line: usize,
+    /// First column in characters, from 1.
+    pub column: usize,
+    /// Line of the place just past its end.
+    pub end_line: usize,
+    /// Column just past its end.
+    pub end_column: usize,
+    /// What is said; may be empty.
+    pub text: String,
+}
+
+/// How many requirements at conditions stand how.
+#[derive(Debug, Serialize)]
+pub struct SummaryEntry {
+    /// All of them.
+    pub requirements: usize,
+    /// Those that hold.
+    pub hold: usize,
+    /// Those that fail.
+    pub fail: usize,
+    /// Those that could not be decided.
+    pub undecided: usize,
+    /// Those that fail within what a concession accepts.
+    pub conceded: usize,
+    /// Specs of which nothing could be computed.
+    pub wrong: usize,
+}
+
+/// Names and numbers in an order of their own, written as an object.
+#[derive(Debug, Default)]
+pub struct Map(pub Vec<(String, Option<f64>)>);
+
+impl Map {
+    fn is_empty(&self) -> bool {
+        self.0.is_empty()
+    }
+}
+
+impl Serialize for Map {
+    fn serialize<S: Serializer>(&self, serializer: S) -> Result<S::Ok, S::Error> {
+        let mut map = serializer.serialize_map(Some(self.0.len()))?;
+        for (name, value) in &self.0 {
+            map.serialize_entry(name, value)?;
+        }
+        map.end()
+    }
+}

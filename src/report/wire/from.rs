@@ -1,0 +1,164 @@
+//! From the inner report to the format: figures from SI into their units, places into lines and
+//! columns, what is not a number into `null`.
+
+use super::{
+    ContributorEntry, Document, FindingEntry, LabelEntry, Map, RequirementEntry, ResultEntry,
+    SCHEMA, SpecEntry, SummaryEntry, WindowEntry,
+};
+use crate::diagnostic::{Diagnostic, Label};
+use crate::report::summary::summary;
+use crate::report::{Account, Case, Contribution, Coordinate, Figure, Report, Spec};
+use crate::source::Sources;
+use crate::units::{Unit, find};
+
+/// The report in the format `gapkeep/1`.
+pub fn document(report: &Report) -> Document {
+    let counted = summary(report);
+    Document {
+        schema: SCHEMA,
+        specs: report.specs.iter().map(spec).collect(),
+        summary: SummaryEntry {
+            requirements: counted.requirements,
+            hold: counted.hold,
+            fail: counted.fail,
+            undecided: counted.undecided,
+            conceded: counted.conceded,
+            wrong: counted.wrong,
+        },
+    }
+}
+
+fn spec(spec: &Spec) -> SpecEntry {
+    let account = spec.account.as_ref();
+    let drawing = account.and_then(|a| a.drawing.clone());
+    SpecEntry {
+        file: spec.file.clone(),
+        title: account.map(|a| a.title.clone()),
+        drawing: drawing.as_ref().map(|d| d.0.clone()),
+        revision: drawing.map(|d| d.1).filter(|r| !r.is_empty()),
+        results: account.map_or_else(Vec::new, |a| a.figures.iter().map(result).collect()),
+        requirements: account
+            .map_or_else(Vec::new, |a| a.cases.iter().map(|c| requirement(a, c)).collect()),
+        findings: spec.findings.iter().map(|d| finding(d, &spec.sources)).collect(),
+    }
+}
+
+/// A number, or nothing where it is not one or has no end.
+fn number(x: f64) -> Option<f64> {
+    // Adding zero turns −0 into 0.
+    x.is_finite().then_some(x + 0.0)
+}
+
+fn value(si: f64, unit: &Unit) -> Option<f64> {
+    number(unit.from_si(si))
+}
+
+fn result(figure: &Figure) -> ResultEntry {
+    let size = |si: f64| find("mm").and_then(|mm| value(si, mm));
+    ResultEntry {
+        name: figure.subject.clone(),
+        kind: figure.kind,
+        quantity: figure.quantity.clone(),
+        measure: figure.measure.map(|m| m.word()),
+        condition: figure.condition.clone(),
+        members: Map(figure.members.iter().map(|(name, si)| (name.clone(), size(*si))).collect()),
+        unit: figure.unit.symbol,
+        least: value(figure.least, figure.unit),
+        mean: value(figure.mean, figure.unit),
+        greatest: value(figure.greatest, figure.unit),
+        character: figure.character,
+        least_at: corner(&figure.least_at),
+        greatest_at: corner(&figure.greatest_at),
+    }
+}
+
+/// The corner by names; a name that occurs again is numbered, since an object has each key once.
+fn corner(at: &[Coordinate]) -> Map {
+    let mut entries: Vec<(String, Option<f64>)> = Vec::new();
+    for coordinate in at {
+        let mut name = coordinate.name.clone();
+        let mut copy = 1;
+        while entries.iter().any(|(other, _)| *other == name) {
+            copy += 1;
+            name = format!("{} ({copy})", coordinate.name);
+        }
+        entries.push((name, number(coordinate.value)));
+    }
+    Map(entries)
+}
+
+fn requirement(account: &Account, case: &Case) -> RequirementEntry {
+    let figure = case.figure.map(|f| &account.figures[f]);
+    let of = |si: Option<f64>| si.and_then(|si| value(si, case.unit));
+    let window = case.window.as_ref().map(|intervals| {
+        let end = |t: f64| {
+            if case.window_scaled { number(t) } else { value(t, account.temperature) }
+        };
+        WindowEntry {
+            unit: if case.window_scaled { "" } else { account.temperature.symbol },
+            intervals: intervals.iter().map(|&(from, to)| [end(from), end(to)]).collect(),
+        }
+    });
+    RequirementEntry {
+        id: case.id.clone(),
+        subject: case.subject.clone(),
+        quantity: case.quantity.clone(),
+        condition: case.condition.clone(),
+        method: case.method.clone(),
+        unit: case.unit.symbol,
+        lower: of(case.lower),
+        upper: of(case.upper),
+        least: of(figure.map(|f| f.least)),
+        mean: of(figure.map(|f| f.mean)),
+        greatest: of(figure.map(|f| f.greatest)),
+        margin: number(case.unit.difference_from_si(case.margin)),
+        verdict: case.standing.word(),
+        because: case.because.clone(),
+        concession: case.concession.clone(),
+        window,
+        contributors: case.contributors.iter().map(|c| contributor(case, c)).collect(),
+    }
+}
+
+fn contributor(case: &Case, c: &Contribution) -> ContributorEntry {
+    ContributorEntry {
+        name: c.name.clone(),
+        written: c.written.clone(),
+        cause: c.cause.word(),
+        sensitivity: number(c.sensitivity),
+        unit: c.unit,
+        part: number(case.unit.difference_from_si(c.part)),
+        share_of_range: number(c.share_of_range),
+        share_of_variance: c.share_of_variance,
+    }
+}
+
+fn finding(diagnostic: &Diagnostic, sources: &Sources) -> FindingEntry {
+    let primary = label(&diagnostic.primary, sources);
+    FindingEntry {
+        code: diagnostic.code.text(),
+        severity: diagnostic.severity.word(),
+        message: diagnostic.message.clone(),
+        file: primary.file.clone(),
+        line: primary.line,
+        column: primary.column,
+        labels: std::iter::once(primary)
+            .chain(diagnostic.secondary.iter().map(|l| label(l, sources)))
+            .collect(),
+        help: diagnostic.help.clone(),
+    }
+}
+
+fn label(label: &Label, sources: &Sources) -> LabelEntry {
+    let source = sources.get(label.span.file);
+    let (line, column) = source.position(label.span.start as usize);
+    let (end_line, end_column) = source.position(label.span.end as usize);
+    LabelEntry {
+        file: source.name().to_string(),
+        line,
+        column,
+        end_line,
+        end_column,
+        text: label.text.clone(),
+    }
+}
