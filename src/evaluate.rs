@@ -18,6 +18,7 @@ mod restraint;
 pub mod scene;
 mod selection;
 mod size;
+mod statistics;
 mod temperature;
 mod verdict;
 mod window;
@@ -37,8 +38,26 @@ pub enum Detail {
     Full,
 }
 
+/// What an evaluation is asked for.
+#[derive(Debug, Clone, Copy, PartialEq)]
+pub struct Options {
+    /// How much is wanted besides figures and verdicts.
+    pub detail: Detail,
+    /// Seed of all draws.
+    pub seed: u64,
+    /// Number of assemblies drawn where draws are needed.
+    pub draws: u64,
+}
+
+impl Default for Options {
+    fn default() -> Self {
+        Options { detail: Detail::Brief, seed: 1, draws: 1_000_000 }
+    }
+}
+
 /// Evaluates every quantity of an assembly at every condition, and every requirement.
-pub fn evaluate(assembly: &Assembly, detail: Detail) -> Evaluation {
+pub fn evaluate(assembly: &Assembly, options: &Options) -> Evaluation {
+    let detail = options.detail;
     let mut run =
         Run { assembly, detail, responses: Vec::new(), evaluation: Evaluation::default() };
     run.evaluation.temperatures = data_range::temperatures(assembly);
@@ -49,6 +68,7 @@ pub fn evaluate(assembly: &Assembly, detail: Detail) -> Evaluation {
     for index in 0..assembly.requirements.len() {
         run.requirement(index);
     }
+    statistics::settle(assembly, &run.responses, &mut run.evaluation, options);
     selection::settle(assembly, &mut run.evaluation);
     run.windows();
     run.evaluation.missing.sort();
@@ -163,6 +183,7 @@ impl Run<'_> {
                     margin: f64::NAN,
                     contributors: Vec::new(),
                     window: None,
+                    statistics: None,
                 },
                 Some(at) => {
                     let range = &self.evaluation.figures[at].range;
@@ -182,6 +203,7 @@ impl Run<'_> {
                         margin: judged.margin,
                         contributors,
                         window: None,
+                        statistics: None,
                     }
                 }
             });

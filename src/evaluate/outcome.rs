@@ -18,6 +18,9 @@ pub struct Evaluation {
     pub missing: Vec<Missing>,
     /// Each `one of` set that some requirement depends on.
     pub selections: Vec<Selection>,
+    /// The share of assemblies that break some requirement somewhere, where the spec asks for
+    /// statistics.
+    pub assembly_yield: Option<AssemblyYield>,
 }
 
 /// The range of one quantity of a subject at a condition.
@@ -90,6 +93,9 @@ pub struct Verdict {
     pub contributors: Vec<Contributor>,
     /// Where it would hold if the temperatures were other ones.
     pub window: Option<Window>,
+    /// How it varies from assembly to assembly, where some requirement of the spec asks for
+    /// statistics.
+    pub statistics: Option<Statistics>,
 }
 
 /// How a requirement stands.
@@ -203,4 +209,77 @@ pub struct Selection {
     pub occurs: (f64, f64),
     /// How it stands.
     pub outcome: Outcome,
+}
+
+/// How a quantity varies from assembly to assembly, scenarios at their worst. SI.
+#[derive(Debug, Clone, PartialEq)]
+pub struct Statistics {
+    /// The quantity at the means, on the side nearer to its limit.
+    pub mean: f64,
+    /// Its standard deviation to first order.
+    pub sigma: f64,
+    /// Mean and standard deviation to second order.
+    pub second_order: (f64, f64),
+    /// Mean and standard deviation where the scenarios make it least.
+    pub low: (f64, f64),
+    /// Mean and standard deviation where they make it greatest.
+    pub high: (f64, f64),
+    /// Share of assemblies that break a limit, 0 … 1.
+    pub share_failing: f64,
+    /// What that share is known to lie between: bounds of the method, or 99 % confidence limits
+    /// where it was drawn.
+    pub share_interval: (f64, f64),
+    /// Number of draws, where it was drawn.
+    pub draws: Option<u64>,
+    /// Capability index to the nearer limit.
+    pub cpk: Option<f64>,
+    /// True where the share is that of the formula to its printed digits, without draws.
+    pub exact: bool,
+    /// Number of random unknowns.
+    pub random: usize,
+    /// True where some spread is the default and not stated.
+    pub assumed: bool,
+    /// What the variance is made of.
+    pub variance_shares: Vec<VarianceShare>,
+}
+
+impl Statistics {
+    /// Nothing is known.
+    pub(crate) fn unknown() -> Self {
+        Statistics {
+            mean: f64::NAN,
+            sigma: f64::NAN,
+            second_order: (f64::NAN, f64::NAN),
+            low: (f64::NAN, f64::NAN),
+            high: (f64::NAN, f64::NAN),
+            share_failing: 1.0,
+            share_interval: (0.0, 1.0),
+            draws: None,
+            cpk: None,
+            exact: false,
+            random: 0,
+            assumed: false,
+            variance_shares: Vec::new(),
+        }
+    }
+}
+
+/// A share of the variance.
+#[derive(Debug, Clone, PartialEq)]
+pub struct VarianceShare {
+    /// Of which unknown; `None` for what several bring together.
+    pub unknown: Option<Unknown>,
+    /// The share, 0 … 1.
+    pub share: f64,
+}
+
+/// The share of assemblies that break some requirement at some condition.
+#[derive(Debug, Clone, Copy, PartialEq)]
+pub struct AssemblyYield {
+    /// The share failing, 0 … 1.
+    pub share_failing: f64,
+    /// What it is known to lie between.
+    pub share_interval: (f64, f64),
+    /// Number of draws, where it was drawn.
+    pub draws: Option<u64>,
 }
