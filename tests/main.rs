@@ -4,5 +4,6 @@
 #![allow(clippy::unwrap_used, clippy::expect_used)]
 
 mod interval_laws;
+mod materials;
 mod published;
 mod syntax;

@@ -2,6 +2,7 @@
 
 mod distributions;
 mod drawn_shares;
+mod expansion;
 mod gauge_block;
 mod mixed_sums;
 mod statistics;

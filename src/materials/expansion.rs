@@ -274,13 +274,6 @@ impl Expansion {
         let (a, b) = (self.curve.value(from), self.curve.value(to));
         ((b - a) / (1.0 + a)) / (to - from)
     }
-
-    /// The least absolute value that the coefficient may have over a span of temperature, 1/K: a
-    /// scatter in per cent says nothing where this is near zero.
-    pub fn least_coefficient(&self, span: Interval) -> f64 {
-        let slope = self.curve.derivative().range(span);
-        if slope.contains(0.0) { 0.0 } else { slope.lo().abs().min(slope.hi().abs()) }
-    }
 }
 
 fn extent(table: &[(f64, f64)]) -> (f64, f64) {

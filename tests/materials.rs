@@ -1,0 +1,5 @@
+//! The material library: what holds for every entry, and that its enclosures enclose.
+
+mod document;
+mod enclosure;
+mod laws;
