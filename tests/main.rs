@@ -6,4 +6,5 @@
 mod interval_laws;
 mod materials;
 mod published;
+mod standards_laws;
 mod syntax;

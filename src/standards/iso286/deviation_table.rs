@@ -1,9 +1,9 @@
 //! Fundamental deviations (ISO 286-1:2010, Tables 2 to 5), micrometres.
 //!
 //! One column a letter, one value a step of nominal size, stated for the shaft and without its sign:
-//! a to h lie below the nominal size (es = −value), k to zc above it (ei = +value). Holes mirror
-//! them, by the rules in the module `limits`. Columns were read in print, from a to g and m to zc up to 500 mm and
-//! d to u over 500 mm; j, J and k likewise; `docs/standards.md` names the pages.
+//! a to h lie below the nominal size (es = −value), k to zc above it (ei = +value). Holes mirror them,
+//! by the rules in the module `limits`. j and J have columns of their own. `docs/standards.md` says where
+//! each column was read.
 
 use super::class::Letters;
 use super::step::Step;

@@ -1,9 +1,8 @@
 //! Standard tolerances (ISO 286-1:2010, Table 1).
 //!
-//! One row a main step of nominal size, one column a grade, as the standard prints them. IT1 to IT9 up
-//! to 500 mm, IT5 to IT11 to 3150 mm and IT10 to IT16 to 500 mm were read in print; IT01, IT0, IT17
-//! and IT18 to 500 mm, and IT1 to IT4 and IT12 to IT18 over 500 mm, are from memory and held to the
-//! standard's formulas.
+//! One row a main step of nominal size, one column a grade, as the standard prints them. IT01 to IT16 up
+//! to 500 mm and IT5 to IT11 over 500 mm were read in print. IT17 and IT18, and over 500 mm IT1 to IT4
+//! and IT12 to IT18, are from memory; the formulas of the standard and its rule of five grades hold them.
 
 use super::class::Grade;
 use super::step::{MAIN_TO_500, Step};

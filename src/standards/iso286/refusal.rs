@@ -2,6 +2,7 @@
 
 use super::class::{Class, Grade, Letters};
 use super::deviation_table::distance;
+use super::limits::classes_at;
 use super::step::{INTERMEDIATE, Step};
 use std::fmt;
 
@@ -120,7 +121,7 @@ pub(super) fn reach(letters: Letters) -> Reason {
 }
 
 /// Finds defined classes near one that is not: up to one finer and one coarser grade of the same
-/// letters, and the next looser and tighter letters at the same grade.
+/// letters, and the next looser and tighter letters at the same grade. None outside the system.
 fn alternatives(class: Class, nominal: f64) -> Vec<Class> {
     let defined = |candidate: &Class| candidate.deviations(nominal).is_ok();
     let regraded = |grade| Class { grade, ..class };
@@ -131,7 +132,20 @@ fn alternatives(class: Class, nominal: f64) -> Vec<Class> {
         Letters::ALL.into_iter().filter(|&l| l != class.letters).partition(|&l| l < class.letters);
     let looser = looser.into_iter().rev().map(relettered).find(defined);
     let tighter = tighter.into_iter().map(relettered).find(defined);
-    [finer, coarser, looser, tighter].into_iter().flatten().collect()
+    let nearby: Vec<Class> = [finer, coarser, looser, tighter].into_iter().flatten().collect();
+    if !nearby.is_empty() {
+        return nearby;
+    }
+    // Letters and grade are both out, as in A14 at 1 mm: the one class that departs least in the two.
+    let steps_away = |other: &Class| {
+        (other.letters as usize).abs_diff(class.letters as usize)
+            + other.grade.column().abs_diff(class.grade.column())
+    };
+    classes_at(nominal, class.kind)
+        .map(|(class, _)| class)
+        .min_by_key(steps_away)
+        .into_iter()
+        .collect()
 }
 
 #[cfg(test)]
