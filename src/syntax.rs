@@ -10,6 +10,7 @@ mod grammar;
 mod layout;
 mod lower;
 mod read;
+mod tidy;
 pub mod tree;
 
 use crate::diagnostic::Diagnostic;
@@ -52,4 +53,12 @@ pub struct Parsed {
 /// linear in the text.
 pub fn parse(text: &str, file: FileId) -> Parsed {
     read::read(text, file)
+}
+
+/// The text in the one layout, its comments kept; nothing if it has syntax errors.
+///
+/// Laying out twice changes nothing more, and the tree stays as it is but for places and the one
+/// spelling of some units and signs (`degC`, `um`, `dia`, `x`, `>=`, `±`).
+pub fn tidy(text: &str, file: FileId) -> Option<String> {
+    tidy::tidy(text, file)
 }

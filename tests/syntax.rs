@@ -2,6 +2,7 @@
 
 mod hostile;
 mod mistakes;
+mod tidy;
 mod whole;
 
 use std::path::{Path, PathBuf};

@@ -60,6 +60,11 @@ pub(super) struct Layout {
     pub(super) diagnostics: Vec<Diagnostic>,
 }
 
+/// True if the word at `at` carries on a statement from the line before.
+pub(super) fn carries_on(text: &str, at: usize) -> bool {
+    lookahead::carries_on(text, at, Context::File)
+}
+
 impl Layout {
     /// Lays out a text.
     pub(super) fn of(text: &str, file: FileId) -> Layout {
