@@ -82,6 +82,76 @@ codes! {
     TableShape = "table-shape", Error;
     /// A cell of a table that holds no number.
     TableCell = "table-cell", Error;
+    /// A tolerance of a temperature that sizes are stated at.
+    ToleranceOfReference = "tolerance-of-reference", Error;
+    /// A class of general tolerances that ISO 2768-1 does not have.
+    UnknownGeneralClass = "unknown-general-class", Error;
+    /// A size without a tolerance, its own or a general one.
+    ToleranceMissing = "tolerance-missing", Error;
+    /// A tolerance class spelled as ISO 286 spells none.
+    ClassMisspelled = "class-misspelled", Error;
+    /// A tolerance class that ISO 286 does not define at that size.
+    ClassUndefined = "class-undefined", Error;
+    /// A tolerance class of the other side than the one stated.
+    ClassAgainstSide = "class-against-side", Error;
+    /// A tolerance class where there is no feature of size.
+    ClassOfNoSize = "class-of-no-size", Error;
+    /// A set to select from that has one size.
+    SetOfOne = "set-of-one", Error;
+    /// A form that a geometrical tolerance or its zone cannot have.
+    FormOfTolerance = "form-of-tolerance", Error;
+    /// A bonus of something that is no feature of size of the same part.
+    BonusOfNoSize = "bonus-of-no-size", Error;
+    /// A bonus at least material condition.
+    BonusAtLeastMaterial = "bonus-at-least-material", Error;
+    /// A bonus of a feature that may be a hole or a shaft.
+    BonusSideUnknown = "bonus-side-unknown", Error;
+    /// A coating that may add to a size or take from it.
+    CoatingSideUnknown = "coating-side-unknown", Error;
+    /// Coated faces that are not stated, or stated of a round feature.
+    CoatingSides = "coating-sides", Error;
+    /// A direction that a dimension or a material leaves open.
+    DirectionMissing = "direction-missing", Error;
+    /// A direction where there is none.
+    DirectionUnneeded = "direction-unneeded", Error;
+    /// A name of a dimension that nothing defines.
+    UnknownDimension = "unknown-dimension", Error;
+    /// A name of a material that neither the files nor the library define.
+    UnknownMaterial = "unknown-material", Error;
+    /// A moisture that a part's material does not have.
+    UnknownMoisture = "unknown-moisture", Error;
+    /// A column of a history that names nothing in the spec.
+    UnknownColumn = "unknown-column", Error;
+    /// Parts that a history says nothing of.
+    HistoryIncomplete = "history-incomplete", Error;
+    /// Times of a history that do not rise.
+    TimeNotRising = "time-not-rising", Error;
+    /// Kelvins that may be a temperature or a difference.
+    TemperatureOrDifference = "temperature-or-difference", Error;
+    /// Temperatures that are measured from each other in a circle.
+    TemperatureCycle = "temperature-cycle", Error;
+    /// A part's own temperature that does not follow a range or a history.
+    TemperaturePinned = "temperature-pinned", Note;
+    /// A name defined twice.
+    DuplicateName = "duplicate-name", Error;
+    /// Parts or materials that are like each other in a circle.
+    LikeCycle = "like-cycle", Error;
+    /// A lot of material shared by parts of two materials.
+    LotOfTwoMaterials = "lot-of-two-materials", Error;
+    /// A material that does not say how it expands.
+    ExpansionMissing = "expansion-missing", Error;
+    /// A coefficient of expansion that looks like one per degree of the other scale.
+    ExpansionOfOtherDegree = "expansion-of-other-degree", Warning;
+    /// A table of coefficients that may be mean or instantaneous ones.
+    TableFormMissing = "table-form-missing", Error;
+    /// Temperatures of a table that do not rise.
+    TableNotRising = "table-not-rising", Error;
+    /// A tolerance of a single row of a table, or one that differs both ways.
+    ToleranceOfRow = "tolerance-of-row", Error;
+    /// A spread of a material's scatter.
+    SpreadOfMaterial = "spread-of-material", Error;
+    /// A first state of moisture that has swollen.
+    SwellOfFirstState = "swell-of-first-state", Error;
 
     /// A fit with less clearance than required.
     ClearanceBelowLimit = "clearance-below-limit", Error;

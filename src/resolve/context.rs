@@ -11,6 +11,7 @@ use crate::materials::Material;
 use crate::model::{Condition, ConditionId, Dimension, DimensionId, Lot, Part, PartId, SubjectId};
 use crate::source::Sources;
 use crate::span::{FileId, Span};
+use crate::standards::iso2768;
 use crate::units::{self, Defaults, STANDARD_REFERENCE, Unit};
 use std::collections::{BTreeMap, BTreeSet};
 use std::sync::Arc;
@@ -69,10 +70,10 @@ pub(crate) struct Head {
 /// The tolerance of sizes that state none.
 #[derive(Debug, Clone)]
 pub(crate) enum General {
-    /// ISO 2768-1, by its class (`f`, `m`, `c`, `v`); with the words as written.
+    /// ISO 2768-1, by its class; with the words as written.
     Iso2768 {
         /// The class of linear and angular tolerances.
-        class: char,
+        class: iso2768::Class,
         /// As written, such as `ISO 2768-m`.
         written: String,
     },

@@ -217,6 +217,17 @@ pub(crate) fn range(
     Some((low, high, low_unit))
 }
 
+/// Settles the units of two numbers as those of the ends of a range; a finding where they can be
+/// read in two ways.
+pub(crate) fn same_unit(
+    cx: &mut Context,
+    first: &tree::Scalar,
+    last: &tree::Scalar,
+    expect: Expect,
+) -> Option<()> {
+    scope::pair(cx, first, last, expect).map(|_| ())
+}
+
 /// A value, a value with a tolerance or a range, with its spread if it states one.
 pub(crate) fn scenario(
     cx: &mut Context,

@@ -1,0 +1,145 @@
+//! Materials: those that a spec defines, and the names by which parts ask for them. SI.
+
+mod block;
+mod expansion;
+mod property;
+mod swell;
+mod table;
+
+use super::context::{Context, suggest};
+use crate::diagnostic::{Code, Diagnostic};
+use crate::materials::{Library, Material};
+use crate::syntax::tree;
+use std::collections::BTreeMap;
+use std::sync::Arc;
+
+/// Most materials that a message lists.
+const LISTED: usize = 6;
+
+/// Resolves every material block; a name of the library may be defined anew.
+///
+/// A block with mistakes is left out, and its name counts as broken, so that its parts are not
+/// reported as well.
+pub(crate) fn resolve(cx: &mut Context, blocks: &[&tree::Material]) {
+    let mut named: BTreeMap<&str, &tree::Material> = BTreeMap::new();
+    for block in blocks {
+        let name = &block.name;
+        let earlier = named.get(name.value.as_str()).map(|first| first.name.span);
+        let earlier = earlier.or_else(|| cx.materials.get(&name.value).map(|(_, span)| *span));
+        let Some(first) = earlier else {
+            named.insert(&name.value, block);
+            continue;
+        };
+        cx.report(
+            Diagnostic::new(
+                Code::DuplicateName,
+                name.span,
+                format!("material `{}` is defined twice", name.value),
+            )
+            .label(first, "first defined here")
+            .help("give one of the two another name"),
+        );
+    }
+    let mut under_way = Vec::new();
+    for block in blocks {
+        define(cx, &named, block.name.value.as_str(), &mut under_way);
+    }
+}
+
+/// Resolves one block, and what it is like before it.
+fn define<'t>(
+    cx: &mut Context,
+    named: &BTreeMap<&'t str, &'t tree::Material>,
+    name: &'t str,
+    under_way: &mut Vec<&'t str>,
+) {
+    let Some(block) = named.get(name) else { return };
+    if cx.materials.contains_key(name) || cx.is_broken(name) {
+        return;
+    }
+    under_way.push(name);
+    let base = match &block.like {
+        None => Some(None),
+        Some(like) if under_way.contains(&like.value.as_str()) && like.value != name => {
+            cx.broken.insert(name.to_string());
+            circle(cx, like, under_way)
+        }
+        // `material x like x` starts from the one of the library.
+        Some(like) if like.value == name => match Library::builtin().get(name) {
+            Some(base) => Some(Some(base)),
+            None => circle(cx, like, &under_way[under_way.len() - 1..]),
+        },
+        Some(like) => {
+            define(cx, named, like.value.as_str(), under_way);
+            find(cx, like).map(Some)
+        }
+    };
+    under_way.pop();
+    match base.and_then(|base| block::material(cx, block, base)) {
+        Some(material) => {
+            let entry = (Arc::new(material), block.name.span);
+            cx.materials.insert(name.to_string(), entry);
+        }
+        None => {
+            cx.broken.insert(name.to_string());
+        }
+    }
+}
+
+fn circle<T>(cx: &mut Context, like: &tree::Name, names: &[&str]) -> Option<T> {
+    let names: Vec<String> = names.iter().map(|name| format!("`{name}`")).collect();
+    cx.refuse(
+        Diagnostic::new(
+            Code::LikeCycle,
+            like.span,
+            format!("materials are like each other in a circle: {}", names.join(", ")),
+        )
+        .help("give one of them an expansion of its own"),
+    )
+}
+
+/// The material of that name: one of the files, else one of the library.
+pub(crate) fn get(cx: &Context, name: &str) -> Option<Arc<Material>> {
+    match cx.materials.get(name) {
+        Some((material, _)) => Some(Arc::clone(material)),
+        None if cx.is_broken(name) => None,
+        None => Library::builtin().get(name),
+    }
+}
+
+/// The material of that name, or a finding with the nearest spelling or with what it may mean.
+pub(crate) fn find(cx: &mut Context, name: &tree::Name) -> Option<Arc<Material>> {
+    if let Some(found) = get(cx, &name.value) {
+        return Some(found);
+    }
+    if cx.is_broken(&name.value) {
+        return None;
+    }
+    let mut names: Vec<&str> = cx.materials.keys().map(String::as_str).collect();
+    for name in Library::builtin().names() {
+        names.push(name);
+    }
+    let near = suggest(&name.value, names);
+    let meant: Vec<String> = Library::builtin()
+        .search(&name.value)
+        .iter()
+        .map(|material| format!("`{}`", material.name))
+        .collect();
+    let help = match (near, meant.len()) {
+        (Some(near), _) => format!("did you mean `{near}`?"),
+        (None, 0) => format!("define it: `material {} {{ cte … ppm/K }}`", name.value),
+        (None, n) if n <= LISTED => format!("did you mean one of {}?", meant.join(", ")),
+        (None, n) => {
+            let rest = n - LISTED;
+            format!("did you mean one of {} or {rest} more?", meant[..LISTED].join(", "))
+        }
+    };
+    cx.refuse(
+        Diagnostic::new(
+            Code::UnknownMaterial,
+            name.span,
+            format!("unknown material `{}`", name.value),
+        )
+        .help(help),
+    )
+}
