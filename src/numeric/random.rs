@@ -8,7 +8,8 @@
 mod normal;
 mod run;
 mod stream;
+mod vectors;
 
-pub use normal::fast_normal_quantile;
 pub use run::{BLOCK, Merge, Moments, monte_carlo};
 pub use stream::Stream;
+pub use vectors::vectorized;

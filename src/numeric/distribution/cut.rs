@@ -16,7 +16,9 @@ pub struct Cut {
     sigma: f64,
     low: f64,
     high: f64,
-    /// The share that sorting keeps.
+    /// The shares that sorting takes off below and above, and that it keeps.
+    off_low: f64,
+    off_high: f64,
     kept: f64,
     /// The mean of what is kept, in standard deviations.
     shift: f64,
@@ -38,7 +40,8 @@ impl Cut {
         if high - low < 0.01 || kept < 1e-12 {
             return Err(Unsound::NothingLeft);
         }
-        let mut cut = Cut { sigma, low, high, kept, shift: 0.0 };
+        let (off_low, off_high) = (normal_tail(-low), normal_tail(high));
+        let mut cut = Cut { sigma, low, high, off_low, off_high, kept, shift: 0.0 };
         cut.shift = cut.central_moment(1);
         Ok(cut)
     }
@@ -65,7 +68,14 @@ impl Cut {
 
     /// The mirror image.
     pub(super) fn mirrored(&self) -> Self {
-        Cut { low: -self.high, high: -self.low, shift: -self.shift, ..*self }
+        Cut {
+            low: -self.high,
+            high: -self.low,
+            off_low: self.off_high,
+            off_high: self.off_low,
+            shift: -self.shift,
+            ..*self
+        }
     }
 
     /// The same cut with every length multiplied by a factor above zero.
@@ -117,17 +127,11 @@ impl Cut {
 
     /// The point, as a distance from the mean, below which the share `u` lies.
     pub(super) fn quantile(&self, u: f64) -> f64 {
-        self.quantile_by(u, normal_quantile)
-    }
-
-    /// [`quantile`](Self::quantile) with a chosen normal quantile, asked for shares below ½ only.
-    #[inline]
-    pub(super) fn quantile_by(&self, u: f64, normal: impl Fn(f64) -> f64) -> f64 {
-        let below = normal_tail(-self.low) + u * self.kept;
+        let below = self.off_low + u * self.kept;
         let v = if below <= 0.5 {
-            normal(below)
+            normal_quantile(below)
         } else {
-            -normal(normal_tail(self.high) + (1.0 - u) * self.kept)
+            -normal_quantile(self.off_high + (1.0 - u) * self.kept)
         };
         self.sigma * (v.clamp(self.low, self.high) - self.shift)
     }

@@ -1,10 +1,11 @@
 //! The loop over the draws: fixed blocks, any number of threads, one order of summing.
 
+use super::vectors::vectorized;
 use rayon::prelude::{IntoParallelIterator, ParallelIterator};
 
 /// Draws in a block. Blocks are the unit of work and of summing, so their size is part of the
-/// result's digits and never depends on the machine.
-pub const BLOCK: usize = 4096;
+/// result's digits and never depends on the machine. A few columns of a block fit the first cache.
+pub const BLOCK: usize = 1024;
 
 /// What blocks of draws are summed up in.
 pub trait Merge: Send {
@@ -34,9 +35,9 @@ impl<A: Merge, B: Merge> Merge for (A, B) {
 /// Runs draws 0 to `draws` in blocks of [`BLOCK`] over the threads of the current pool and merges
 /// the blocks' sums in the order of the draws.
 ///
-/// `block(first, count)` sums up the draws `first..first + count`; its closure is run with the
-/// widest vectors that the machine has. The result is the same for any number of threads. `None`
-/// for no draws.
+/// `block(first, count)` sums up the draws `first..first + count`; marked `#[inline(always)]` it is
+/// compiled for the widest vectors that the machine has. The result is the same for any number of
+/// threads. `None` for no draws.
 pub fn monte_carlo<T: Merge>(draws: u64, block: impl Fn(u64, usize) -> T + Sync) -> Option<T> {
     let blocks = draws.div_ceil(BLOCK as u64);
     // Sums of a batch are merged before the next one starts: memory does not grow with the draws.
@@ -49,7 +50,7 @@ pub fn monte_carlo<T: Merge>(draws: u64, block: impl Fn(u64, usize) -> T + Sync)
             .map(|index| {
                 let first = index * BLOCK as u64;
                 let count = (draws - first).min(BLOCK as u64) as usize;
-                pulp::Arch::new().dispatch(
+                vectorized(
                     #[inline(always)]
                     || block(first, count),
                 )

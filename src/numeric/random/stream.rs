@@ -1,7 +1,7 @@
 //! One unknown's stream of random numbers.
 
 /// The golden-ratio increment of the generator.
-const GAMMA: u64 = 0x9e37_79b9_7f4a_7c15;
+pub(super) const GAMMA: u64 = 0x9e37_79b9_7f4a_7c15;
 
 /// One unknown's stream: draw `k` can be made without the draws before it.
 ///
@@ -33,37 +33,35 @@ impl Stream {
         Stream { key: mix(self.key ^ 0x5851_f42d_4c95_7f2d) }
     }
 
+    /// The state of the generator at a draw.
+    #[inline(always)]
+    pub(super) fn state(self, draw: u64) -> u64 {
+        self.key.wrapping_add(draw.wrapping_mul(GAMMA))
+    }
+
     /// The 64 random bits of a draw.
-    #[inline]
+    #[inline(always)]
     pub fn bits(self, draw: u64) -> u64 {
-        mix(self.key.wrapping_add(draw.wrapping_mul(GAMMA)))
+        mix(self.state(draw))
     }
 
     /// The draw as a number evenly distributed in (0, 1), never 0 or 1: an odd multiple of 2⁻⁵³.
-    #[inline]
+    #[inline(always)]
     pub fn uniform(self, draw: u64) -> f64 {
         even(self.bits(draw))
-    }
-
-    /// Fills `out` with the uniform draws numbered from `first` on.
-    #[inline]
-    pub fn fill_uniform(self, first: u64, out: &mut [f64]) {
-        for (k, x) in (first..).zip(out) {
-            *x = self.uniform(k);
-        }
     }
 }
 
 /// Spreads 52 of the bits over (0, 1): the bits as the mantissa of a number in [1, 2), less one,
 /// plus half a step; every operation is exact.
-#[inline]
+#[inline(always)]
 fn even(bits: u64) -> f64 {
     (f64::from_bits((bits >> 12) | 0x3ff0_0000_0000_0000) - 1.0) + f64::EPSILON * 0.5
 }
 
 /// Stafford's variant 13 of the 64-bit finalizer.
-#[inline]
-fn mix(state: u64) -> u64 {
+#[inline(always)]
+pub(super) fn mix(state: u64) -> u64 {
     let z = (state ^ (state >> 30)).wrapping_mul(0xbf58_476d_1ce4_e5b9);
     let z = (z ^ (z >> 27)).wrapping_mul(0x94d0_49bb_1331_11eb);
     z ^ (z >> 31)
