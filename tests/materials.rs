@@ -3,3 +3,4 @@
 mod document;
 mod enclosure;
 mod laws;
+mod random_tables;
