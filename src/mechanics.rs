@@ -1,3 +1,13 @@
-//! (room under construction)
+//! Formulas of solids: how parts expand, press, hold each other and enclose.
+//!
+//! Each stands once, generic over [`crate::numeric::Number`], in the symbols of the book it is from,
+//! with its source and what it is valid for. SI throughout; a pull is positive, a pressure is
+//! positive as it presses. Knows neither parts, conditions nor text: whoever evaluates a model brings
+//! the numbers. What each formula neglects is gathered in `docs/method-joints.md`.
 
+pub mod contact;
 pub mod expansion;
+pub mod joint;
+pub mod ring;
+
+pub use ring::{Ring, Stress};

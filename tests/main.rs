@@ -5,6 +5,7 @@
 
 mod interval_laws;
 mod materials;
+mod mechanics;
 mod published;
 mod standards_laws;
 mod syntax;

@@ -9,4 +9,5 @@ mod iso286;
 mod iso286_formulas;
 mod iso286_tables;
 mod mixed_sums;
+mod press_fits;
 mod statistics;

@@ -1,0 +1,4 @@
+//! Formulas of solids against a second way of computing them, and against laws.
+
+mod laws;
+mod rings;
