@@ -159,6 +159,14 @@ mod tests {
         let range = refused("20 .. 200 degC", "200 .. 20 degC");
         assert_eq!(range.message, "the range `200 .. 20 degC` does not rise");
 
+        let beyond = refused("20 .. 200 degC", "0 .. 200 degC");
+        assert_eq!(
+            beyond.message,
+            "the range reaches beyond the data, which cover 293.15 .. 473.15 K"
+        );
+        let area = refused("240 MPa", "240 mm2");
+        assert_eq!(area.message, "expected a stress, found `240 mm2`, an area");
+
         let grade = refused("grade: supplier", "grade: rumour");
         assert!(grade.message.starts_with("unknown variant `rumour`"), "{grade}");
     }

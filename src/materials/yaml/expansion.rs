@@ -283,8 +283,12 @@ impl Block {
         let range = self.range.map(|range| range.0);
         let mut expansion = form.expansion(range.map(|range| (range.lo(), range.hi())))?;
         if let Some(range) = range {
-            if !expansion.range.encloses(range) {
-                return Err("the range reaches beyond the data".to_string());
+            let data = expansion.range;
+            if range.lo() < data.lo() - SAME || range.hi() > data.hi() + SAME {
+                let (lo, hi) = (data.lo(), data.hi());
+                return Err(format!(
+                    "the range reaches beyond the data, which cover {lo:.2} .. {hi:.2} K"
+                ));
             }
             expansion.range = range;
         }
@@ -297,7 +301,12 @@ impl Block {
     }
 }
 
-const NO_FORM: &str = "expected one of `constant`, `mean`, `instantaneous`, `log10`, `total`, `polynomial`, `density`";
+/// What is said where no form of expansion stands.
+const NO_FORM: &str = "expected one of `constant`, `mean`, `instantaneous`, `log10`, `total`, \
+                       `polynomial`, `density`";
+
+/// Temperatures this close, K, are one: a range may be in another unit than its table.
+const SAME: f64 = 1e-9;
 
 #[derive(Debug)]
 struct ScatterEntry(Scatter);

@@ -58,6 +58,13 @@ pub(super) fn unit_of(spelling: &str, kind: Kind) -> Result<&'static Unit, Strin
     }
 }
 
+/// A kind of quantity with its article.
+fn one(kind: Kind) -> String {
+    let word = kind.word();
+    let article = if word.starts_with(['a', 'e', 'i', 'o', 'u']) { "an" } else { "a" };
+    format!("{article} {word}")
+}
+
 /// One number with its unit, in SI.
 #[derive(Debug)]
 pub(super) struct Quantity<M> {
@@ -77,7 +84,7 @@ impl<M: Measured> Quantity<M> {
         }
         let unit = units::find(spelling).ok_or_else(|| format!("unknown unit `{spelling}`"))?;
         if unit.kind != M::KIND {
-            return Err(format!("expected a {}, found `{text}`, a {}", M::WORD, unit.kind.word()));
+            return Err(format!("expected a {}, found `{text}`, {}", M::WORD, one(unit.kind)));
         }
         Quantity::new(unit.to_si(number))
     }
