@@ -2,6 +2,7 @@
 
 mod hostile;
 mod mistakes;
+mod page;
 mod tidy;
 mod whole;
 

@@ -27,6 +27,7 @@ pub(super) fn join(mut rows: Vec<Row>) -> String {
     }) {
         if run[0].kind == Some(Kind::Condition) {
             pad_numbers(run);
+            continue;
         }
         for column in 0..run.iter().map(|row| row.cells.len()).max().unwrap_or(1).saturating_sub(1)
         {
@@ -65,20 +66,20 @@ pub(super) fn join(mut rows: Vec<Row>) -> String {
     out
 }
 
-/// Puts the units of the first numbers under each other.
+/// Puts the last whole digits of the rows' numbers under each other, as far left as the names allow;
+/// a row that holds no number begins where the longest number does.
 fn pad_numbers(run: &mut [Row]) {
-    let whole = |row: &Row| {
+    let digits = |row: &Row| {
         let text = row.cells.last().map_or("", String::as_str);
-        let signed = text.starts_with(|c: char| c.is_ascii_digit() || "+-\u{2212}.".contains(c));
-        signed.then(|| {
-            text.chars().take_while(|c| c.is_ascii_digit() || "+-\u{2212}".contains(*c)).count()
-        })
+        text.chars().take_while(|c| c.is_ascii_digit() || "+-\u{2212}".contains(*c)).count()
     };
-    let widest = run.iter().filter_map(whole).max().unwrap_or(0);
-    for row in run {
-        if let (Some(here), Some(cell)) = (whole(row), row.cells.last_mut()) {
-            cell.insert_str(0, &" ".repeat(widest - here));
-        }
+    let longest = run.iter().map(digits).max().unwrap_or(0);
+    let indent = |row: &Row| if digits(row) == 0 { 0 } else { longest - digits(row) };
+    let least = |row: &Row| (width(&row.cells[0]) + 1).saturating_sub(indent(row));
+    let begin = run.iter().filter(|row| row.cells.len() > 1).map(least).max().unwrap_or(0);
+    for row in run.iter_mut().filter(|row| row.cells.len() > 1) {
+        let blanks = begin + indent(row) - width(&row.cells[0]) - 1;
+        row.cells[0].push_str(&" ".repeat(blanks));
     }
 }
 
