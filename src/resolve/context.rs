@@ -210,6 +210,33 @@ impl<'a> Context<'a> {
         })
     }
 
+    /// Reports a dimension that a part does not have, with the nearest spelling.
+    pub(crate) fn unknown_dimension<T>(
+        &mut self,
+        part: PartId,
+        owner: &str,
+        name: &crate::syntax::tree::Name,
+    ) -> Option<T> {
+        if self.is_broken(&name.value) {
+            return None;
+        }
+        let names: Vec<&str> =
+            self.dimension_names.get(&part).map(|n| n.names().collect()).unwrap_or_default();
+        let help = match suggest(&name.value, names.iter().copied()) {
+            Some(near) => format!("did you mean `{near}`?"),
+            None if names.is_empty() => format!("`{owner}` has no dimensions at all"),
+            None => format!("its dimensions are `{}`", names.join("`, `")),
+        };
+        self.refuse(
+            Diagnostic::new(
+                Code::UnknownDimension,
+                name.span,
+                format!("`{owner}` has no dimension `{}`", name.value),
+            )
+            .help(help),
+        )
+    }
+
     /// Reports a name that nothing defines, with the nearest spelling or with what there is.
     pub(crate) fn unknown<T>(
         &mut self,

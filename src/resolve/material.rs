@@ -128,6 +128,7 @@ pub(crate) fn find(cx: &mut Context, name: &tree::Name) -> Option<Arc<Material>>
     let help = match (near, meant.len()) {
         (Some(near), _) => format!("did you mean `{near}`?"),
         (None, 0) => format!("define it: `material {} {{ cte … ppm/K }}`", name.value),
+        (None, 1) => format!("did you mean {}?", meant[0]),
         (None, n) if n <= LISTED => format!("did you mean one of {}?", meant.join(", ")),
         (None, n) => {
             let rest = n - LISTED;

@@ -223,12 +223,8 @@ fn dimensions(cx: &mut Context, part: &tree::Part, owner: &Owner, origin: &Origi
                 id
             }
             (Origin::Like(base), _) => {
-                let noun = format!("dimension of `{}`", cx.parts[base.index()].name);
-                let base = *base;
-                let none: Option<()> = cx.unknown(Code::UnknownDimension, &noun, name, |cx| {
-                    let names = cx.dimension_names.get(&base);
-                    names.map(|n| n.names().map(str::to_string).collect()).unwrap_or_default()
-                });
+                let drawn = cx.parts[base.index()].name.clone();
+                let none: Option<()> = cx.unknown_dimension(*base, &drawn, name);
                 debug_assert!(none.is_none());
                 continue;
             }

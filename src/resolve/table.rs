@@ -63,11 +63,14 @@ pub(crate) fn read(cx: &mut Context, file: FileId) -> Option<Table> {
         }
         if row.len() != columns {
             let here = Span::new(file, line.0, line.0 + line.1.len());
-            return cx.refuse(Diagnostic::new(
-                Code::TableShape,
-                here,
-                format!("expected {}, found {}", count(columns), row.len()),
-            ));
+            return cx.refuse(
+                Diagnostic::new(
+                    Code::TableShape,
+                    here,
+                    format!("expected {}, found {}", count(columns), row.len()),
+                )
+                .help("every row has a cell for each column"),
+            );
         }
         let mut numbers = Vec::with_capacity(columns);
         for (text, span) in row {
@@ -145,7 +148,7 @@ fn cell(cx: &mut Context, text: &str, span: Span) -> Option<Cell> {
             Diagnostic::new(Code::TableCell, span, format!("expected a number, found `{text}`"))
         }
     };
-    cx.refuse(finding)
+    cx.refuse(finding.help("cells hold numbers; units stand in the header, as `NAME [unit]`"))
 }
 
 /// The unit of a column: its own, or that of the spec that reads it.
@@ -174,7 +177,10 @@ pub(crate) fn default_unit(cx: &mut Context, expect: Expect, place: Span) -> Opt
         Diagnostic::new(
             Code::UnitMissing,
             place,
-            format!("the table says no unit for its values, expected a {}", kind.word()),
+            format!(
+                "the table says no unit for its values, expected {}",
+                quantity::with_article(kind)
+            ),
         )
         .help("write it into the header of the column, as `NAME [unit]`"),
     )

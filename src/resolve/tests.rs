@@ -42,16 +42,10 @@ impl Resolved {
     }
 }
 
-fn read(text: &str, files: &'static [(&'static str, &'static str)]) -> Resolved {
-    let mut sources = Sources::default();
-    let file = sources.add(Source::new("a.gap", text));
-    let parsed = syntax::parse(text, file);
-    assert_eq!(parsed.diagnostics, [], "{text}");
-    let beside = Beside(files);
-    let mut cx = Context::new(&mut sources, &beside);
+fn run(cx: &mut Context, file: crate::span::FileId, tree: &syntax::tree::File) {
     let (mut parts, mut conditions, mut materials) = (Vec::new(), Vec::new(), Vec::new());
-    head::resolve(&mut cx, file, &parsed.tree);
-    for statement in &parsed.tree.statements {
+    head::resolve(cx, file, tree);
+    for statement in &tree.statements {
         match statement {
             Statement::Part(p) => {
                 let id = PartId(parts.len() as u32);
@@ -72,10 +66,20 @@ fn read(text: &str, files: &'static [(&'static str, &'static str)]) -> Resolved 
             _ => {}
         }
     }
-    material::resolve(&mut cx, &materials);
-    part::resolve(&mut cx, &parts);
-    condition::resolve(&mut cx, &conditions);
-    dimension::report_unsettled(&mut cx);
+    material::resolve(cx, &materials);
+    part::resolve(cx, &parts);
+    condition::resolve(cx, &conditions);
+    dimension::report_unsettled(cx);
+}
+
+fn read(text: &str, files: &'static [(&'static str, &'static str)]) -> Resolved {
+    let mut sources = Sources::default();
+    let file = sources.add(Source::new("a.gap", text));
+    let parsed = syntax::parse(text, file);
+    assert_eq!(parsed.diagnostics, [], "{text}");
+    let beside = Beside(files);
+    let mut cx = Context::new(&mut sources, &beside);
+    run(&mut cx, file, &parsed.tree);
     Resolved {
         materials: cx.materials.values().map(|(m, _)| m.clone()).collect(),
         conditions: cx.conditions,

@@ -154,7 +154,7 @@ fn not_a_difference(cx: &mut Context, part: &str, quantity: &Quantity) -> Option
             quantity.span(),
             format!("`{written}` may be a temperature or a difference"),
         )
-        .here(format!("temperatures of this file are in {}", own.name))
+        .here(format!("temperatures of this file are in `{}`", own.name))
         .help(format!(
             "write `{part} {written} above` for a difference, `{part} {there}` for a temperature"
         )),

@@ -88,7 +88,12 @@ fn surfaces(cx: &mut Context, stated: &tree::Coating, form: Form) -> Option<f64>
     }
 }
 
-/// True where a coating or a material condition cannot be reckoned before the side is known.
+/// True for a feature of size: a diameter, a radius or a width.
+pub(super) fn is_size(dimension: &Dimension) -> bool {
+    dimension.geometric.is_none() && dimension.form != Form::Angle
+}
+
+/// True where a coating cannot be reckoned with before the side is known.
 pub(super) fn needs_side(dimension: &Dimension) -> bool {
     dimension.feature == Feature::Unstated
         && dimension.coating.as_ref().is_some_and(|coating| coating.before)
@@ -129,6 +134,7 @@ pub(crate) fn report_unsettled(cx: &mut Context) {
         let bonus = dimension.geometric.and_then(|geometric| geometric.bonus);
         if let Some(feature) = bonus.and_then(|id| cx.dimensions.get(id.index()))
             && feature.feature == Feature::Unstated
+            && is_size(feature)
         {
             let message = format!(
                 "the maximum material condition of `{}` is not known: it may be a hole or a shaft",

@@ -1,8 +1,9 @@
 //! Geometrical tolerances as contributors of zero nominal.
 
+use super::coating::is_size;
 use super::{Owner, Sized};
 use crate::diagnostic::{Code, Diagnostic};
-use crate::model::{DimensionId, Form, Geometric, Origin};
+use crate::model::{DimensionId, Geometric, Origin};
 use crate::resolve::context::Context;
 use crate::resolve::quantity::{self, Expect};
 use crate::standards::geometry::Characteristic;
@@ -96,12 +97,7 @@ fn bonus(
     }
     let names = cx.dimension_names.get(&owner.part)?;
     let Some(id) = names.get(&path.name.value) else {
-        let noun = format!("dimension of `{}`", owner.name);
-        let part = owner.part;
-        return cx.unknown(Code::UnknownDimension, &noun, &path.name, |cx| {
-            let names = cx.dimension_names.get(&part);
-            names.map(|n| n.names().map(str::to_string).collect()).unwrap_or_default()
-        });
+        return cx.unknown_dimension(owner.part, &owner.name, &path.name);
     };
     Some(id)
 }
@@ -111,7 +107,7 @@ pub(in crate::resolve) fn check_bonus(cx: &mut Context, id: DimensionId) {
     let dimension = &cx.dimensions[id.index()];
     let Some(of) = dimension.geometric.and_then(|geometric| geometric.bonus) else { return };
     let feature = &cx.dimensions[of.index()];
-    if feature.geometric.is_none() && feature.form != Form::Angle {
+    if is_size(feature) {
         return;
     }
     let finding = Diagnostic::new(

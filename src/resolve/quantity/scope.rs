@@ -5,7 +5,7 @@
 //! since `58 ±50 um` could be meant either way. A `%` after `±` is a share of a value that is not
 //! itself in %.
 
-use super::unit::{measures, unit, unit_for};
+use super::unit::{measures, unit, unit_for, with_article};
 use super::{Context, Expect};
 use crate::diagnostic::{Code, Diagnostic};
 use crate::span::Span;
@@ -49,11 +49,15 @@ fn bare(cx: &mut Context, span: Span, expect: Expect) -> Option<&'static Unit> {
         return Some(unit);
     }
     let kind = expect.kind();
-    let example = cx.head(span.file).defaults.shown(kind).name;
+    // What is no size of the file, a coating for one, is thin.
+    let example = match kind {
+        Kind::LENGTH => "um",
+        kind => cx.head(span.file).defaults.shown(kind).name,
+    };
     let finding = Diagnostic::new(
         Code::UnitMissing,
         span,
-        format!("expected a {} with its unit, found a bare `{}`", kind.word(), cx.text(span)),
+        format!("expected {} with its unit, found a bare `{}`", with_article(kind), cx.text(span)),
     );
     let finding = match example {
         "" => finding,
@@ -144,7 +148,7 @@ fn at_the_end(
     (a, b): (&tree::Unit, &tree::Unit),
     expect: Expect,
 ) -> Option<GroupUnits> {
-    let unit = unit(cx, a)?;
+    let unit = unit(cx, a, expect)?;
     if unit.name == "%" && expect == Expect::Strain {
         let (v, t) = (cx.text(value.span()).to_string(), cx.text(tolerance.span).to_string());
         let t = t.trim_end_matches([' ', '%', '\u{a0}', '\u{2009}', '\u{202f}']);
@@ -154,7 +158,9 @@ fn at_the_end(
             "`%` after the tolerance alone can be read in two ways",
         )
         .here("does it govern the value as well?")
-        .help(format!("write `{v} % {t}` for points of per cent, or `{v} ppm {t} ppm`"));
+        .help(format!(
+            "write `{v} % {t}` for both in per cent; a share stands after a unit, as in `900 ppm ±1 %`"
+        ));
         return cx.refuse(finding);
     }
     if unit.name == "%" && !is_temperature(expect) {
@@ -194,7 +200,7 @@ fn counted_in(
     of_value: &'static Unit,
     expect: Expect,
 ) -> Option<Of> {
-    let unit = unit(cx, written)?;
+    let unit = unit(cx, written, expect)?;
     let relative = unit.name == "%" && of_value.name != "%" && !is_temperature(expect);
     if relative {
         return Some(Of::Share);
@@ -233,7 +239,7 @@ fn both_readings<T>(
             whole,
             format!("`{}` after the last number alone can be read in two ways", written.value),
         )
-        .here(format!("bare numbers of this file are in {}", own.name))
+        .here(format!("bare numbers of this file are in `{}`", own.name))
         .help(format!("write `{}` or `{}`", readings[0], readings[1])),
     )
 }

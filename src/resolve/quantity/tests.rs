@@ -199,3 +199,27 @@ fn what_is_no_such_quantity_is_refused() {
     assert_refused("-300", Expect::Temperature, Code::BelowAbsoluteZero);
     assert_refused("85 .. -40", Expect::Temperature, Code::LimitsReversed);
 }
+
+/// The limits of a requirement as read, least and greatest.
+fn limits_of(limit: &str, kind: Kind) -> (Option<f64>, Option<f64>) {
+    let text = format!("gap g = 1 mm {{ require {limit} }}");
+    let mut sources = Sources::default();
+    let file = sources.add(Source::new("a.gap", text.clone()));
+    let parsed = crate::syntax::parse(&text, file);
+    assert_eq!(parsed.diagnostics, []);
+    let Some(tree::Statement::Gap(gap)) = parsed.tree.statements.first() else { panic!("a gap") };
+    let mut cx = Context::new(&mut sources, &NoFiles);
+    let read = limits(&mut cx, &gap.requirements[0].limit, kind).expect(limit);
+    (read.lower.map(|l| l.value), read.upper.map(|l| l.value))
+}
+
+#[test]
+fn limits_follow_the_file_and_shares_are_pure() {
+    assert_eq!(limits_of(">= 0.04", Kind::LENGTH), (Some(4e-5), None));
+    assert_eq!(limits_of("0.05 .. 0.5", Kind::LENGTH), (Some(5e-5), Some(5e-4)));
+    assert_eq!(limits_of("stress in screw <= 80 % of yield", Kind::STRESS), (None, Some(0.8)));
+    assert_eq!(limits_of("torque >= 12 N*m", Kind::TORQUE), (Some(12.0), None));
+    assert_eq!(limits_of("<= 3 deg", Kind::ANGLE), (None, Some(std::f64::consts::PI / 60.0)));
+    let (lower, upper) = limits_of("3 ±0.5", Kind::LENGTH);
+    assert_eq!((lower, upper), (Some(0.0025), Some(0.0035)));
+}

@@ -7,17 +7,20 @@ use crate::syntax::tree;
 use crate::units::{self, Kind, Unit};
 
 /// Spellings that mean one thing in one shop and another in the next.
-const AMBIGUOUS: [(&str, &str); 6] = [
+const AMBIGUOUS: [(&str, &str); 4] = [
     ("mil", "a `mil` is a thousandth of an inch or a millimetre: write `thou` or `mm`"),
     ("mils", "`mils` are thousandths of an inch or millimetres: write `thou` or `mm`"),
     ("tenth", "a `tenth` is a tenth of a thou or of a millimetre: write `0.1 thou` or `0.1 mm`"),
     ("tenths", "`tenths` are of a thou or of a millimetre: write `0.1 thou` or `0.1 mm`"),
-    ("grad", "a `grad` is a gon or, in some languages, a degree: write `deg`"),
-    ("deg.", "write `deg` for an angle, `degC` or `degF` for a temperature"),
 ];
 
-/// The unit of that spelling, or a finding.
-pub(crate) fn unit(cx: &mut Context, written: &tree::Unit) -> Option<&'static Unit> {
+/// The unit of that spelling, or a finding; the nearest spelling is one of the kind expected if there
+/// is any.
+pub(super) fn unit(
+    cx: &mut Context,
+    written: &tree::Unit,
+    expect: Expect,
+) -> Option<&'static Unit> {
     let spelling = written.value.as_str();
     if let Some(unit) = units::find(spelling) {
         return Some(unit);
@@ -34,9 +37,13 @@ pub(crate) fn unit(cx: &mut Context, written: &tree::Unit) -> Option<&'static Un
     }
     let mut finding =
         Diagnostic::new(Code::UnknownUnit, written.span, format!("unknown unit `{spelling}`"));
-    let names =
-        units::all().flat_map(|u| std::iter::once(u.name).chain(u.spellings.iter().copied()));
-    if let Some(near) = suggest(spelling, names.filter(|n| !n.is_empty())) {
+    let spellings = |fits: &dyn Fn(&Unit) -> bool| -> Vec<&'static str> {
+        let units = units::all().filter(|unit| !unit.name.is_empty() && fits(unit));
+        units.flat_map(|u| std::iter::once(u.name).chain(u.spellings.iter().copied())).collect()
+    };
+    let near = suggest(spelling, spellings(&|unit| measures(unit, expect)))
+        .or_else(|| suggest(spelling, spellings(&|_| true)));
+    if let Some(near) = near {
         finding = finding.help(format!("did you mean `{near}`?"));
     }
     cx.refuse(finding)
@@ -48,7 +55,7 @@ pub(crate) fn unit_for(
     written: &tree::Unit,
     expect: Expect,
 ) -> Option<&'static Unit> {
-    let unit = unit(cx, written)?;
+    let unit = unit(cx, written, expect)?;
     if measures(unit, expect) {
         return Some(unit);
     }
@@ -71,8 +78,8 @@ pub(crate) fn wrong_kind(written: &tree::Unit, unit: &Unit, expected: Kind) -> D
         Code::WrongKind,
         written.span,
         format!(
-            "expected a {}, found `{}`, a unit of {}",
-            expected.word(),
+            "expected {}, found `{}`, a unit of {}",
+            with_article(expected),
             written.value,
             unit.kind.word()
         ),
@@ -82,5 +89,21 @@ pub(crate) fn wrong_kind(written: &tree::Unit, unit: &Unit, expected: Kind) -> D
     if expected == Kind::LENGTH && letters.len() == 1 && unit.kind == Kind::TEMPERATURE {
         return finding.help(format!("a class needs its grade, as `{letters}6`"));
     }
-    finding
+    let scale = if expected == Kind::DIFFERENCE { Kind::TEMPERATURE } else { expected };
+    let known: Vec<String> = units::all()
+        .filter(|unit| unit.kind == scale && !unit.name.is_empty())
+        .map(|unit| format!("`{}`", unit.name))
+        .collect();
+    match known.split_last() {
+        Some((last, [])) => finding.help(format!("its unit is {last}")),
+        Some((last, rest)) => finding.help(format!("its units are {} and {last}", rest.join(", "))),
+        None => finding,
+    }
+}
+
+/// `a length`, `an angle`.
+pub(crate) fn with_article(kind: Kind) -> String {
+    let word = kind.word();
+    let article = if word.starts_with(['a', 'e', 'i', 'o', 'u']) { "an" } else { "a" };
+    format!("{article} {word}")
 }

@@ -1,0 +1,9 @@
+assembly "Plate on a base"
+condition cold -40
+
+part plate of steel_c45 {
+  size = dia 8 ±0.02
+  place = position dia 0.2 at MMC of size
+}
+part base of steel_c45 { height = 60 ±0.1 }
+gap between = base.height - plate.size { require "R-1" >= -1000 mm }

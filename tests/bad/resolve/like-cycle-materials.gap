@@ -1,0 +1,10 @@
+assembly "Plate on a base"
+condition cold -40
+
+material one like two
+material two like one
+part plate of one {
+  size = 58 ±0.05
+}
+part base of steel_c45 { height = 60 ±0.1 }
+gap between = base.height - plate.size { require "R-1" >= -1000 mm }

@@ -1,0 +1,8 @@
+assembly "Plate on a base"
+condition cold -40
+
+part plate of steel_c45 {
+  size = 58 ±0.05 spread from "data/two-columns.csv"
+}
+part base of steel_c45 { height = 60 ±0.1 }
+gap between = base.height - plate.size { require "R-1" >= -1000 mm }
