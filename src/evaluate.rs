@@ -76,6 +76,21 @@ pub fn evaluate(assembly: &Assembly, options: &Options) -> Evaluation {
     run.evaluation
 }
 
+/// Records one quantity of a subject at a condition, to be replayed with any kind of number; the
+/// first member of any `one of` set is taken.
+///
+/// # Errors
+/// When a material does not state what the quantity needs.
+pub fn respond(
+    assembly: &Assembly,
+    subject: SubjectId,
+    quantity: Quantity,
+    condition: Option<ConditionId>,
+) -> Result<Response, Unable> {
+    let asked = Asked { subject, quantity, condition, of_yield: false, members: Vec::new() };
+    figure::response(assembly, &[], &asked)
+}
+
 struct Run<'a> {
     assembly: &'a Assembly,
     detail: Detail,
