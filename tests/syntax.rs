@@ -33,6 +33,24 @@ fn specs() -> Vec<(String, String)> {
     specs
 }
 
+/// Every spec of the project, with its path.
+fn all_specs() -> Vec<(String, String)> {
+    let mut found = specs();
+    let mut folders = vec![place("../specs")];
+    while let Some(folder) = folders.pop() {
+        for entry in std::fs::read_dir(folder).expect("the folder is part of the project") {
+            let path = entry.expect("a readable entry").path();
+            if path.is_dir() {
+                folders.push(path);
+            } else if path.extension().is_some_and(|extension| extension == "gap") {
+                let text = std::fs::read_to_string(&path).expect("a readable spec");
+                found.push((path.to_string_lossy().into_owned(), text));
+            }
+        }
+    }
+    found
+}
+
 fn read(text: &str) -> Parsed {
     parse(text, FileId(0))
 }

@@ -1,11 +1,11 @@
 //! Whole specs: nothing is reported, nothing is lost, and each place is where its words are.
 
-use super::{findings, read, specs};
+use super::{all_specs, findings, read, specs};
 use gapkeep::syntax::tree::{ExprKind, Material, Part, PropertyValue, Size, Statement};
 
 #[test]
 fn specs_parse_without_a_word() {
-    for (name, text) in specs() {
+    for (name, text) in all_specs() {
         assert_eq!(findings(&text), "", "{name}");
         assert!(read(&text).tree.broken.is_empty(), "{name}");
     }

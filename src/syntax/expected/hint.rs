@@ -2,6 +2,7 @@
 
 use super::nearest;
 use crate::syntax::STATEMENT_WORDS;
+use crate::syntax::found::short;
 use crate::syntax::layout::{Line, word_at};
 
 /// A way out of the commoner mistakes.
@@ -45,6 +46,9 @@ pub(super) fn hint(
     if rest.starts_with('.') && before.ends_with(|c: char| c.is_ascii_digit()) {
         return Some("a number does not end in a point; write `5` or `5.0`".to_owned());
     }
+    if let Some(number) = unsigned_exponent(before, if glued { rest } else { "" }) {
+        return Some(format!("an exponent has its sign: `{number}`"));
+    }
     if previous == "x" && !found.is_empty() {
         let digits = last_number(before[..before.len() - 1].trim_end());
         return Some(format!(
@@ -81,6 +85,19 @@ pub(super) fn hint(
     }
     (rest.starts_with('"') && words.contains(&"because"))
         .then(|| "write `because` before the reason".to_owned())
+}
+
+/// The number that `2e10` is meant for, if one ends where the text was understood, or goes on there.
+fn unsigned_exponent(before: &str, glued: &str) -> Option<String> {
+    let part = |c: char| c.is_ascii_alphanumeric() || c == '.';
+    let start = before
+        .rfind(|c| !part(c))
+        .map_or(0, |at| at + before[at..].chars().next().map_or(1, char::len_utf8));
+    let more = glued.find(|c| !part(c)).unwrap_or(glued.len());
+    let token = format!("{}{}", short(&before[start..]), short(&glued[..more]));
+    let (number, power) = token.split_once(['e', 'E'])?;
+    let numeric = |text: &str| !text.is_empty() && text.bytes().all(|byte| byte.is_ascii_digit());
+    (numeric(&number.replacen('.', "", 1)) && numeric(power)).then(|| format!("{number}e+{power}"))
 }
 
 fn last_word(text: &str) -> &str {

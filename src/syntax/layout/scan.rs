@@ -90,7 +90,7 @@ impl<'a> Scanner<'a> {
     fn statement(&mut self) {
         if !self.stack.is_empty() && begins_file_statement(self.text, self.at) {
             self.close_all_unclosed(Some(self.at));
-        } else if self.context() == Context::Joint && word_at(self.text, self.at) == "require" {
+        } else if self.cannot_stand_here() {
             self.close_unclosed(Some(self.at));
         }
         let line = self.words();
@@ -100,6 +100,28 @@ impl<'a> Scanner<'a> {
             self.open_block(line);
         } else {
             self.skip_block(line);
+        }
+    }
+
+    /// True for a line of the block around the innermost: a requirement in a joint, a property in a table.
+    fn cannot_stand_here(&self) -> bool {
+        let word = word_at(self.text, self.at);
+        match self.context() {
+            Context::Joint => word == "require",
+            Context::Rows if self.stack.len() > 1 => matches!(
+                word,
+                "cte"
+                    | "expansion"
+                    | "modulus"
+                    | "bulk"
+                    | "poisson"
+                    | "yield"
+                    | "density"
+                    | "swell"
+                    | "source"
+                    | "extrapolate"
+            ),
+            _ => false,
         }
     }
 

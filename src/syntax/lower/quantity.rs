@@ -3,6 +3,7 @@
 use super::{Lower, spelled, string};
 use crate::diagnostic::{Code, Diagnostic};
 use crate::span::Spanned;
+use crate::syntax::found::short;
 use crate::syntax::grammar::{Node, Rule};
 use crate::syntax::tree::{
     Deviation, Distribution, Group, Number, Quantity, Range, Scalar, Spread, Tolerance,
@@ -49,7 +50,31 @@ impl Lower {
                 _ => {}
             }
         }
-        Some(Scalar { number: number?, unit })
+        let scalar = Scalar { number: number?, unit };
+        if self.unsigned_exponent(&scalar) { None } else { Some(scalar) }
+    }
+
+    /// Reports a power of ten without its sign, which would otherwise be an odd unit.
+    fn unsigned_exponent(&mut self, scalar: &Scalar) -> bool {
+        let Some(unit) =
+            scalar.unit.as_ref().filter(|unit| unit.span.start == scalar.number.span.end)
+        else {
+            return false;
+        };
+        let Some(power) = unit.value.strip_prefix(['e', 'E']) else { return false };
+        if power.is_empty() || !power.bytes().all(|byte| byte.is_ascii_digit()) {
+            return false;
+        }
+        let (number, power) = (short(&scalar.number.text), short(power));
+        self.report(
+            Diagnostic::new(
+                Code::SyntaxError,
+                unit.span,
+                format!("expected a unit, found `{}`", short(&unit.value)),
+            )
+            .help(format!("an exponent has its sign: `{number}e+{power}`")),
+        );
+        true
     }
 
     /// What stands after `..`.

@@ -1,0 +1,1 @@
+material alloy { modulus 69e3 MPa }
