@@ -10,7 +10,7 @@ use super::context::{Context, suggest};
 use crate::diagnostic::{Code, Diagnostic};
 use crate::materials::{Library, Material};
 use crate::syntax::tree;
-use std::collections::BTreeMap;
+use std::collections::{BTreeMap, BTreeSet};
 use std::sync::Arc;
 
 /// Most materials that a message lists.
@@ -40,62 +40,74 @@ pub(crate) fn resolve(cx: &mut Context, blocks: &[&tree::Material]) {
             .help("give one of the two another name"),
         );
     }
-    let mut under_way = Vec::new();
     for block in blocks {
-        define(cx, &named, block.name.value.as_str(), &mut under_way);
+        define(cx, &named, block.name.value.as_str());
     }
 }
 
-/// Resolves one block, and what it is like before it.
-fn define<'t>(
-    cx: &mut Context,
-    named: &BTreeMap<&'t str, &'t tree::Material>,
-    name: &'t str,
-    under_way: &mut Vec<&'t str>,
-) {
-    let Some(block) = named.get(name) else { return };
-    if cx.materials.contains_key(name) || cx.is_broken(name) {
+/// Resolves one block, and before it all that it is like.
+fn define<'t>(cx: &mut Context, named: &BTreeMap<&'t str, &'t tree::Material>, name: &'t str) {
+    let is_done = |cx: &Context, name: &str| cx.materials.contains_key(name) || cx.is_broken(name);
+    if is_done(cx, name) {
         return;
     }
-    under_way.push(name);
-    let base = match &block.like {
-        None => Some(None),
-        Some(like) if under_way.contains(&like.value.as_str()) && like.value != name => {
-            cx.broken.insert(name.to_string());
-            circle(cx, like, under_way)
+    let mut chain = vec![name];
+    let mut on_it = BTreeSet::from([name]);
+    while let Some(block) = named.get(chain[chain.len() - 1])
+        && let Some(like) = base_of(block)
+        && named.contains_key(like.value.as_str())
+        && !is_done(cx, &like.value)
+    {
+        let next = like.value.as_str();
+        if !on_it.insert(next) {
+            let first = chain.iter().position(|name| *name == next).unwrap_or(0);
+            circle(cx, like, &chain[first..]);
+            cx.broken.extend(chain.drain(first..).map(str::to_string));
+            break;
         }
-        // `material x like x` starts from the one of the library.
-        Some(like) if like.value == name => match Library::builtin().get(name) {
-            Some(base) => Some(Some(base)),
-            None => circle(cx, like, &under_way[under_way.len() - 1..]),
-        },
-        Some(like) => {
-            define(cx, named, like.value.as_str(), under_way);
-            find(cx, like).map(Some)
-        }
-    };
-    under_way.pop();
-    match base.and_then(|base| block::material(cx, block, base)) {
-        Some(material) => {
-            let entry = (Arc::new(material), block.name.span);
-            cx.materials.insert(name.to_string(), entry);
-        }
-        None => {
-            cx.broken.insert(name.to_string());
+        chain.push(next);
+    }
+    for name in chain.into_iter().rev() {
+        let Some(block) = named.get(name) else { continue };
+        let base = match &block.like {
+            None => Some(None),
+            // `material x like x` starts from the one of the library.
+            Some(like) if like.value == name => {
+                let base = Library::builtin().get(name);
+                if base.is_none() {
+                    circle(cx, like, &[name]);
+                }
+                base.map(Some)
+            }
+            Some(like) => find(cx, like).map(Some),
+        };
+        match base.and_then(|base| block::material(cx, block, base)) {
+            Some(material) => {
+                let entry = (Arc::new(material), block.name.span);
+                cx.materials.insert(name.to_string(), entry);
+            }
+            None => {
+                cx.broken.insert(name.to_string());
+            }
         }
     }
 }
 
-fn circle<T>(cx: &mut Context, like: &tree::Name, names: &[&str]) -> Option<T> {
+/// The other material that a block starts from.
+fn base_of(block: &tree::Material) -> Option<&tree::Name> {
+    block.like.as_ref().filter(|like| like.value != block.name.value)
+}
+
+fn circle(cx: &mut Context, like: &tree::Name, names: &[&str]) {
     let names: Vec<String> = names.iter().map(|name| format!("`{name}`")).collect();
-    cx.refuse(
+    cx.report(
         Diagnostic::new(
             Code::LikeCycle,
             like.span,
             format!("materials are like each other in a circle: {}", names.join(", ")),
         )
         .help("give one of them an expansion of its own"),
-    )
+    );
 }
 
 /// The material of that name: one of the files, else one of the library.

@@ -17,17 +17,17 @@ use std::sync::Arc;
 /// Names of parts and conditions are declared, materials resolved. Afterwards the lists of parts,
 /// lots and dimensions are complete, and so are the names of dimensions.
 pub(crate) fn resolve(cx: &mut Context, parts: &[&tree::Part]) {
-    let origins = origins(cx, parts);
+    let mut origins = origins(cx, parts);
+    let order = order(cx, parts, &mut origins);
+    let owners = owners(cx, parts, &origins, &order);
     let mut lots = Lots::default();
+    let stated = stated_lots(parts, &origins, &order);
     for (index, part) in parts.iter().enumerate() {
-        let id = PartId(index as u32);
-        let owner = owner(cx, parts, &origins, id);
-        let lot = lots.of(cx, parts, &origins, id, &owner);
-        let like = match origins[index] {
-            Origin::Like(base) => Some(base),
-            Origin::Own | Origin::Lost => None,
+        let owner = &owners[index];
+        let lot = match stated[index] {
+            Some(text) => lots.shared(cx, text, owner),
+            None => add(cx, &part.name.value, owner),
         };
-        let drawing = part.drawing.as_ref().map(drawing);
         let material = owner.material.clone().unwrap_or_else(|| unknown_material(cx));
         cx.parts.push(Part {
             name: part.name.value.clone(),
@@ -35,25 +35,14 @@ pub(crate) fn resolve(cx: &mut Context, parts: &[&tree::Part]) {
             material,
             material_span: owner.material_span,
             lot,
-            drawing,
+            drawing: part.drawing.as_ref().map(drawing),
             dimensions: Vec::new(),
-            like,
+            like: origins[index].base(),
         });
-        cx.dimension_names.insert(id, Names::default());
+        cx.dimension_names.insert(owner.part, Names::default());
     }
-    // A part is drawn after the one that it is like.
-    let mut drawn = vec![false; parts.len()];
-    for start in 0..parts.len() {
-        let mut chain = vec![PartId(start as u32)];
-        while let Origin::Like(base) = origins[chain[chain.len() - 1].index()] {
-            chain.push(base);
-        }
-        for id in chain.into_iter().rev() {
-            if !std::mem::replace(&mut drawn[id.index()], true) {
-                let owner = owner(cx, parts, &origins, id);
-                dimensions(cx, parts[id.index()], &owner, &origins[id.index()]);
-            }
-        }
+    for index in order {
+        dimensions(cx, parts[index], &owners[index], origins[index]);
     }
 }
 
@@ -77,59 +66,102 @@ enum Origin {
     Lost,
 }
 
-/// Follows `like`, reporting parts that are not there and loops.
+impl Origin {
+    /// The part that it is like.
+    fn base(self) -> Option<PartId> {
+        match self {
+            Origin::Like(base) => Some(base),
+            Origin::Own | Origin::Lost => None,
+        }
+    }
+}
+
+/// Looks up `like`, reporting parts that are not there.
 fn origins(cx: &mut Context, parts: &[&tree::Part]) -> Vec<Origin> {
-    let mut origins: Vec<Origin> = parts
+    parts
         .iter()
         .map(|part| match &part.origin {
             PartOrigin::Of(_) => Origin::Own,
             PartOrigin::Like(base) => cx.part(base).map_or(Origin::Lost, Origin::Like),
         })
-        .collect();
-    for start in 0..parts.len() {
-        let mut seen = vec![start];
-        while let Origin::Like(next) = origins[seen[seen.len() - 1]] {
-            if next.index() == start {
-                let names: Vec<String> =
-                    seen.iter().map(|i| format!("`{}`", parts[*i].name.value)).collect();
-                let PartOrigin::Like(base) = &parts[start].origin else { break };
-                cx.report(
-                    Diagnostic::new(
-                        Code::LikeCycle,
-                        base.span,
-                        format!("parts are like each other in a circle: {}", names.join(", ")),
-                    )
-                    .help("give one of them a material and dimensions of its own"),
-                );
-                seen.iter().for_each(|i| origins[*i] = Origin::Lost);
-                break;
-            }
-            // A loop further on is reported where it begins.
-            if seen.contains(&next.index()) {
-                break;
-            }
-            seen.push(next.index());
-        }
-    }
-    origins
+        .collect()
 }
 
-/// A part with the material that it, or the part it is like, is made of.
-fn owner(cx: &mut Context, parts: &[&tree::Part], origins: &[Origin], id: PartId) -> Owner {
-    let mut first = id;
-    while let Origin::Like(base) = origins[first.index()] {
-        first = base;
-    }
-    let name = parts[id.index()].name.value.clone();
-    let (material, material_span) = match &parts[first.index()].origin {
-        // What is wrong with the name is said once, where its own part is looked at first.
-        PartOrigin::Of(material) if cx.parts.len() <= first.index() => {
-            (material::find(cx, material), material.span)
+/// The parts in an order in which each comes after the one it is like; circles are reported and cut.
+fn order(cx: &mut Context, parts: &[&tree::Part], origins: &mut [Origin]) -> Vec<usize> {
+    let mut order = Vec::with_capacity(parts.len());
+    let mut placed = vec![false; parts.len()];
+    for start in 0..parts.len() {
+        let mut path: Vec<usize> = Vec::new();
+        let mut next = Some(start);
+        while let Some(index) = next.filter(|index| !placed[*index]) {
+            placed[index] = true;
+            path.push(index);
+            next = origins[index].base().map(PartId::index);
         }
-        PartOrigin::Of(material) => (material::get(cx, &material.value), material.span),
-        PartOrigin::Like(base) => (None, base.span),
-    };
-    Owner { part: id, name, material, material_span }
+        // What is placed already stands on this path only where it is a circle.
+        if let Some(first) = next.and_then(|index| path.iter().position(|p| *p == index)) {
+            circle(cx, parts, &path[first..]);
+            path[first..].iter().for_each(|index| origins[*index] = Origin::Lost);
+        }
+        order.extend(path.into_iter().rev());
+    }
+    order
+}
+
+fn circle(cx: &mut Context, parts: &[&tree::Part], indices: &[usize]) {
+    let names: Vec<String> =
+        indices.iter().map(|index| format!("`{}`", parts[*index].name.value)).collect();
+    let PartOrigin::Like(base) = &parts[indices[0]].origin else { return };
+    cx.report(
+        Diagnostic::new(
+            Code::LikeCycle,
+            base.span,
+            format!("parts are like each other in a circle: {}", names.join(", ")),
+        )
+        .help("give one of them a material and dimensions of its own"),
+    );
+}
+
+/// Each part with the material that it, or the part it is like, is made of.
+fn owners(
+    cx: &mut Context,
+    parts: &[&tree::Part],
+    origins: &[Origin],
+    order: &[usize],
+) -> Vec<Owner> {
+    let mut owners: Vec<Owner> = Vec::with_capacity(parts.len());
+    for (index, part) in parts.iter().enumerate() {
+        let (material, material_span) = match &part.origin {
+            PartOrigin::Of(material) => (material::find(cx, material), material.span),
+            PartOrigin::Like(base) => (None, base.span),
+        };
+        let (part, name) = (PartId(index as u32), part.name.value.clone());
+        owners.push(Owner { part, name, material, material_span });
+    }
+    for index in order {
+        if let Some(base) = origins[*index].base() {
+            let (material, span) =
+                (owners[base.index()].material.clone(), owners[base.index()].material_span);
+            owners[*index].material = material;
+            owners[*index].material_span = span;
+        }
+    }
+    owners
+}
+
+/// The lot that each part names, or that the part it is like names.
+fn stated_lots<'t>(
+    parts: &[&'t tree::Part],
+    origins: &[Origin],
+    order: &[usize],
+) -> Vec<Option<&'t tree::Text>> {
+    let mut stated: Vec<Option<&tree::Text>> = parts.iter().map(|p| p.lot.as_ref()).collect();
+    for index in order {
+        let of_base = origins[*index].base().and_then(|base| stated[base.index()]);
+        stated[*index] = stated[*index].or(of_base);
+    }
+    stated
 }
 
 /// Stands for a material that was not found, so that the part keeps its place.
@@ -139,37 +171,13 @@ fn unknown_material(cx: &Context) -> Arc<Material> {
     Arc::new(Material::new("", nothing))
 }
 
-/// The lots named so far.
+/// The lots named so far, with the name of their material and where that stands.
 #[derive(Default)]
 struct Lots {
     named: BTreeMap<String, (LotId, String, Span)>,
-    of_part: BTreeMap<PartId, LotId>,
 }
 
 impl Lots {
-    /// The lot of a part: the one it names, that of the part it is like, or one of its own.
-    fn of(
-        &mut self,
-        cx: &mut Context,
-        parts: &[&tree::Part],
-        origins: &[Origin],
-        id: PartId,
-        owner: &Owner,
-    ) -> LotId {
-        let mut named_by = id;
-        while let (None, Origin::Like(base)) =
-            (&parts[named_by.index()].lot, origins[named_by.index()])
-        {
-            named_by = base;
-        }
-        let lot = match &parts[named_by.index()].lot {
-            None => add(cx, &parts[id.index()].name.value, owner),
-            Some(stated) => self.shared(cx, stated, owner),
-        };
-        self.of_part.insert(id, lot);
-        lot
-    }
-
     /// A lot that several parts may share; they are of one material.
     fn shared(&mut self, cx: &mut Context, stated: &tree::Text, owner: &Owner) -> LotId {
         let material = owner.material.as_ref().map(|m| m.name.clone()).unwrap_or_default();
@@ -202,9 +210,9 @@ fn add(cx: &mut Context, name: &str, owner: &Owner) -> LotId {
 
 /// Declares and resolves the dimensions of a part: those of the part it is like first, in their
 /// order, changed where it says so.
-fn dimensions(cx: &mut Context, part: &tree::Part, owner: &Owner, origin: &Origin) {
+fn dimensions(cx: &mut Context, part: &tree::Part, owner: &Owner, origin: Origin) {
     let inherited = match origin {
-        Origin::Like(base) => copy(cx, *base, owner.part),
+        Origin::Like(base) => copy(cx, base, owner.part),
         Origin::Own | Origin::Lost => Vec::new(),
     };
     let mut own: Vec<(DimensionId, &tree::Dimension)> = Vec::new();
@@ -224,7 +232,7 @@ fn dimensions(cx: &mut Context, part: &tree::Part, owner: &Owner, origin: &Origi
             }
             (Origin::Like(base), _) => {
                 let drawn = cx.parts[base.index()].name.clone();
-                let none: Option<()> = cx.unknown_dimension(*base, &drawn, name);
+                let none: Option<()> = cx.unknown_dimension(base, &drawn, name);
                 debug_assert!(none.is_none());
                 continue;
             }

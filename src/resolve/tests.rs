@@ -217,6 +217,9 @@ fn parts_like_another_copy_its_drawing_and_its_lot() {
     assert_eq!(of_b(1).geometric.and_then(|g| g.bonus), Some(b.dimensions[0]));
     assert_limits(of_b(2), (5.0, 7.0));
     refused("part a like b\npart b like a", Code::LikeCycle);
+    refused("part c like a\npart a like b\npart b like a", Code::LikeCycle);
+    refused("part a like a", Code::LikeCycle);
+    refused("material a like b\nmaterial b like c\nmaterial c like b", Code::LikeCycle);
     refused(
         "part a of steel_c45 { x = 1 ±0.1 }\npart b like a { z = 2 ±0.1 }",
         Code::UnknownDimension,
@@ -349,4 +352,16 @@ fn measured_values_come_from_a_table() {
         panic!("measured")
     };
     assert_eq!(values[0], 0.058001);
+}
+
+#[test]
+fn long_chains_are_followed_without_recursion() {
+    let mut text = String::from("part p0 of m0 { x = 1 ±0.1 }\nmaterial m0 like m1\n");
+    for i in 1..3000 {
+        text.push_str(&format!("part p{i} like p{}\nmaterial m{i} like m{}\n", i - 1, i + 1));
+    }
+    text.push_str("material m3000 { cte 12 ppm/K }\n");
+    let resolved = sound(&text);
+    assert_eq!(resolved.dimensions.len(), 3000);
+    assert_eq!(resolved.parts[2999].material.name, "m0");
 }

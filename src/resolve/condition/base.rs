@@ -6,23 +6,27 @@ use crate::model::{OwnTemperature, Owner, State, Thermal};
 use crate::resolve::context::Context;
 use crate::resolve::quantity::above_absolute_zero;
 use crate::span::Span;
+use std::collections::{BTreeMap, BTreeSet};
+
+/// What single parts and fills do differently, by whom.
+type Rows<'s> = BTreeMap<Owner, &'s State>;
 
 /// Reports circles of `above`, and temperatures below absolute zero.
 pub(super) fn check(cx: &mut Context, name: &str, states: &[State], thermal: Option<&Thermal>) {
-    let mut reported: Vec<Owner> = Vec::new();
+    let rows: Rows = states.iter().map(|state| (state.owner, state)).collect();
+    let mut reported: BTreeSet<Owner> = BTreeSet::new();
     for state in states {
         if reported.contains(&state.owner) {
             continue;
         }
-        match chain(states, state.owner) {
-            Chain::Circle(owners) => {
-                if !owners.contains(&state.owner) {
-                    continue;
-                }
+        match chain(&rows, state.owner) {
+            Chain::Circle(owners) if owners.contains(&state.owner) => {
                 circle(cx, name, states, &owners);
                 reported.extend(owners);
             }
-            Chain::Open(owners) => least(cx, states, &owners, state.span, thermal),
+            // A circle further on is reported where it begins.
+            Chain::Circle(_) => {}
+            Chain::Open(owners) => least(cx, &rows, &owners, state.span, thermal),
         }
     }
 }
@@ -33,10 +37,12 @@ enum Chain {
     Circle(Vec<Owner>),
 }
 
-fn chain(states: &[State], start: Owner) -> Chain {
+fn chain(rows: &Rows, start: Owner) -> Chain {
     let mut owners = vec![start];
-    while let Some(next) = base_of(states, owners[owners.len() - 1]) {
-        if let Some(first) = owners.iter().position(|owner| *owner == next) {
+    let mut seen = BTreeSet::from([start]);
+    while let Some(next) = base_of(rows, owners[owners.len() - 1]) {
+        if !seen.insert(next) {
+            let first = owners.iter().position(|owner| *owner == next).unwrap_or(0);
             return Chain::Circle(owners.split_off(first));
         }
         owners.push(next);
@@ -44,8 +50,8 @@ fn chain(states: &[State], start: Owner) -> Chain {
     Chain::Open(owners)
 }
 
-fn base_of(states: &[State], owner: Owner) -> Option<Owner> {
-    match states.iter().find(|s| s.owner == owner)?.temperature.as_ref()? {
+fn base_of(rows: &Rows, owner: Owner) -> Option<Owner> {
+    match rows.get(&owner)?.temperature.as_ref()? {
         OwnTemperature::Above { base, .. } => *base,
         OwnTemperature::Absolute(_) => None,
     }
@@ -70,17 +76,10 @@ fn circle(cx: &mut Context, name: &str, states: &[State], owners: &[Owner]) {
 }
 
 /// Reports a part whose differences take it below absolute zero.
-fn least(
-    cx: &mut Context,
-    states: &[State],
-    owners: &[Owner],
-    span: Span,
-    thermal: Option<&Thermal>,
-) {
+fn least(cx: &mut Context, rows: &Rows, owners: &[Owner], span: Span, thermal: Option<&Thermal>) {
     let mut sum = 0.0;
     for owner in owners {
-        let state = states.iter().find(|s| s.owner == *owner);
-        match state.and_then(|s| s.temperature.as_ref()) {
+        match rows.get(owner).and_then(|s| s.temperature.as_ref()) {
             // Said where it is written.
             Some(OwnTemperature::Absolute(_)) if owners.len() == 1 => return,
             Some(OwnTemperature::Absolute(t)) => {
