@@ -5,9 +5,14 @@
 //! positive as it presses. Knows neither parts, conditions nor text: whoever evaluates a model brings
 //! the numbers. What each formula neglects is gathered in `docs/method-joints.md`.
 
+pub mod bearing;
 pub mod contact;
 pub mod expansion;
+pub mod filling;
+pub mod joining;
 pub mod joint;
+pub mod restraint;
 pub mod ring;
+pub mod seal;
 
 pub use ring::{Ring, Stress};

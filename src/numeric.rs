@@ -25,6 +25,7 @@ pub mod piecewise;
 pub mod probability;
 pub mod quadrature;
 pub mod random;
+pub mod root;
 pub mod special;
 pub mod tape;
 pub mod tolerance;

@@ -235,13 +235,13 @@ mod tests {
     #[test]
     fn a_closed_contact_has_no_gap_and_an_open_one_no_pressure() {
         let rings = rings(&[0.01, 0.02, 0.025, 0.045], &[207e9, 110e9, 70e9]);
-        let delta = [20e-6, -15e-6];
+        let delta = [20e-6, -30e-6];
         let p = pressures(&rings, &delta);
         let gap = gaps(&rings, &delta, &p);
         assert!(p[0] > 0.0 && gap[0] < 1e-18);
         assert!(p[1] == 0.0 && gap[1] > 0.0);
-        // The middle ring has grown towards the outer one: less than the 15 µm it was away.
-        assert!(gap[1] < 15e-6);
+        // The middle ring has grown towards the outer one: less than the 30 µm it was away.
+        assert!(gap[1] < 30e-6);
         let (inner, outer) = faces(&p, 1);
         assert!(inner == p[0] && outer == 0.0);
     }

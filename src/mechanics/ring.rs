@@ -68,7 +68,7 @@ impl<N: Number> Stress<N> {
 
 impl<N: Number> Ring<N> {
     /// `g = 2a²/(b²−a²)`, zero where it is solid.
-    fn g(&self) -> N {
+    pub(super) fn g(&self) -> N {
         match &self.bore {
             Some(a) => N::exact(2.0) / ((self.outside.clone() / a.clone()).sqr() - 1.0),
             None => N::exact(0.0),

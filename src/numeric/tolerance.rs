@@ -13,3 +13,11 @@ pub const LIMIT_SLACK: f64 = 1e-9;
 
 /// Slivers of a temperature window thinner than this, in kelvin, count as failing.
 pub const WINDOW_SLIVER: f64 = 1e-6;
+
+/// How far apart, in kelvin, the last temperature proven not to reach something and the first proven
+/// to reach it may stay: far below what any oven holds, far above rounding.
+pub const TEMPERATURE_FOUND: f64 = 1e-7;
+
+/// Most pieces one search for a crossing may look at before it gives up and says so; a function that
+/// rises takes some fifty.
+pub const MOST_ROOT_PIECES: usize = 10_000;

@@ -1,6 +1,6 @@
 //! What every formula of the room must obey, on drawn cases.
 
-use gapkeep::mechanics::{Ring, contact, joint};
+use gapkeep::mechanics::{Ring, contact, filling, joint, restraint};
 use gapkeep::numeric::{Interval, Number};
 use proptest::prelude::{ProptestConfig, Strategy};
 use proptest::{collection, prop_assert, proptest};
@@ -119,5 +119,51 @@ proptest! {
         let one = joint::pressure(2.0 * radial, 2.0 * shaft.outside, c);
         let both = contact::pressures(&[still(shaft), still(hub)], &[radial]);
         prop_assert!((one - both[0]).abs() <= 1e-12 * one);
+    }
+
+    #[test]
+    fn members_lie_within_the_enclosure_of_a_filling(
+        liquid in between(0.95, 1.1, 0.02),
+        bulk in between(0.5e9, 3e9, 0.1),
+        yielding in between(0.0, 1e-9, 0.5),
+    ) {
+        let one = Interval::point(1.0);
+        let boxed = [liquid.interval(), one, bulk.interval(), yielding.interval()];
+        let [l, v, k, c] = boxed;
+        let proven = filling::full_pressure(l, v, k, c);
+        let p = filling::full_pressure(liquid.member, 1.0, bulk.member, yielding.member);
+        prop_assert!(proven.lo() <= p * (1.0 + 1e-9) && p * (1.0 - 1e-9) <= proven.hi());
+        // The mass is where it was.
+        let left = liquid.member * libm::exp(-p / bulk.member);
+        prop_assert!(p == 0.0 || (left / (1.0 + yielding.member * p) - 1.0).abs() < 1e-14);
+    }
+
+    #[test]
+    fn members_lie_within_the_enclosure_of_a_clamp(
+        take_up in between(-50e-6, 200e-6, 0.5),
+        length in between(0.02, 0.2, 0.02),
+        modulus in between(60e9, 210e9, 0.1),
+        area in between(50e-6, 500e-6, 0.05),
+    ) {
+        let c = restraint::compliance(length.interval(), modulus.interval(), area.interval());
+        let proven = restraint::force(take_up.interval(), c);
+        let c = restraint::compliance(length.member, modulus.member, area.member);
+        let f = restraint::force(take_up.member, c);
+        prop_assert!(proven.lo() <= f && f <= proven.hi() && proven.lo() >= 0.0);
+        let x = take_up.member;
+        prop_assert!((f * c - restraint::separation(x) - x).abs() <= 1e-12 * x.abs());
+    }
+
+    #[test]
+    fn a_full_cylinder_is_a_ring_that_also_grows_long(q in 1.05..4.0_f64, nu in 0.0..0.49_f64) {
+        // Twice the hoop strain of the bore and once the strain along it, from Lamé's stresses with
+        // the ends' force p/(Q²−1) in the wall.
+        let wall = Ring { bore: Some(0.02), outside: 0.02 * q, modulus: 1.0, poisson: nu, spin: 0.0 };
+        let inside = wall.stress_inside(1.0, 0.0);
+        let along = 1.0 / (q * q - 1.0);
+        let hoop = inside.hoop() - nu * (inside.radial() + along);
+        let long = along - nu * (inside.radial() + inside.hoop());
+        let found = filling::closed_cylinder_compliance(&wall);
+        prop_assert!((found / (2.0 * hoop + long) - 1.0).abs() < 1e-10);
     }
 }
