@@ -3,6 +3,7 @@
 // A test that cannot go on should say so at once.
 #![allow(clippy::unwrap_used, clippy::expect_used)]
 
+mod bad;
 mod interval_laws;
 mod materials;
 mod mechanics;

@@ -153,6 +153,98 @@ codes! {
     /// A first state of moisture that has swollen.
     SwellOfFirstState = "swell-of-first-state", Error;
 
+    /// A file without the line that makes it an assembly.
+    AssemblyMissing = "assembly-missing", Error;
+    /// A file with an `assembly` line, used by another.
+    UsedAssembly = "used-assembly", Error;
+    /// Files that use each other in a circle.
+    UseCycle = "use-cycle", Error;
+    /// A file of materials that cannot be read.
+    MaterialFile = "material-file", Error;
+    /// An assembly without a condition.
+    NoCondition = "no-condition", Error;
+    /// A name in an expression that nothing defines.
+    UnknownName = "unknown-name", Error;
+    /// A function that the language does not know.
+    UnknownFunction = "unknown-function", Error;
+    /// A quantity that its subject does not have.
+    UnknownQuantity = "unknown-quantity", Error;
+    /// A requirement that does not say which quantity it limits.
+    QuantityMissing = "quantity-missing", Error;
+    /// A name of one kind of statement where another is meant.
+    WrongSubject = "wrong-subject", Error;
+    /// Something else where a dimension is needed.
+    NotADimension = "not-a-dimension", Error;
+    /// A function with too few or too many arguments.
+    ArgumentCount = "argument-count", Error;
+    /// A sum of two kinds of quantity.
+    KindsDiffer = "kinds-differ", Error;
+    /// An exponent that is not a constant pure number.
+    ExponentNotConstant = "exponent-not-constant", Error;
+    /// A point on the temperature scale in an expression.
+    AbsoluteTemperature = "absolute-temperature", Error;
+    /// A dimension beside the pieces of it that are counted.
+    PieceCountedTwice = "piece-counted-twice", Error;
+    /// A definition that leads back to itself.
+    DefinitionLoop = "definition-loop", Error;
+    /// An expression that is too long with everything it names put in.
+    ExpressionTooLong = "expression-too-long", Error;
+    /// A fit whose sides are exchanged.
+    FitReversed = "fit-reversed", Error;
+    /// A hole on the external side of a fit, or a shaft on the internal one.
+    FeatureOnWrongSide = "feature-on-wrong-side", Error;
+    /// A radius as a side of a fit.
+    RadiusInFit = "radius-in-fit", Error;
+    /// Something that needs a joint, of a fit without one.
+    NoJoint = "no-joint", Error;
+    /// A joint of features that are not round.
+    JointNotRound = "joint-not-round", Error;
+    /// A joint that does not state what it needs.
+    JointIncomplete = "joint-incomplete", Error;
+    /// A part or size that does not belong to the joint or restraint.
+    NotOfThatJoint = "not-of-that-joint", Error;
+    /// A surface that the ring does not have besides its contact.
+    WrongSurface = "wrong-surface", Error;
+    /// A tolerance of a size that belongs to no part.
+    ToleranceNotOfAPart = "tolerance-not-of-a-part", Error;
+    /// A restraint that does not state what it needs.
+    RestraintIncomplete = "restraint-incomplete", Error;
+    /// A fill that does not state what it needs.
+    FillIncomplete = "fill-incomplete", Error;
+    /// A range or history where one temperature is needed.
+    NotOneTemperature = "not-one-temperature", Error;
+    /// A condition for a quantity that has none.
+    NotAtACondition = "not-at-a-condition", Error;
+    /// A requirement that is left without a condition.
+    NothingToCheck = "nothing-to-check", Error;
+    /// An id that two requirements have.
+    DuplicateId = "duplicate-id", Error;
+    /// Two requirements that nothing tells apart.
+    RequirementsAlike = "requirements-alike", Error;
+    /// A concession until a day that is none.
+    ConcessionDate = "concession-date", Error;
+    /// A concession for a value that the limit allows.
+    ConcessionInside = "concession-inside", Error;
+    /// A dimension that nothing uses.
+    UnusedDimension = "unused-dimension", Warning;
+    /// A sum of diameters and radii.
+    DiameterAndRadius = "diameter-and-radius", Warning;
+    /// One drawing named at two revisions.
+    DrawingRevisions = "drawing-revisions", Warning;
+    /// A requirement of an expression that no dimension enters.
+    NothingVaries = "nothing-varies", Warning;
+    /// The free size of a ring that is pressed.
+    FreeSizeOfRing = "free-size-of-ring", Warning;
+    /// PTFE stated at a temperature where its length jumps.
+    PtfeTransition = "ptfe-transition", Warning;
+    /// One temperature for all parts in a condition in which something heats them.
+    OneTemperature = "one-temperature", Note;
+    /// A coating on one of two mating surfaces.
+    OneCoatedMate = "one-coated-mate", Note;
+    /// A root sum of squares of few contributors.
+    RssOfFew = "rss-of-few", Note;
+    /// One piece counted several times where several pieces may be meant.
+    CopiesOrPieces = "copies-or-pieces", Note;
     /// A fit with less clearance than required.
     ClearanceBelowLimit = "clearance-below-limit", Error;
     /// A fit with more clearance than required.

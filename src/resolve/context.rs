@@ -124,6 +124,12 @@ pub(crate) struct Context<'a> {
     pub(crate) dimension_names: BTreeMap<PartId, Names<DimensionId>>,
     /// Names that a broken statement seems to define: their users are not reported as well.
     pub(crate) broken: BTreeSet<String>,
+    /// The statements that could not be read.
+    pub(crate) broken_places: Vec<Span>,
+    /// True when a used file could not be read: a name that nothing defines may stand there.
+    pub(crate) incomplete: bool,
+    /// Libraries of materials read so far.
+    pub(crate) libraries: Vec<FileId>,
     /// Materials defined in the files, by name.
     pub(crate) materials: BTreeMap<String, (Arc<Material>, Span)>,
     /// Thermal states, by [`ConditionId`].
@@ -151,6 +157,9 @@ impl<'a> Context<'a> {
             fills: BTreeSet::new(),
             dimension_names: BTreeMap::new(),
             broken: BTreeSet::new(),
+            broken_places: Vec::new(),
+            incomplete: false,
+            libraries: Vec::new(),
             materials: BTreeMap::new(),
             conditions: Vec::new(),
             lots: Vec::new(),
@@ -188,6 +197,12 @@ impl<'a> Context<'a> {
     /// True for a name that a broken statement seems to define.
     pub(crate) fn is_broken(&self, name: &str) -> bool {
         self.broken.contains(name)
+    }
+
+    /// True where part of a statement could not be read, so that what it lacks may stand there.
+    pub(crate) fn has_broken(&self, span: Span) -> bool {
+        let inside = |b: &Span| b.file == span.file && span.start <= b.start && b.end <= span.end;
+        self.broken_places.iter().any(inside)
     }
 
     /// The condition of that name, or a finding.
@@ -245,7 +260,7 @@ impl<'a> Context<'a> {
         name: &crate::syntax::tree::Name,
         candidates: impl FnOnce(&Self) -> Vec<String>,
     ) -> Option<T> {
-        if self.is_broken(&name.value) {
+        if self.incomplete || self.is_broken(&name.value) {
             return None;
         }
         let candidates = candidates(self);

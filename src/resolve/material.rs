@@ -124,7 +124,7 @@ pub(crate) fn find(cx: &mut Context, name: &tree::Name) -> Option<Arc<Material>>
     if let Some(found) = get(cx, &name.value) {
         return Some(found);
     }
-    if cx.is_broken(&name.value) {
+    if cx.incomplete || cx.is_broken(&name.value) {
         return None;
     }
     let mut names: Vec<&str> = cx.materials.keys().map(String::as_str).collect();

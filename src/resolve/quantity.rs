@@ -12,7 +12,7 @@ mod tests;
 mod unit;
 
 pub(crate) use spread::spread;
-pub(crate) use unit::{unit_for, with_article, wrong_kind};
+pub(crate) use unit::{unit, unit_for, with_article, wrong_kind};
 
 use super::context::{Context, known};
 use crate::diagnostic::{Code, Diagnostic};

@@ -16,7 +16,7 @@ const AMBIGUOUS: [(&str, &str); 4] = [
 
 /// The unit of that spelling, or a finding; the nearest spelling is one of the kind expected if there
 /// is any.
-pub(super) fn unit(
+pub(crate) fn unit(
     cx: &mut Context,
     written: &tree::Unit,
     expect: Expect,

@@ -1,0 +1,128 @@
+//! Specs with one mistake each, named after the code that they provoke (`code.gap` or
+//! `code--which.gap`), with everything said about them in a snapshot beside them.
+
+use gapkeep::diagnostic::{Diagnostic, Label, Severity};
+use gapkeep::resolve::{FileError, Files, Resolved, resolve};
+use gapkeep::source::{Source, Sources};
+use gapkeep::span::FileId;
+use std::fmt::Write;
+use std::fs;
+use std::path::{Path, PathBuf};
+
+/// The files below a folder.
+struct Folder(PathBuf);
+
+impl Files for Folder {
+    fn read(&self, path: &str) -> Result<Vec<u8>, FileError> {
+        fs::read(self.0.join(path)).map_err(|_| FileError::Missing)
+    }
+}
+
+fn folder(name: &str) -> PathBuf {
+    Path::new(env!("CARGO_MANIFEST_DIR")).join("tests").join(name)
+}
+
+/// The specs of a folder, in the order of their names.
+fn specs(folder: &Path) -> Vec<PathBuf> {
+    let mut found: Vec<PathBuf> = fs::read_dir(folder)
+        .unwrap()
+        .map(|entry| entry.unwrap().path())
+        .filter(|path| path.extension().is_some_and(|e| e == "gap"))
+        .collect();
+    found.sort();
+    found
+}
+
+fn resolved(path: &Path) -> (Resolved, Sources, FileId) {
+    let mut sources = Sources::default();
+    let name = path.file_name().unwrap().to_string_lossy().into_owned();
+    let root = sources.add(Source::new(name, fs::read_to_string(path).unwrap()));
+    let files = Folder(path.parent().unwrap().to_path_buf());
+    let resolved = resolve(root, &mut sources, &files);
+    (resolved, sources, root)
+}
+
+/// Everything said, with line and column of each place.
+fn render(diagnostics: &[Diagnostic], sources: &Sources, root: FileId) -> String {
+    let mut out = String::new();
+    let place = |label: &Label| {
+        let source = sources.get(label.span.file);
+        let (line, column) = source.position(label.span.start as usize);
+        let text = sources.slice(label.span).lines().next().unwrap_or("").trim_end();
+        let file = if label.span.file == root { "" } else { source.name() };
+        let blank = if label.text.is_empty() { "" } else { "  " };
+        format!("{file} {line}:{column} `{text}`{blank}{}", label.text).trim_start().to_string()
+    };
+    for d in diagnostics {
+        let _ = writeln!(out, "{} [{}] {}", d.severity.word(), d.code, d.message);
+        let _ = writeln!(out, "    at {}", place(&d.primary));
+        for label in &d.secondary {
+            let _ = writeln!(out, "    see {}", place(label));
+        }
+        if let Some(help) = &d.help {
+            let _ = writeln!(out, "    help: {help}");
+        }
+    }
+    out
+}
+
+/// Holds every spec of a phase against its name and its snapshot.
+fn check(phase: &str) {
+    let place = folder(&format!("bad/{phase}"));
+    let specs = specs(&place);
+    assert!(!specs.is_empty(), "there is no spec in {}", place.display());
+    let mut wrong = Vec::new();
+    for path in specs {
+        let stem = path.file_stem().unwrap().to_string_lossy().into_owned();
+        let code = stem.split("--").next().unwrap();
+        let (resolved, sources, root) = resolved(&path);
+        let found = &resolved.diagnostics;
+        if !found.iter().any(|d| d.code.text() == code) {
+            wrong.push(format!("{stem}: `{code}` is not found"));
+        }
+        // One mistake gives one report: nothing that follows from it is reported besides.
+        let errors = found.iter().filter(|d| d.severity == Severity::Error);
+        for error in errors.filter(|d| d.code.text() != code) {
+            wrong.push(format!("{stem}: also `{}`: {}", error.code, error.message));
+        }
+        let text = fs::read_to_string(&path).unwrap();
+        let shown = format!("{}\n\n{}", text.trim_end(), render(found, &sources, root));
+        let mut settings = insta::Settings::clone_current();
+        settings.set_snapshot_path(&place);
+        settings.set_prepend_module_to_snapshot(false);
+        settings.bind(|| insta::assert_snapshot!(stem, shown));
+    }
+    assert!(wrong.is_empty(), "{}", wrong.join("\n"));
+}
+
+#[test]
+fn mistakes_of_meaning_are_reported_once_with_a_way_out() {
+    check("resolve");
+}
+
+#[test]
+fn three_mistakes_give_three_reports() {
+    let (resolved, _, _) = resolved(&folder("examples/three-mistakes.gap"));
+    let codes: Vec<&str> = resolved.diagnostics.iter().map(|d| d.code.text()).collect();
+    assert_eq!(codes, ["unknown-unit", "unknown-material", "kinds-differ", "unknown-dimension"]);
+    // What none of them touches can still be evaluated.
+    let assembly = resolved.assembly.unwrap();
+    let subjects: Vec<&str> = assembly.subjects.iter().map(|s| s.name.as_str()).collect();
+    assert_eq!(subjects, ["depth_left"]);
+    assert_eq!(assembly.requirements.len(), 1);
+}
+
+#[test]
+fn the_examples_resolve_without_an_error() {
+    let mut count = 0;
+    for path in specs(&folder("examples/whole")) {
+        let (resolved, sources, root) = resolved(&path);
+        let errors: Vec<Diagnostic> =
+            resolved.diagnostics.into_iter().filter(|d| d.severity == Severity::Error).collect();
+        assert!(errors.is_empty(), "{}\n{}", path.display(), render(&errors, &sources, root));
+        let assembly = resolved.assembly.unwrap();
+        assert!(!assembly.requirements.is_empty());
+        count += 1;
+    }
+    assert_eq!(count, 7);
+}

@@ -1,0 +1,11 @@
+assembly "Idler pulley"
+lengths in mm
+
+condition cold -20
+condition day   20
+
+part arm of aluminium_6061_t6 {
+  width = 30 ±0.1
+  let width = 2 mm
+}
+gap left = arm.width - 29 mm { require >= 0.05 }

@@ -1,0 +1,9 @@
+assembly "Idler pulley"
+lengths in mm
+
+condition cold -20
+condition day   20
+
+part pin of steel_c45 { outside = dia 10 F7 }
+part eye of aluminium_6061_t6 { bore = dia 10 H7 }
+fit swing = pin.outside in eye.bore { require clearance >= 0.01 }

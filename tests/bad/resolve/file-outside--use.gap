@@ -1,0 +1,4 @@
+assembly "Idler pulley"
+use "../parts.gap"
+condition day 20
+gap left = arm.width - hub.width { require >= 0.05 }

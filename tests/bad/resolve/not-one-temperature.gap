@@ -1,0 +1,15 @@
+assembly "Idler pulley"
+lengths in mm
+
+condition cold -20
+condition day   20
+
+part plate of aluminium_6082_t6 { thickness = 20 ±0.1 }
+part bolt of steel_8_8 { grip = 20 ±0.1 }
+condition use -20 .. 60
+restraint clamp {
+  squeezed plate.thickness area 200 mm2
+  stretched bolt.grip area 36 mm2
+  preload 5 kN at use
+  require force >= 1 kN at day
+}

@@ -1,0 +1,2 @@
+use "second.gap"
+part arm of aluminium_6061_t6 { width = 30 ±0.1 }

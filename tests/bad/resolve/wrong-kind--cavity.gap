@@ -1,0 +1,12 @@
+assembly "Idler pulley"
+lengths in mm
+
+condition cold -20
+condition day   20
+
+part tank of aluminium_6061_t6 { depth = 60 ±0.3 }
+fill oil {
+  cavity of tank = tank.depth * 40 mm
+  charge hydraulic_oil 200 cm3
+  require ullage >= 5 %
+}
