@@ -2,6 +2,7 @@
 //! `code--which.gap`), with everything said about them in a snapshot beside them.
 
 use gapkeep::diagnostic::{Diagnostic, Label, Severity};
+use gapkeep::model::{ConditionId, ExprKind, SubjectKind};
 use gapkeep::resolve::{FileError, Files, Resolved, resolve};
 use gapkeep::source::{Source, Sources};
 use gapkeep::span::FileId;
@@ -110,6 +111,83 @@ fn three_mistakes_give_three_reports() {
     let subjects: Vec<&str> = assembly.subjects.iter().map(|s| s.name.as_str()).collect();
     assert_eq!(subjects, ["depth_left"]);
     assert_eq!(assembly.requirements.len(), 1);
+}
+
+/// A spec given as a text, with no other file.
+fn of_text(text: &str) -> Resolved {
+    let mut sources = Sources::default();
+    let root = sources.add(Source::new("a.gap", text));
+    resolve(root, &mut sources, &Folder(folder("examples")))
+}
+
+#[test]
+fn what_rests_on_a_mistake_is_not_in_the_model() {
+    let resolved = of_text(
+        "assembly \"Sensor in a flange\"
+         condition day 20
+         condition cold -300
+         condition warm_up 60
+         part flange of aluminium_6061_t6 { depth = 12 ±0.1; load_path = 5 ±0.1 load 2 kN over 9 mm2 at cold }
+         part sensor of stainless_304 { height = 9 ±0.05; collar = 9 metre ±0.05 }
+         gap collar_left = flange.depth - sensor.collar { require >= 0.05 }
+         gap twice_left = 2 * collar_left { require >= 0.05 }
+         gap path_left = flange.load_path - 1 mm { require >= 0.05 }
+         gap left = flange.depth - sensor.height { require >= 0.05; require <= 9 at cold }
+         result shift = change(left from warm_up) { require <= 1 }",
+    );
+    let errors: Vec<&str> = resolved
+        .diagnostics
+        .iter()
+        .filter(|d| d.severity == Severity::Error)
+        .map(|d| d.code.text())
+        .collect();
+    assert_eq!(errors, ["below-absolute-zero", "unknown-unit"]);
+    let assembly = resolved.assembly.unwrap();
+    let conditions: Vec<&str> = assembly.conditions.iter().map(|c| c.name.as_str()).collect();
+    assert_eq!(conditions, ["day", "warm_up"]);
+    let subjects: Vec<&str> = assembly.subjects.iter().map(|s| s.name.as_str()).collect();
+    assert_eq!(subjects, ["left", "shift"]);
+    // The requirement at the wrong condition is gone, the others stand at those that are left.
+    let at: Vec<Vec<u32>> =
+        assembly.requirements.iter().map(|r| r.conditions.iter().map(|c| c.0).collect()).collect();
+    assert_eq!(at, [[0, 1], [0, 1]]);
+    let SubjectKind::Result(shift) = &assembly.subjects[1].kind else { panic!("a result") };
+    let ExprKind::Change { from, .. } = &shift.kind else { panic!("a change") };
+    assert_eq!(*from, Some(ConditionId(1)));
+}
+
+#[test]
+fn names_that_build_on_each_other_without_end_are_refused() {
+    let mut text = String::from(
+        "assembly \"Stack\"\ncondition day 20\npart a of steel_c45 { x = 1 ±0.1 }\nlet n0 = a.x\n",
+    );
+    for i in 1..3000 {
+        let _ = writeln!(text, "let n{i} = (a.x + n{})", i - 1);
+    }
+    text.push_str("gap left = n2999 { require >= 0 }\n");
+    let resolved = of_text(&text);
+    assert!(resolved.diagnostics.iter().any(|d| d.code.text() == "expression-too-long"));
+    // One name too many is one finding, not one for everybody who builds on it.
+    assert!(resolved.diagnostics.len() < 20, "{}", resolved.diagnostics.len());
+}
+
+#[test]
+fn the_specs_of_the_project_resolve_without_an_error() {
+    let mut count = 0;
+    for place in ["assemblies", "failing"] {
+        for path in specs(&folder(&format!("../specs/{place}"))) {
+            let (resolved, sources, root) = resolved(&path);
+            let errors: Vec<Diagnostic> = resolved
+                .diagnostics
+                .into_iter()
+                .filter(|d| d.severity == Severity::Error)
+                .collect();
+            assert!(errors.is_empty(), "{}\n{}", path.display(), render(&errors, &sources, root));
+            assert!(resolved.assembly.is_some());
+            count += 1;
+        }
+    }
+    assert!(count >= 12);
 }
 
 #[test]

@@ -11,7 +11,7 @@ condition shop      68
 condition morning   40
 condition running  150 ±10 { spindle 20 .. 35 degF above head; bearing 10 .. 20 degF above head }
 
-part head of iron_grey {
+part head of iron_grey_250 {
   bore  = dia 2.0472 +.0007/0
   depth = 1.250
 }

@@ -9,7 +9,7 @@ condition bench       20
 condition load        95 ±5 { skirt 20 .. 30 K above liner }
 condition overheat   115    { skirt 35 K above liner }
 
-part liner of iron_grey { bore = dia 86 +0.022/0 }
+part liner of iron_grey_250 { bore = dia 86 +0.022/0 }
 part skirt of aluminium_4032_t6 { gauge = dia 85.90 0/-0.014 }
 
 fit skirt_in_liner = skirt.gauge in liner.bore {

@@ -10,7 +10,7 @@ condition steady    180 { case_ring 4 .. 8 K below impeller }
 condition warm_up   from "data/pump-warm-up.csv" ±3
 
 part impeller of stainless_316 { hub = dia 199.30 0/-0.03 }
-part case_ring of stainless_410 { bore = dia 200 H7 }
+part case_ring of stainless_420 { bore = dia 200 H7 }
 
 fit running = impeller.hub in case_ring.bore {
   require "WP-1" clearance >= 0.30

@@ -16,7 +16,7 @@ part window of fused_silica {
   rim = dia 79.70 0/-0.05
 }
 part plug of stainless_304 { bore = dia 80.00 +0.05/0 }
-part seal of elastomer_nbr {
+part seal of nbr {
   section = 2.62 ±0.08
 }
 

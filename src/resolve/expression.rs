@@ -29,8 +29,11 @@ use std::sync::Arc;
 /// Most nodes of an expression with everything it names put in.
 ///
 /// Whoever walks an expression may recurse; and a dozen lines that name each other twice would
-/// otherwise stand for thousands of terms.
-const MAX_NODES: usize = 5000;
+/// otherwise stand for thousands of terms. A sum of [`tree::MAX_TERMS`] fits in.
+const MAX_NODES: usize = 2500;
+
+/// Deepest nesting of an expression with everything it names put in.
+const MAX_DEPTH: usize = 400;
 
 /// Names one definition: the part it stands in, and its name.
 pub(crate) type Key = (Option<PartId>, String);
@@ -60,6 +63,7 @@ pub(crate) struct Resolver<'c, 'a, 't> {
     trail: Vec<(Key, Span)>,
     reference: Option<ConditionId>,
     nodes: usize,
+    depth: usize,
 }
 
 impl<'c, 'a, 't> Resolver<'c, 'a, 't> {
@@ -78,6 +82,7 @@ impl<'c, 'a, 't> Resolver<'c, 'a, 't> {
             trail: Vec::new(),
             reference: None,
             nodes: 0,
+            depth: 0,
         }
     }
 
@@ -117,6 +122,23 @@ impl<'c, 'a, 't> Resolver<'c, 'a, 't> {
         within: Option<PartId>,
     ) -> Option<Arc<Expr>> {
         self.nodes += 1;
+        if self.depth >= MAX_DEPTH {
+            return self.cx.refuse(
+                Diagnostic::new(
+                    Code::ExpressionTooLong,
+                    written.span,
+                    format!("with all names put in, this is nested over {MAX_DEPTH} deep"),
+                )
+                .help("let fewer names build on each other"),
+            );
+        }
+        self.depth += 1;
+        let result = self.node(written, within);
+        self.depth -= 1;
+        result
+    }
+
+    fn node(&mut self, written: &tree::Expr, within: Option<PartId>) -> Option<Arc<Expr>> {
         let node = match &written.kind {
             tree::ExprKind::Constant(scalar) => self.constant(scalar)?,
             tree::ExprKind::Path(path) => return self.path(path, within),
@@ -295,6 +317,7 @@ impl<'c, 'a, 't> Resolver<'c, 'a, 't> {
             };
         }
         let result = result?;
+        self.check_length(result.span)?;
         if rest.iter().any(|(o, _)| matches!(o.value, Operator::Add | Operator::Subtract)) {
             self.check_sum(&result)?;
         }
@@ -323,17 +346,23 @@ impl<'c, 'a, 't> Resolver<'c, 'a, 't> {
         let name = key.1.clone();
         let (inner, nodes) = self.definition(key, mention, written)?;
         self.nodes += nodes;
-        if self.nodes > MAX_NODES {
-            return self.cx.refuse(
-                Diagnostic::new(
-                    Code::ExpressionTooLong,
-                    mention,
-                    format!("with `{name}` put in, this expression has over {MAX_NODES} terms"),
-                )
-                .help("a chain of that length is no longer a chain of parts: split it"),
-            );
-        }
+        self.check_length(mention)?;
         Some(expr(mention, inner.quantity, ExprKind::Named(name, inner)))
+    }
+
+    /// Refuses an expression that has grown too long.
+    fn check_length(&mut self, span: Span) -> Option<()> {
+        if self.nodes <= MAX_NODES {
+            return Some(());
+        }
+        self.cx.refuse(
+            Diagnostic::new(
+                Code::ExpressionTooLong,
+                span,
+                format!("with all names put in, this expression has over {MAX_NODES} terms"),
+            )
+            .help("a chain of that length is no longer a chain of parts: split it"),
+        )
     }
 
     /// The expression that a name stands for.
