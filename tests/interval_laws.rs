@@ -21,6 +21,7 @@ fn run(name: &str, x: Interval, y: Option<Interval>) -> Interval {
         "mul" => x * y(),
         "div" => x / y(),
         "atan2" => x.atan2(y()),
+        "hypot" => x.hypot(y()),
         "sqrt" => x.sqrt(),
         "exp" => x.exp(),
         "ln" => x.ln(),
@@ -76,4 +77,22 @@ fn the_slope_over_an_interval_holds_every_slope() {
         assert!((exact - difference).abs() < 1e-7 * exact.abs().max(1.0));
         assert!(slope.contains(exact), "{slope:?} does not hold {exact} at {at}");
     }
+}
+
+#[test]
+fn the_slope_of_a_length_is_bounded_where_the_length_may_be_zero() {
+    let slope = |x: Interval, y: Interval| Dual::variable(x).hypot(Dual::constant(y)).slope;
+    let y = Interval::new(-2.0, 3.0);
+    assert!(slope(Interval::new(-1.0, 1.0), y) == Interval::new(-1.0, 1.0));
+    // A side that is not negative cannot make the length fall.
+    assert!(slope(Interval::new(0.0, 1.0), y) == Interval::new(0.0, 1.0));
+    assert!(slope(Interval::new(-1.0, 0.0), y) == Interval::new(-1.0, 0.0));
+    assert!(slope(Interval::ZERO, Interval::ZERO) == Interval::new(-1.0, 1.0));
+    assert!(slope(Interval::point(3.0), Interval::point(4.0)).contains(0.6));
+    assert_eq!(Dual::variable(3.0).hypot(Dual::constant(4.0)).slope, 0.6);
+    assert_eq!(Dual::variable(0.0).hypot(Dual::constant(0.0)).slope, 0.0);
+    // Of the slope's own slope nothing is known there, which it must say.
+    let twice = Dual::variable(Dual::variable(Interval::new(-1.0, 1.0)));
+    let zero = Dual::constant(Dual::constant(Interval::ZERO));
+    assert_eq!(twice.hypot(zero).slope.slope, Interval::ENTIRE);
 }

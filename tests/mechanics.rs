@@ -1,4 +1,5 @@
 //! Formulas of solids against a second way of computing them, and against laws.
 
+mod extremes;
 mod laws;
 mod rings;

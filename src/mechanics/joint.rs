@@ -107,7 +107,7 @@ pub fn torque<N: Number>(friction: N, pressure: N, length: N, diameter: N) -> N 
 ///
 /// Valid for: friction alike in every direction.
 pub fn combined_load<N: Number>(torque: N, force: N, diameter: N) -> N {
-    ((torque * 2.0 / diameter).sqr() + force.sqr()).sqrt()
+    (torque * 2.0 / diameter).hypot(force)
 }
 
 /// Pressure that a joint needs to carry a force at its surface, Pa.

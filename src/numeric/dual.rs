@@ -153,6 +153,13 @@ impl<N: Ordered> Number for Dual<N> {
             value: self.value.atan2(x.value),
         }
     }
+    fn hypot(self, o: Self) -> Self {
+        let length = self.value.clone().hypot(o.value.clone());
+        Dual {
+            slope: self.slope * share(self.value, &length) + o.slope * share(o.value, &length),
+            value: length,
+        }
+    }
     fn abs(self) -> Self {
         let slope = match self.value.order(&N::exact(0.0)) {
             Some(Ordering::Greater | Ordering::Equal) => self.slope,
@@ -183,6 +190,20 @@ impl<N: Ordered> Number for Dual<N> {
             value: self.value.apply(curve),
         }
     }
+}
+
+/// What a side is of a length that it belongs to: `x/length`, never beyond −1 … 1, with the sign of
+/// the side. Where there is no length, it may be any of that.
+fn share<N: Ordered>(x: N, length: &N) -> N {
+    if length.is_zero() {
+        return N::enclosed(Interval::new(-1.0, 1.0));
+    }
+    let (least, most) = match x.order(&N::exact(0.0)) {
+        Some(Ordering::Greater) => (0.0, 1.0),
+        Some(Ordering::Less) => (-1.0, 0.0),
+        _ => (-1.0, 1.0),
+    };
+    (x / length.clone()).max(N::exact(least)).min(N::exact(most))
 }
 
 impl<N: Ordered> Ordered for Dual<N> {

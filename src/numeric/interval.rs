@@ -351,6 +351,10 @@ impl Number for Interval {
             corners.iter().fold((corners[0], corners[0]), |(l, h), &c| (l.min(c), h.max(c)));
         widened(lo, hi)
     }
+    fn hypot(self, o: Self) -> Self {
+        // Rounded outward, a sum of squares may begin below zero: a length does not.
+        (self.sqr() + o.sqr()).within(0.0, f64::INFINITY).sqrt()
+    }
     fn abs(self) -> Self {
         if self.lo >= 0.0 {
             self

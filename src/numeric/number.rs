@@ -66,6 +66,14 @@ pub trait Number:
     fn atan(self) -> Self;
     /// Takes the angle of the point (`x`, `self`), in radians, in −π … π.
     fn atan2(self, x: Self) -> Self;
+    /// Takes `√(self² + other²)`, the length of the vector of the two.
+    ///
+    /// Its derivative lies within −1 … 1 even where both are zero, which that of the square root of
+    /// their squares does not show.
+    fn hypot(self, other: Self) -> Self {
+        (self.sqr() + other.sqr()).sqrt()
+    }
+
     /// Takes the absolute value.
     fn abs(self) -> Self;
     /// Takes the lesser of two.

@@ -48,6 +48,7 @@ enum Binary {
     Min,
     Max,
     Atan2,
+    Hypot,
 }
 
 impl Unary {
@@ -78,6 +79,7 @@ impl Binary {
             Binary::Min => a.min(b),
             Binary::Max => a.max(b),
             Binary::Atan2 => a.atan2(b),
+            Binary::Hypot => a.hypot(b),
         }
     }
 }

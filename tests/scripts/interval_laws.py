@@ -73,6 +73,7 @@ BINARY = {
     "mul": (lambda x, y: x * y, WIDE, WIDE),
     "div": (lambda x, y: x / y, WIDE, (1e-3, 50.0)),
     "atan2": (mpmath.atan2, WIDE, (1e-3, 50.0)),
+    "hypot": (mpmath.hypot, WIDE, WIDE),
 }
 
 

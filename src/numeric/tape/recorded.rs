@@ -257,6 +257,9 @@ impl Number for Recorded {
     fn atan2(self, x: Self) -> Self {
         self.binary(x, Binary::Atan2)
     }
+    fn hypot(self, o: Self) -> Self {
+        self.binary(o, Binary::Hypot)
+    }
     fn abs(self) -> Self {
         self.unary(Unary::Abs)
     }
