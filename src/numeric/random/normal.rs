@@ -89,21 +89,28 @@ impl Stream {
     pub fn fill_normal(self, first: u64, mean: f64, sigma: f64, out: &mut [f64]) {
         vectorized(
             #[inline(always)]
-            || {
-                let mut next = first;
-                let mut rest = &mut *out;
-                while !rest.is_empty() {
-                    let offset = (next % GROUP as u64) as usize;
-                    let count = rest.len().min(GROUP - offset);
-                    let (now, later) = std::mem::take(&mut rest).split_at_mut(count);
-                    let mut group = [0.0; GROUP];
-                    self.fill_group(next - offset as u64, mean, sigma, &mut group);
-                    now.copy_from_slice(&group[offset..offset + count]);
-                    next += count as u64;
-                    rest = later;
-                }
-            },
+            || self.fill_groups(first, mean, sigma, out),
         );
+    }
+
+    #[inline(always)]
+    fn fill_groups(self, first: u64, mean: f64, sigma: f64, mut out: &mut [f64]) {
+        let mut next = first;
+        while !out.is_empty() {
+            let offset = (next % GROUP as u64) as usize;
+            let count = out.len().min(GROUP - offset);
+            let (now, later) = out.split_at_mut(count);
+            if let Ok(group) = <&mut [f64; GROUP]>::try_from(&mut *now) {
+                self.fill_group(next, mean, sigma, group);
+            } else {
+                // A part of a group is cut out of the whole.
+                let mut group = [0.0; GROUP];
+                self.fill_normal(next - offset as u64, mean, sigma, &mut group);
+                now.copy_from_slice(&group[offset..offset + count]);
+            }
+            next += count as u64;
+            out = later;
+        }
     }
 
     #[inline(always)]
