@@ -6,8 +6,10 @@
 use divan::counter::ItemsCount;
 use divan::{Bencher, black_box};
 use gapkeep::numeric::distribution::Distribution;
+use gapkeep::numeric::lanes::WIDTH;
 use gapkeep::numeric::probability::{Term, above, clopper_pearson};
 use gapkeep::numeric::random::{BLOCK, Stream, monte_carlo};
+use gapkeep::numeric::{Lanes, Number, Tape};
 
 fn main() {
     divan::main();
@@ -94,6 +96,39 @@ fn yield_of_a_shrink_joint(bencher: Bencher<'_, '_>) {
     });
 }
 
+/// The same joint as the program draws it: the formula recorded once, replayed in lanes.
+#[divan::bench]
+fn yield_of_a_recorded_shrink_joint(bencher: Bencher<'_, '_>) {
+    let streams = streams();
+    let unknowns: Vec<Distribution> = JOINT
+        .iter()
+        .map(|(mean, sigma)| Distribution::normal(*mean, *sigma).expect("sound"))
+        .collect();
+    let tape = Tape::of(JOINT.len(), |x| pressure(std::array::from_fn(|i| x[i].clone())));
+    bencher.counter(ItemsCount::new(DRAWS)).bench(|| {
+        monte_carlo(
+            DRAWS,
+            #[inline(always)]
+            |first, count| {
+                let mut x = [[0.0; BLOCK]; JOINT.len()];
+                for ((unknown, stream), x) in unknowns.iter().zip(&streams).zip(&mut x) {
+                    unknown.fill(*stream, first, &mut x[..count]);
+                }
+                let (mut scratch, mut above) = (vec![], 0u64);
+                for at in (0..BLOCK).step_by(WIDTH) {
+                    let inputs: [Lanes; JOINT.len()] =
+                        std::array::from_fn(|i| Lanes(std::array::from_fn(|lane| x[i][at + lane])));
+                    tape.replay(&inputs, &mut scratch, |_, p: &Lanes| {
+                        let p = p.0.iter().zip(at..count);
+                        above += p.filter(|(p, _)| **p > 31.0).count() as u64;
+                    });
+                }
+                above
+            },
+        )
+    });
+}
+
 /// Shaft and bore, hub outside and shaft inside diameter, moduli, ratios, expansions' difference.
 const JOINT: [(f64, f64); 10] = [
     (40.068, 0.003),
@@ -110,14 +145,15 @@ const JOINT: [(f64, f64); 10] = [
 
 /// A stand-in of the size of a real response, not the program's own formula: two thick rings.
 #[inline(always)]
-fn pressure(x: [f64; 10]) -> f64 {
+fn pressure<N: Number>(x: [N; 10]) -> N {
     let [shaft, bore, outer, inner, e_hub, e_shaft, nu_hub, nu_shaft, alpha, kelvin] = x;
-    let interference = shaft - bore - 40.0 * alpha * kelvin;
-    let q2 = (outer / 40.0) * (outer / 40.0);
-    let r2 = (inner / 40.0) * (inner / 40.0);
-    let hub = ((q2 + 1.0) / (q2 - 1.0) + nu_hub) / e_hub;
-    let core = ((1.0 + r2) / (1.0 - r2) - nu_shaft) / e_shaft;
-    interference.max(0.0) / (40.0 * (hub + core))
+    let interference = shaft - bore - alpha * kelvin * 40.0;
+    let q2 = (outer / 40.0).sqr();
+    let r2 = (inner / 40.0).sqr();
+    let hub = ((q2.clone() + 1.0) / (q2 - 1.0) + nu_hub) / e_hub;
+    let one = N::exact(1.0);
+    let core = ((r2.clone() + 1.0) / (one - r2) - nu_shaft) / e_shaft;
+    interference.max(N::exact(0.0)) / ((hub + core) * 40.0)
 }
 
 /// Forty contributors of all kinds, those in closed form twenty times over.
