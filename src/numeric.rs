@@ -10,8 +10,8 @@
 //! | `f64` | a value at a point |
 //! | [`Interval`] | an enclosure that is proven, rounded outward |
 //! | [`Dual`] over either | a derivative; the sign of one over a whole box |
-//! | [`Lanes`] | eight draws at a time |
-//! | [`Recorded`] | the formula itself, as a [`Tape`] that any of the others replays |
+//! | [`Lanes`] | eight values at a time |
+//! | [`Recorded`] | the formula itself, as a [`Tape`] that any of the others replays, columns of draws too |
 
 pub mod complex;
 pub mod curve;

@@ -5,9 +5,11 @@
 //! enclosed constant. The gradient is taken backwards over the tape (one sweep for all inputs); its
 //! local slopes come from [`Dual`], so that the rules of differentiation stand in one place.
 
+mod columns;
 mod recorded;
 
 use super::{Curve, Dual, Interval, Number, Ordered};
+pub use columns::{Column, Scratch};
 pub use recorded::{Recorded, Recorder};
 use std::sync::Arc;
 
@@ -52,6 +54,7 @@ enum Binary {
 }
 
 impl Unary {
+    #[inline(always)]
     fn run<N: Number>(self, x: N) -> N {
         match self {
             Unary::Neg => -x,
@@ -70,6 +73,7 @@ impl Unary {
 }
 
 impl Binary {
+    #[inline(always)]
     fn run<N: Number>(self, a: N, b: N) -> N {
         match self {
             Binary::Add => a + b,
@@ -151,20 +155,6 @@ impl Tape {
     pub fn values<N: Number>(&self, inputs: &[N]) -> Vec<N> {
         let values = self.run(inputs);
         self.outputs.iter().map(|&o| values[o as usize].clone()).collect()
-    }
-
-    /// Replays the tape into `scratch`, which keeps its memory from run to run, and hands each result
-    /// to `take`.
-    pub fn replay<N: Number>(
-        &self,
-        inputs: &[N],
-        scratch: &mut Vec<N>,
-        mut take: impl FnMut(usize, &N),
-    ) {
-        self.run_into(inputs, scratch);
-        for (i, &o) in self.outputs.iter().enumerate() {
-            take(i, &scratch[o as usize]);
-        }
     }
 
     /// The first result and its derivative with respect to every input.

@@ -6,10 +6,10 @@
 use divan::counter::ItemsCount;
 use divan::{Bencher, black_box};
 use gapkeep::numeric::distribution::Distribution;
-use gapkeep::numeric::lanes::WIDTH;
 use gapkeep::numeric::probability::{Term, above, clopper_pearson};
 use gapkeep::numeric::random::{BLOCK, Stream, monte_carlo};
-use gapkeep::numeric::{Lanes, Number, Tape};
+use gapkeep::numeric::tape::{Column, Scratch};
+use gapkeep::numeric::{Number, Tape};
 
 fn main() {
     divan::main();
@@ -96,7 +96,8 @@ fn yield_of_a_shrink_joint(bencher: Bencher<'_, '_>) {
     });
 }
 
-/// The same joint as the program draws it: the formula recorded once, replayed in lanes.
+/// The same joint as the program draws it: the formula recorded once, replayed
+/// over columns of draws.
 #[divan::bench]
 fn yield_of_a_recorded_shrink_joint(bencher: Bencher<'_, '_>) {
     let streams = streams();
@@ -114,15 +115,13 @@ fn yield_of_a_recorded_shrink_joint(bencher: Bencher<'_, '_>) {
                 for ((unknown, stream), x) in unknowns.iter().zip(&streams).zip(&mut x) {
                     unknown.fill(*stream, first, &mut x[..count]);
                 }
-                let (mut scratch, mut above) = (vec![], 0u64);
-                for at in (0..BLOCK).step_by(WIDTH) {
-                    let inputs: [Lanes; JOINT.len()] =
-                        std::array::from_fn(|i| Lanes(std::array::from_fn(|lane| x[i][at + lane])));
-                    tape.replay(&inputs, &mut scratch, |_, p: &Lanes| {
-                        let p = p.0.iter().zip(at..count);
-                        above += p.filter(|(p, _)| **p > 31.0).count() as u64;
-                    });
-                }
+                let inputs = std::array::from_fn::<_, 10, _>(|i| Column::Drawn(&x[i]));
+                let (mut scratch, mut above) = (Scratch::default(), 0u64);
+                tape.replay_columns(&inputs, count, &mut scratch, |_, _, p| {
+                    if let Column::Drawn(p) = p {
+                        above += p.iter().filter(|p| **p > 31.0).count() as u64;
+                    }
+                });
                 above
             },
         )

@@ -9,11 +9,10 @@ use crate::evaluate::Options;
 use crate::evaluate::outcome::Statistics;
 use crate::evaluate::scene::Response;
 use crate::model::{Assembly, Unknown};
-use crate::numeric::Lanes;
 use crate::numeric::distribution::Distribution;
-use crate::numeric::lanes::WIDTH;
 use crate::numeric::probability::clopper_pearson;
 use crate::numeric::random::{Merge, Stream, monte_carlo};
+use crate::numeric::tape::{Column, Scratch};
 use std::collections::BTreeMap;
 
 /// Confidence of the limits that are given with a drawn share.
@@ -136,37 +135,40 @@ fn block(
     first: u64,
     count: usize,
 ) -> Sum {
-    let padded = count.div_ceil(WIDTH) * WIDTH;
-    let mut values = vec![0.0; padded * streams.len()];
-    for ((stream, chance), row) in streams.iter().zip(values.chunks_mut(padded.max(1))) {
-        chance.fill(*stream, first, &mut row[..count]);
+    let mut values = vec![0.0; count * streams.len()];
+    for ((stream, chance), row) in streams.iter().zip(values.chunks_mut(count.max(1))) {
+        chance.fill(*stream, first, row);
     }
-    let mut failing = vec![false; checks * padded];
-    let mut scratch = Vec::new();
+    let mut failing = vec![false; checks * count];
+    let mut scratch = Scratch::default();
     let mut inputs = Vec::new();
     for plan in plans {
-        for at in (0..padded).step_by(WIDTH) {
-            inputs.clear();
-            inputs.extend(plan.inputs.iter().map(|input| match *input {
-                Input::Fixed(x) => Lanes([x; WIDTH]),
-                Input::Drawn(row) => {
-                    let from = row * padded + at;
-                    let mut lanes = [0.0; WIDTH];
-                    lanes.copy_from_slice(&values[from..from + WIDTH]);
-                    Lanes(lanes)
+        inputs.clear();
+        inputs.extend(plan.inputs.iter().map(|input| match *input {
+            Input::Fixed(x) => Column::Fixed(x),
+            Input::Drawn(row) => Column::Drawn(&values[row * count..(row + 1) * count]),
+        }));
+        let row = &mut failing[plan.check * count..(plan.check + 1) * count];
+        // What is not a number breaks every limit.
+        let (lower, upper) =
+            (plan.lower.unwrap_or(f64::NEG_INFINITY), plan.upper.unwrap_or(f64::INFINITY));
+        let breaks = |x: f64| !(x >= lower && x <= upper);
+        plan.response.tape.replay_columns(
+            &inputs,
+            count,
+            &mut scratch,
+            |_, at, result| match result {
+                Column::Fixed(x) if breaks(x) => row.fill(true),
+                Column::Fixed(_) => {}
+                Column::Drawn(result) => {
+                    for (failing, &x) in row[at..].iter_mut().zip(result) {
+                        *failing |= breaks(x);
+                    }
                 }
-            }));
-            plan.response.tape.replay(&inputs, &mut scratch, |_, result: &Lanes| {
-                for (lane, &x) in result.0.iter().enumerate() {
-                    // What is not a number breaks every limit.
-                    let within =
-                        plan.lower.is_none_or(|l| x >= l) && plan.upper.is_none_or(|u| x <= u);
-                    failing[plan.check * padded + at + lane] |= !within;
-                }
-            });
-        }
+            },
+        );
     }
-    let row = |check: usize| &failing[check * padded..check * padded + count];
+    let row = |check: usize| &failing[check * count..(check + 1) * count];
     let single = (0..checks).map(|c| row(c).iter().filter(|f| **f).count() as u64).collect();
     let any = (0..count).filter(|&k| (0..checks).any(|c| row(c)[k])).count() as u64;
     Sum { single, any }
