@@ -36,3 +36,13 @@ pub(crate) fn of_material(material: &Material, which: Named) -> Option<&Property
         Named::BulkModulus => material.bulk_modulus.as_ref(),
     }
 }
+
+/// A property without scatter of its own at a temperature.
+pub(crate) fn property(
+    scene: &Scene<'_>,
+    part: PartId,
+    which: Named,
+    temperature: Recorded,
+) -> Result<Recorded, Unable> {
+    Ok(temperature.apply(&stated(scene, part, which)?.curve))
+}

@@ -1,29 +1,125 @@
 //! Quantities of joints under pressure.
+//!
+//! Joints that share a ring (a shaft in a bush, the bush in a housing) are one stack and are solved
+//! together. Stiffness is taken on nominal sizes at the reference temperature, interference on free
+//! sizes at the parts' own temperatures.
 
+mod stack;
+
+use super::elastic;
+use super::expression::value;
+use super::outcome::Property;
 use super::scene::{At, Scene, Unable};
-use crate::model::{DimensionId, Fit, Joint, Quantity, SubjectId};
-use crate::numeric::Recorded;
+use super::temperature;
+use crate::mechanics::{contact, joint as formulas};
+use crate::model::{
+    DimensionId, Fit, Form, Joint, Owner, PartId, Quantity, SubjectId, Unknown,
+};
+use crate::numeric::{Number, Recorded};
+use stack::Stack;
 
-pub(crate) fn quantities(_joint: &Joint) -> Vec<Quantity> {
-    vec![Quantity::Clearance]
+/// What a report shows of a joint.
+pub(crate) fn quantities(joint: &Joint) -> Vec<Quantity> {
+    let mut list = vec![
+        Quantity::Clearance,
+        Quantity::Pressure,
+        Quantity::Stress(joint.outer.part),
+        Quantity::Stress(joint.inner.part),
+    ];
+    if joint.friction.is_some() {
+        list.push(Quantity::Torque);
+        list.push(Quantity::AxialForce);
+    }
+    list
 }
 
-pub(crate) fn after(
-    _scene: &Scene<'_>,
-    _at: At,
-    _dimension: DimensionId,
-    _fit: SubjectId,
-) -> Result<Recorded, Unable> {
-    Err(Unable::BeyondData)
-}
-
+/// A quantity of a fit that is a joint; free sizes of one that is not.
 pub(crate) fn quantity(
-    _scene: &Scene<'_>,
-    _at: At,
-    _subject: SubjectId,
-    _fit: &Fit,
-    _quantity: Quantity,
-    _of_yield: bool,
+    scene: &Scene<'_>,
+    at: At,
+    subject: SubjectId,
+    fit: &Fit,
+    quantity: Quantity,
+    of_yield: bool,
 ) -> Result<Recorded, Unable> {
-    Err(Unable::BeyondData)
+    let Some(joint) = &fit.joint else { return super::expression::clearance(scene, at, fit) };
+    let stack = Stack::of(scene.assembly, subject);
+    let pressures = stack.pressures(scene, at)?;
+    let place = stack.contact_of(subject);
+    let pressure = pressures[place].clone();
+    Ok(match quantity {
+        Quantity::Stress(part) => {
+            let stress = stress(scene, at, &stack, &pressures, subject, part)?;
+            if of_yield { stress / yield_strength(scene, at, part)? } else { stress }
+        }
+        Quantity::Torque | Quantity::AxialForce => {
+            let friction = scene.unknown(Unknown::Friction(subject));
+            let length = value(scene, at, &joint.length)?;
+            let diameter = Recorded::exact(stack.contact_diameter(place));
+            if quantity == Quantity::Torque {
+                formulas::torque(friction, pressure, length, diameter)
+            } else {
+                formulas::axial_force(friction, pressure, length, diameter)
+            }
+        }
+        _ => pressure,
+    })
+}
+
+/// Yield strength of a part at its temperature, Pa.
+pub(crate) fn yield_strength(
+    scene: &Scene<'_>,
+    at: At,
+    part: PartId,
+) -> Result<Recorded, Unable> {
+    let t = temperature::of(scene, at, Owner::Part(part));
+    elastic::property(scene, part, Property::Yield, t)
+}
+
+/// Greatest von Mises stress in a ring of the stack, Pa.
+fn stress(
+    scene: &Scene<'_>,
+    at: At,
+    stack: &Stack,
+    pressures: &[Recorded],
+    subject: SubjectId,
+    part: PartId,
+) -> Result<Recorded, Unable> {
+    let place = stack.ring_of(part);
+    let ring = stack.ring(scene, at, place)?;
+    let (inside, outside) = contact::faces(pressures, place);
+    if !stack.turns(scene, at, place) {
+        return Ok(ring.greatest_von_mises(inside, outside));
+    }
+    // A turning ring may be stressed most anywhere: the depth is one more unknown, and what the bore
+    // has is reached at every depth.
+    let depth = scene.unknown(Unknown::Depth(subject));
+    let bore = ring.bore.clone().unwrap_or_else(|| Recorded::exact(0.0));
+    let radius = bore.clone() + depth * (ring.outside.clone() - bore);
+    let there = ring.stress_at(inside.clone(), outside.clone(), radius).von_mises();
+    Ok(ring.stress_inside(inside, outside).von_mises().max(there))
+}
+
+/// A bore or outside once the joint is made, m: the free size where it is loose.
+pub(crate) fn after(
+    scene: &Scene<'_>,
+    at: At,
+    id: DimensionId,
+    fit: SubjectId,
+) -> Result<Recorded, Unable> {
+    let free = super::size::at(scene, at, id, 1)?;
+    let dimension = scene.assembly.dimension(id);
+    let stack = Stack::of(scene.assembly, fit);
+    let place = stack.ring_of(dimension.part);
+    let ring = stack.ring(scene, at, place)?;
+    let pressures = stack.pressures(scene, at)?;
+    let (inside, outside) = contact::faces(&pressures, place);
+    let diameter =
+        if dimension.form == Form::Radius { 2.0 * dimension.nominal } else { dimension.nominal };
+    let strain = if stack.is_bore(place, diameter) {
+        ring.bore_strain(inside, outside)
+    } else {
+        ring.outside_strain(inside, outside)
+    };
+    Ok(free + strain * dimension.nominal)
 }
