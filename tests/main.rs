@@ -3,10 +3,14 @@
 // A test that cannot go on should say so at once.
 #![allow(clippy::unwrap_used, clippy::expect_used)]
 
+mod acceptance;
 mod bad;
 mod interval_laws;
+mod laws;
 mod materials;
 mod mechanics;
 mod published;
 mod standards_laws;
+mod support;
 mod syntax;
+mod tidy;

@@ -11,7 +11,7 @@ use std::collections::BTreeMap;
 
 /// Files that a spec reads, by name.
 #[derive(Default)]
-pub struct Folder(pub BTreeMap<String, String>);
+pub(crate) struct Folder(pub(crate) BTreeMap<String, String>);
 
 impl Files for Folder {
     fn read(&self, path: &str) -> Result<Vec<u8>, FileError> {
@@ -20,19 +20,19 @@ impl Files for Folder {
 }
 
 /// A spec that has been evaluated.
-pub struct Run {
-    pub assembly: Assembly,
-    pub evaluation: Evaluation,
-    pub diagnostics: Vec<Diagnostic>,
+pub(crate) struct Run {
+    pub(crate) assembly: Assembly,
+    pub(crate) evaluation: Evaluation,
+    pub(crate) diagnostics: Vec<Diagnostic>,
 }
 
 /// Evaluates a spec without files; panics with what was reported if it has mistakes.
-pub fn run(text: &str) -> Run {
+pub(crate) fn run(text: &str) -> Run {
     run_with(text, &Folder::default())
 }
 
 /// Evaluates a spec with files.
-pub fn run_with(text: &str, files: &Folder) -> Run {
+pub(crate) fn run_with(text: &str, files: &Folder) -> Run {
     let mut sources = Sources::default();
     let file = sources.add(Source::new("test.gap", text));
     let resolved = resolve(file, &mut sources, files);
@@ -56,7 +56,7 @@ pub fn run_with(text: &str, files: &Folder) -> Run {
 
 impl Run {
     /// The figure of a quantity of a subject at a condition (none for what has none).
-    pub fn figure(&self, subject: &str, quantity: Quantity, condition: Option<&str>) -> &Figure {
+    pub(crate) fn figure(&self, subject: &str, quantity: Quantity, condition: Option<&str>) -> &Figure {
         let wanted = |f: &&Figure| {
             self.assembly.subject(f.subject).name == subject
                 && f.quantity == quantity
@@ -68,7 +68,7 @@ impl Run {
     }
 
     /// Least and greatest of a figure in the unit it is shown in.
-    pub fn range(&self, subject: &str, quantity: Quantity, condition: &str) -> (f64, f64) {
+    pub(crate) fn range(&self, subject: &str, quantity: Quantity, condition: &str) -> (f64, f64) {
         let figure = self.figure(subject, quantity, Some(condition));
         let unit = self.unit(figure);
         (unit.from_si(figure.range.least.bound), unit.from_si(figure.range.greatest.bound))
@@ -85,7 +85,7 @@ impl Run {
     }
 
     /// The verdict of a requirement at a condition.
-    pub fn verdict(&self, id: &str, condition: &str) -> &Verdict {
+    pub(crate) fn verdict(&self, id: &str, condition: &str) -> &Verdict {
         self.evaluation
             .verdicts
             .iter()
@@ -98,14 +98,14 @@ impl Run {
     }
 
     /// All that was reported, a line each.
-    pub fn words(&self) -> Vec<String> {
+    pub(crate) fn words(&self) -> Vec<String> {
         self.diagnostics.iter().map(|d| format!("{}: {}", d.code, d.message)).collect()
     }
 }
 
 /// Fails unless both ends agree to a relative error of `tolerance`.
 #[track_caller]
-pub fn assert_range(found: (f64, f64), expected: (f64, f64), tolerance: f64) {
+pub(crate) fn assert_range(found: (f64, f64), expected: (f64, f64), tolerance: f64) {
     let close = |a: f64, b: f64| (a - b).abs() <= tolerance * b.abs().max(1e-300);
     assert!(
         close(found.0, expected.0) && close(found.1, expected.1),
