@@ -1,7 +1,7 @@
 //! Whole specs with known answers, worked out independently in double precision with numpy from
 //! the formulas of `docs/method.md` (relative 1e-8 unless stated).
 
-use crate::support::{assert_range, run};
+use crate::support::{Folder, Run, assert_range, run, run_with};
 use gapkeep::evaluate::outcome::Outcome;
 use gapkeep::model::Quantity;
 
@@ -41,12 +41,35 @@ result squeeze =
     let verdict = run.verdict("S", "cold");
     assert_eq!(verdict.outcome, Outcome::Holds);
     // Shares of the range, per cent, to 1e-3.
-    for (contributor, expected) in
-        verdict.contributors.iter().zip([68.280, 12.050, 10.414, 9.255])
+    for (contributor, expected) in verdict.contributors.iter().zip([68.280, 12.050, 10.414, 9.255])
     {
         let share = contributor.share_of_range * 100.0;
         assert!((share - expected).abs() < 1e-3, "{share} {expected}");
     }
+}
+
+/// A material whose strain against temperature in °C is 8e-6·t + 2.5e-8·t².
+const LIBRARY: &str = r#"
+- name: curved
+  family: test
+  expansion:
+    polynomial:
+      unit: 1
+      temperature: degC
+      pieces:
+        - { to: 160, coefficients: [0, 8.0e-6, 2.5e-8] }
+    range: -60 .. 160 degC
+    scatter: SCATTER
+  source: { grade: stated, text: "test" }
+"#;
+
+fn run_curved(scatter: &str, steel: &str) -> Run {
+    let library = LIBRARY.replace("SCATTER", scatter);
+    let files = Folder([("curved.yaml".to_string(), library)].into());
+    let text = format!(
+        "use \"curved.yaml\"\nmaterial steel_like {{ cte {steel} over -60 .. 160 degC; source \"test\" }}\n{CURVED}"
+    );
+    run_with(&spec(&text), &files)
 }
 
 const CURVED: &str = r#"
@@ -60,15 +83,7 @@ gap between = rod.length - tube.length {
 
 #[test]
 fn a_gap_whose_extreme_lies_inside_the_temperature_range() {
-    let run = run(&spec(&format!(
-        r#"
-material steel_like {{ cte 11.5 ppm/K over -60 .. 160 degC; source "test" }}
-material curved {{
-  cte instantaneous, ppm/K {{ -60 4; 160 15 }}
-  source "test"
-}}
-{CURVED}"#
-    )));
+    let run = run_curved("0 %", "11.5 ppm/K");
     let found = run.range("between", Quantity::Gap, "service");
     assert_range(found, (0.049_941_8, 0.132_345_565_5), 1e-7);
     // The window, to 1e-6 K.
@@ -90,15 +105,7 @@ material curved {{
 
 #[test]
 fn the_same_gap_with_scatter_of_both_materials() {
-    let run = run(&spec(&format!(
-        r#"
-material steel_like {{ cte 11.5 ±2 % ppm/K over -60 .. 160 degC; source "test" }}
-material curved {{
-  cte instantaneous ±2 %, ppm/K {{ -60 4; 160 15 }}
-  source "test"
-}}
-{CURVED}"#
-    )));
+    let run = run_curved("2 %", "11.5 ppm/K ±2 %");
     let found = run.range("between", Quantity::Gap, "service");
     assert_range(found, (0.047_780_48, 0.135_551_322_7), 1e-7);
 }
@@ -119,16 +126,8 @@ result web = plate.edge + plate.place - plate.hole / 2
 result sway = play(pin_in_plate)
 "#,
     ));
-    assert_range(
-        run.range("web", Quantity::Value, "hot"),
-        (15.773_955_75, 16.174_564_15),
-        1e-8,
-    );
-    assert_range(
-        run.range("sway", Quantity::Value, "hot"),
-        (-0.073_133_26, 0.073_133_26),
-        1e-6,
-    );
+    assert_range(run.range("web", Quantity::Value, "hot"), (15.773_955_75, 16.174_564_15), 1e-8);
+    assert_range(run.range("sway", Quantity::Value, "hot"), (-0.073_133_26, 0.073_133_26), 1e-6);
 }
 
 #[test]
@@ -169,7 +168,8 @@ fn a_sum_of_normal_uniform_and_triangular_sizes() {
         }
     }
     body.push_str(&format!("}}\ngap sum = {} - 120 mm {{\n", terms.join(" + ")));
-    let expected = [("0.1", 0.036_836_973_87), ("0.2", 1.484_450_188e-4), ("0.3", 1.748_628_886e-8)];
+    let expected =
+        [("0.1", 0.036_836_973_87), ("0.2", 1.484_450_188e-4), ("0.3", 1.748_628_886e-8)];
     for (limit, _) in &expected {
         body.push_str(&format!("  require \"{limit}\" <= {limit} for 99 % of assemblies\n"));
     }

@@ -31,12 +31,16 @@ fn assembly(dice: &mut Dice) -> String {
     let mut text = String::from("assembly \"random\"\nlengths in mm\ntemperatures in degC\n");
     let t = dice.between(-100.0, 200.0);
     let band = dice.between(0.0, 40.0);
-    let _ = writeln!(text, "condition one {t:.2} ±{band:.2} {{ p0 {:.1} K above }}", dice.between(1.0, 30.0));
+    let _ = writeln!(
+        text,
+        "condition one {t:.2} ±{band:.2} {{ p0 {:.1} K above }}",
+        dice.between(1.0, 30.0)
+    );
     let _ = writeln!(text, "condition two {:.1} .. {:.1}", t - 50.0, t + band);
     let _ = writeln!(
         text,
         "material m0 {{ cte {:.2} ±{:.2} ppm/K }}\nmaterial m1 {{ cte instantaneous ±3 %, ppm/K \
-         {{ -300 {:.2}; 20 {:.2}; 400 {:.2} }} }}",
+         {{ -270 {:.2}; 20 {:.2}; 400 {:.2} }} }}",
         dice.between(-2.0, 30.0),
         dice.between(0.0, 3.0),
         dice.between(1.0, 20.0),
@@ -64,7 +68,10 @@ fn assembly(dice: &mut Dice) -> String {
         let _ = write!(stack, " + p{p}.a - p{p}.b");
         let _ = write!(bent, " - sqrt(p{p}.a^2 + p{p}.b^2) * cos(p{p}.w)");
     }
-    let _ = writeln!(text, "gap stack = {stack}\nresult bent = {bent}\nresult grown = change(p0.a - p1.a from one)");
+    let _ = writeln!(
+        text,
+        "gap stack = {stack}\nresult bent = {bent}\nresult grown = change(p0.a - p1.a from one)"
+    );
     text
 }
 
@@ -146,13 +153,18 @@ fn corners_agree_with_enumeration_on_small_linear_stacks() {
         assert!(low <= least + 1e-15 && high >= greatest - 1e-15, "{text}");
         let figure = &run.evaluation.figures[0].range;
         for end in [&figure.least, &figure.greatest] {
-            let on_corner = end.corner.iter().zip(&response.ranges).all(|((_, x), r)| {
-                *x == r.lo() || *x == r.hi()
-            });
+            let on_corner = end
+                .corner
+                .iter()
+                .zip(&response.ranges)
+                .all(|((_, x), r)| *x == r.lo() || *x == r.hi());
             if on_corner {
                 let reached = end.bound;
                 let nearest = (reached - least).abs().min((reached - greatest).abs());
-                assert!(nearest <= 1e-12 * reached.abs().max(1e-3), "{text}\n{reached} {least} {greatest}");
+                assert!(
+                    nearest <= 1e-12 * reached.abs().max(1e-3),
+                    "{text}\n{reached} {least} {greatest}"
+                );
             }
         }
     }
@@ -210,9 +222,8 @@ fn a_wider_tolerance_never_narrows_the_range() {
 
 #[test]
 fn forty_dimensions_make_one_gap() {
-    let mut text = String::from(
-        "assembly \"long\"\nlengths in mm\ntemperatures in degC\ncondition hot 90\n",
-    );
+    let mut text =
+        String::from("assembly \"long\"\nlengths in mm\ntemperatures in degC\ncondition hot 90\n");
     let mut terms = String::from("box.depth");
     text.push_str("part box of aluminium_6061_t6 { depth = 400 ±0.1 }\n");
     for i in 0..39 {

@@ -56,7 +56,12 @@ pub(crate) fn run_with(text: &str, files: &Folder) -> Run {
 
 impl Run {
     /// The figure of a quantity of a subject at a condition (none for what has none).
-    pub(crate) fn figure(&self, subject: &str, quantity: Quantity, condition: Option<&str>) -> &Figure {
+    pub(crate) fn figure(
+        &self,
+        subject: &str,
+        quantity: Quantity,
+        condition: Option<&str>,
+    ) -> &Figure {
         let wanted = |f: &&Figure| {
             self.assembly.subject(f.subject).name == subject
                 && f.quantity == quantity

@@ -20,8 +20,16 @@ const ROOMS: &[(&str, &[&str])] = &[
     (
         "resolve",
         &[
-            "model", "mechanics", "materials", "standards", "units", "numeric", "syntax",
-            "diagnostic", "source", "span",
+            "model",
+            "mechanics",
+            "materials",
+            "standards",
+            "units",
+            "numeric",
+            "syntax",
+            "diagnostic",
+            "source",
+            "span",
         ],
     ),
     ("evaluate", &["model", "mechanics", "materials", "standards", "units", "numeric"]),
@@ -32,15 +40,35 @@ const ROOMS: &[(&str, &[&str])] = &[
     (
         "report",
         &[
-            "findings", "evaluate", "model", "materials", "standards", "units", "numeric",
-            "diagnostic", "source", "span",
+            "findings",
+            "evaluate",
+            "model",
+            "materials",
+            "standards",
+            "units",
+            "numeric",
+            "diagnostic",
+            "source",
+            "span",
         ],
     ),
     (
         "cli",
         &[
-            "report", "findings", "evaluate", "resolve", "model", "mechanics", "materials",
-            "standards", "units", "numeric", "syntax", "diagnostic", "source", "span",
+            "report",
+            "findings",
+            "evaluate",
+            "resolve",
+            "model",
+            "mechanics",
+            "materials",
+            "standards",
+            "units",
+            "numeric",
+            "syntax",
+            "diagnostic",
+            "source",
+            "span",
         ],
     ),
 ];
@@ -87,7 +115,9 @@ fn used(text: &str) -> BTreeSet<String> {
         for (at, _) in line.match_indices("crate::") {
             let rest = &line[at + "crate::".len()..];
             let names: Vec<&str> = match rest.strip_prefix('{') {
-                Some(list) => list.split(',').map(|n| n.trim().trim_matches(['{', '}', ';'])).collect(),
+                Some(list) => {
+                    list.split(',').map(|n| n.trim().trim_matches(['{', '}', ';'])).collect()
+                }
                 None => vec![rest],
             };
             for n in names {
@@ -134,7 +164,8 @@ fn the_order_of_the_rooms_is_an_order() {
 #[test]
 fn files_are_short_and_say_what_they_own() {
     let mut wrong = Vec::new();
-    let sources = files(&root().join("src"), "rs").into_iter().chain(files(&root().join("tests"), "rs"));
+    let sources =
+        files(&root().join("src"), "rs").into_iter().chain(files(&root().join("tests"), "rs"));
     for path in sources {
         let text = fs::read_to_string(&path).unwrap();
         let lines = text.lines().count();

@@ -12,9 +12,7 @@ use super::outcome::Property;
 use super::scene::{At, Scene, Unable};
 use super::temperature;
 use crate::mechanics::{contact, joint as formulas};
-use crate::model::{
-    DimensionId, Fit, Form, Joint, Owner, PartId, Quantity, SubjectId, Unknown,
-};
+use crate::model::{DimensionId, Fit, Form, Joint, Owner, PartId, Quantity, SubjectId, Unknown};
 use crate::numeric::{Number, Recorded};
 use stack::Stack;
 
@@ -67,11 +65,7 @@ pub(crate) fn quantity(
 }
 
 /// Yield strength of a part at its temperature, Pa.
-pub(crate) fn yield_strength(
-    scene: &Scene<'_>,
-    at: At,
-    part: PartId,
-) -> Result<Recorded, Unable> {
+pub(crate) fn yield_strength(scene: &Scene<'_>, at: At, part: PartId) -> Result<Recorded, Unable> {
     let t = temperature::of(scene, at, Owner::Part(part));
     elastic::property(scene, part, Property::Yield, t)
 }

@@ -139,10 +139,7 @@ impl Stack {
 /// Interference that roughness takes up, diametral, m; nothing where no roughness is stated.
 pub(super) fn smoothing(fit: &Fit) -> f64 {
     let Some(joint) = &fit.joint else { return 0.0 };
-    formulas::smoothing(
-        joint.inner.roughness.unwrap_or(0.0),
-        joint.outer.roughness.unwrap_or(0.0),
-    )
+    formulas::smoothing(joint.inner.roughness.unwrap_or(0.0), joint.outer.roughness.unwrap_or(0.0))
 }
 
 /// The value of an expression with every size at its nominal, as drawn.
