@@ -13,4 +13,3 @@ mod published;
 mod standards_laws;
 mod support;
 mod syntax;
-mod tidy;

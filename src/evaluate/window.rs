@@ -12,7 +12,7 @@ use super::{depends, quantity, temperature};
 use crate::model::{Assembly, ConditionId, Owner, Requirement, Thermal};
 use crate::numeric::Interval;
 use crate::numeric::extremes::extremes;
-use crate::numeric::tolerance::{EXTREME_GAP, LIMIT_SLACK, WINDOW_SLIVER};
+use crate::numeric::tolerance::{EXTREME_GAP, WINDOW_SLACK, WINDOW_SLIVER};
 
 /// Farthest factor that is looked at where temperatures are scaled.
 const MOST_SCALE: f64 = 10.0;
@@ -133,7 +133,7 @@ impl Search<'_> {
     /// Whether the requirement holds on the whole piece, fails on the whole piece, or neither.
     fn judge(&self, piece: Interval) -> Outcome {
         let unit = self.requirement.unit.difference_to_si(1.0);
-        let slack = LIMIT_SLACK * unit;
+        let slack = WINDOW_SLACK * unit;
         let limits = (self.requirement.lower.as_ref(), self.requirement.upper.as_ref());
         let with = |at: Interval| {
             std::iter::once(at).chain(self.response.ranges.iter().copied()).collect::<Vec<_>>()

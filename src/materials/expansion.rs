@@ -8,6 +8,7 @@ use super::log_polynomial::LogPolynomial;
 use super::{Scatter, Source};
 use crate::numeric::piecewise::{Beyond, Exponential, Polynomial, TableError};
 use crate::numeric::{Curve, Interval, Piecewise};
+use crate::units::STANDARD_REFERENCE;
 use std::sync::Arc;
 
 /// How a material expands, by direction.
@@ -161,7 +162,9 @@ impl Expansion {
     }
 
     fn integral(alpha: &Piecewise, per: Per, (lo, hi): (f64, f64)) -> Self {
-        let strain = alpha.integral(lo);
+        // A coefficient is a share of the length at the reference temperature, so that is where the
+        // strain is zero.
+        let strain = alpha.integral(STANDARD_REFERENCE);
         match per {
             Per::ReferenceLength => Expansion::new(strain, Form::Instantaneous, (lo, hi)),
             Per::CurrentLength => {

@@ -8,6 +8,7 @@
 
 use crate::numeric::piecewise::{Beyond, Polynomial, TableError};
 use crate::numeric::{Curve, Interval, Number, Ordered, Piecewise};
+use crate::units::STANDARD_REFERENCE;
 use std::sync::{Arc, OnceLock};
 
 /// Positive abscissae and weights of ten-point Gauss–Legendre quadrature on −1 … 1.
@@ -29,7 +30,7 @@ const KNOT_RATIO: f64 = 1.1;
 /// a strain of 0.01, with a wide margin.
 const QUADRATURE: f64 = 1e-15;
 
-/// ΔL/L₀ as the integral of `unit·10^P(log₁₀ T)` from the lower end of its range.
+/// ΔL/L₀ as the integral of `unit·10^P(log₁₀ T)` from the reference temperature.
 #[derive(Debug)]
 pub(super) struct LogPolynomial {
     coefficient: Arc<Coefficient>,
@@ -66,7 +67,11 @@ impl LogPolynomial {
             knots.push((to, strain));
             from = to;
         }
-        Ok(LogPolynomial { coefficient, knots, ends: [lo, hi] })
+        let mut curve = LogPolynomial { coefficient, knots, ends: [lo, hi] };
+        // A coefficient is a share of the length at the reference temperature: zero strain there.
+        let zero = curve.value(STANDARD_REFERENCE);
+        curve.knots.iter_mut().for_each(|(_, strain)| *strain -= zero);
+        Ok(curve)
     }
 }
 
@@ -244,7 +249,7 @@ mod tests {
         while from < 300.0 {
             let to = (from * 1.031).min(300.0);
             strain += copper.coefficient.quadrature(from, to);
-            assert!((copper.value(to) - strain).abs() < QUADRATURE, "{to}");
+            assert!((copper.value(to) - copper.value(4.0) - strain).abs() < QUADRATURE, "{to}");
             from = to;
         }
     }

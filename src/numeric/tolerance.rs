@@ -21,3 +21,7 @@ pub const TEMPERATURE_FOUND: f64 = 1e-7;
 /// Most pieces one search for a crossing may look at before it gives up and says so; a function that
 /// rises takes some fifty.
 pub const MOST_ROOT_PIECES: usize = 10_000;
+
+/// How far, in the unit shown, a bound may lie beyond its limit within a temperature window: enough
+/// for rounding, too little to move the end of a window.
+pub const WINDOW_SLACK: f64 = 1e-12;
