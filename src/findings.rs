@@ -12,6 +12,7 @@ pub mod number;
 mod scatter;
 mod selection;
 pub mod standing;
+pub mod thin_margin;
 mod undecided;
 pub mod words;
 

@@ -3,6 +3,7 @@
 //! The rooms, from the ground up, are listed in `DEVELOPERS.md`; a room uses only those before it,
 //! which `tests/tidy.rs` holds.
 
+pub mod cli;
 pub mod diagnostic;
 pub mod evaluate;
 pub mod findings;

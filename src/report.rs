@@ -10,7 +10,10 @@ mod cause;
 mod coordinate;
 pub mod diagnostic;
 pub mod json;
+pub mod library;
+pub mod limits;
 pub mod look;
+pub mod record;
 #[cfg(test)]
 mod sample;
 pub mod summary;
@@ -21,6 +24,7 @@ pub(crate) mod wrap;
 use crate::diagnostic::Diagnostic;
 use crate::findings::Standing;
 use crate::source::Sources;
+use crate::span::Span;
 use crate::units::Unit;
 pub use account::account;
 pub use basis::{Assumption, Grounds, MaterialNote, PartTemperature};
@@ -45,6 +49,8 @@ pub struct Spec {
     pub account: Option<Account>,
     /// What is wrong or worth knowing, in the order of the spec.
     pub findings: Vec<Diagnostic>,
+    /// Lines that differ from its record, where it was held against one.
+    pub stale: Vec<String>,
 }
 
 /// The figures of one assembly.
@@ -52,6 +58,8 @@ pub struct Spec {
 pub struct Account {
     /// The words after `assembly`.
     pub title: String,
+    /// Where they stand.
+    pub place: Span,
     /// Drawing number and revision, if stated.
     pub drawing: Option<(String, String)>,
     /// Free remarks.
@@ -66,6 +74,9 @@ pub struct Account {
     pub figures: Vec<Figure>,
     /// Each requirement at each of its conditions, in the order of the spec.
     pub cases: Vec<Case>,
+    /// The share of assemblies that break some requirement somewhere, where statistics were asked
+    /// for.
+    pub failing: Option<FailingShare>,
     /// What the figures rest on.
     pub grounds: Grounds,
 }
@@ -138,6 +149,8 @@ pub struct Case {
     pub name: String,
     /// The name of the subject.
     pub subject: String,
+    /// `fit`, `gap`, `result`, `restraint` or `fill`.
+    pub kind: &'static str,
     /// The word of the quantity.
     pub quantity: String,
     /// Across what a length is measured.
@@ -159,7 +172,7 @@ pub struct Case {
     /// Distance to the nearer limit, negative when passed; not a number where nothing could be
     /// computed.
     pub margin: f64,
-    /// The margin as a share of what it is measured against (see [`Case::against`]).
+    /// The margin as a share of what it is measured against, as [`crate::findings::thin_margin`] says.
     pub reserve: Option<f64>,
     /// How it stands, concessions taken into account.
     pub standing: Standing,
@@ -169,6 +182,8 @@ pub struct Case {
     pub concession: Option<String>,
     /// What the range is made of, largest share first.
     pub contributors: Vec<Contribution>,
+    /// How it varies from assembly to assembly, where statistics were asked for.
+    pub statistics: Option<Statistics>,
     /// The mean here minus the mean at reference.
     pub thermal_shift: Option<f64>,
     /// Temperatures at which it would hold, K, open ends infinite; multiples of the condition's
@@ -178,16 +193,34 @@ pub struct Case {
     pub window_scaled: bool,
 }
 
-impl Case {
-    /// What a margin is measured against: the width of what is allowed where both limits are given,
-    /// else the size of the limit, else, where that is zero, the width of the range.
-    pub fn against(lower: Option<f64>, upper: Option<f64>, range: f64) -> f64 {
-        match (lower, upper) {
-            (Some(lower), Some(upper)) if upper > lower => upper - lower,
-            (Some(limit), _) | (_, Some(limit)) if limit != 0.0 => limit.abs(),
-            _ => range,
-        }
-    }
+/// How a quantity varies from assembly to assembly, scenarios at their worst. Values are SI.
+#[derive(Debug, Clone)]
+pub struct Statistics {
+    /// The quantity at the means.
+    pub mean: f64,
+    /// Its standard deviation to first order.
+    pub sigma: f64,
+    /// Mean and standard deviation to second order.
+    pub second_order: (f64, f64),
+    /// The share of assemblies that break a limit.
+    pub failing: FailingShare,
+    /// Capability index to the nearer limit.
+    pub cpk: Option<f64>,
+    /// True where some spread is the default and not stated.
+    pub assumed: bool,
+    /// Share of the variance that several unknowns bring together.
+    pub interaction: Option<f64>,
+}
+
+/// A share of assemblies, 0 … 1.
+#[derive(Debug, Clone, Copy)]
+pub struct FailingShare {
+    /// The share.
+    pub share: f64,
+    /// What it is known to lie between.
+    pub interval: (f64, f64),
+    /// Number of draws, where it was drawn.
+    pub draws: Option<u64>,
 }
 
 /// What one unknown does to a quantity.

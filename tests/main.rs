@@ -5,6 +5,7 @@
 
 mod acceptance;
 mod bad;
+mod cli;
 mod interval_laws;
 mod laws;
 mod materials;

@@ -279,6 +279,12 @@ codes! {
     UllageAboveLimit = "ullage-above-limit", Error;
     /// A requirement that could be proven neither to hold nor to fail.
     NotDecided = "not-decided", Error;
+    /// A spec without a record beside it, where one is asked for.
+    RecordMissing = "record-missing", Error;
+    /// A record that differs from what the spec gives now.
+    RecordStale = "record-stale", Error;
+    /// A requirement that holds with less room than asked for.
+    ThinMargin = "thin-margin", Warning;
     /// A part colder or hotter than its material's data go.
     TemperatureOutsideData = "temperature-outside-data", Error;
     /// Figures beyond a material's data, as its `extrapolate` allows.

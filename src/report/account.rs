@@ -3,10 +3,10 @@
 use super::basis::grounds;
 use super::cause::Cause;
 use super::coordinate::{coordinates, scale};
-use super::{Account, Case, Contribution, Figure, Measure};
+use super::{Account, Case, Contribution, FailingShare, Figure, Measure, Statistics};
 use crate::evaluate::Evaluation;
 use crate::evaluate::outcome::{self, Verdict};
-use crate::findings::{standing, words};
+use crate::findings::{standing, thin_margin, words};
 use crate::model::{
     Assembly, Basis, Condition, Expr, ExprKind, Form, Method, Quantity, Requirement, Subject,
     SubjectId, SubjectKind, Unknown,
@@ -20,6 +20,7 @@ pub fn account(assembly: &Assembly, evaluation: &Evaluation, today: &str) -> Acc
     let written = |c: &Condition| (c.name.clone(), c.written.clone());
     Account {
         title: assembly.title.clone(),
+        place: assembly.span,
         drawing: assembly.drawing.as_ref().map(|d| (d.number.clone(), d.revision.clone())),
         notes: assembly.notes.clone(),
         temperature: assembly.defaults.temperature,
@@ -27,6 +28,11 @@ pub fn account(assembly: &Assembly, evaluation: &Evaluation, today: &str) -> Acc
         conditions: assembly.conditions.iter().map(written).collect(),
         figures,
         cases,
+        failing: evaluation.assembly_yield.map(|y| FailingShare {
+            share: y.share_failing,
+            interval: y.share_interval,
+            draws: y.draws,
+        }),
         grounds: grounds(assembly, evaluation),
     }
 }
@@ -85,13 +91,18 @@ fn unit(assembly: &Assembly, figure: &outcome::Figure) -> &'static Unit {
         .find(|r| r.subject == figure.subject && r.quantity == figure.quantity)
         .filter(|r| of_yield(r) == figure.of_yield);
     if let Some(requirement) = required {
-        return requirement.unit;
+        return shown_unit(requirement);
     }
     let share = figure.of_yield || figure.quantity == Quantity::Ullage;
     match find("%") {
         Some(percent) if share => percent,
         _ => assembly.defaults.shown(kind(assembly, figure.subject, figure.quantity)),
     }
+}
+
+/// The unit a requirement's figures are shown in; a share of yield in per cent.
+fn shown_unit(requirement: &Requirement) -> &'static Unit {
+    find("%").filter(|_| of_yield(requirement)).unwrap_or(requirement.unit)
 }
 
 fn of_yield(requirement: &Requirement) -> bool {
@@ -161,14 +172,12 @@ fn case(assembly: &Assembly, evaluation: &Evaluation, verdict: &Verdict, today: 
     let requirement = &assembly.requirements[verdict.requirement];
     let lower = requirement.lower.as_ref().map(|l| l.value);
     let upper = requirement.upper.as_ref().map(|l| l.value);
-    let range = verdict.figure.and_then(|f| evaluation.figures.get(f)).map(|f| &f.range);
-    let width = range.map_or(0.0, |r| r.greatest.bound - r.least.bound);
-    let reserve = verdict.margin / Case::against(lower, upper, width);
     Case {
         requirement: verdict.requirement,
         id: requirement.id.clone(),
         name: words::requirement(assembly, requirement),
         subject: assembly.subject(requirement.subject).name.clone(),
+        kind: kind_word(assembly.subject(requirement.subject)),
         quantity: words::quantity(assembly, requirement.quantity),
         measure: measure(assembly, requirement.subject, requirement.quantity),
         condition: verdict.condition.map(|c| assembly.condition(c).name.clone()),
@@ -176,10 +185,10 @@ fn case(assembly: &Assembly, evaluation: &Evaluation, verdict: &Verdict, today: 
         limits: limits(requirement),
         lower,
         upper,
-        unit: requirement.unit,
+        unit: shown_unit(requirement),
         figure: verdict.figure,
         margin: verdict.margin,
-        reserve: reserve.is_finite().then_some(reserve),
+        reserve: thin_margin::reserve(assembly, evaluation, verdict),
         standing: standing(assembly, evaluation, verdict, today),
         because: requirement.because.clone(),
         concession: requirement.concession.as_ref().map(|c| {
@@ -189,8 +198,9 @@ fn case(assembly: &Assembly, evaluation: &Evaluation, verdict: &Verdict, today: 
         contributors: verdict
             .contributors
             .iter()
-            .map(|c| contribution(assembly, requirement, c))
+            .map(|c| contribution(assembly, requirement, verdict, c))
             .collect(),
+        statistics: verdict.statistics.as_ref().map(statistics),
         thermal_shift: thermal_shift(assembly, evaluation, verdict),
         window: verdict.window.as_ref().map(|w| w.intervals.clone()),
         window_scaled: verdict.window.as_ref().is_some_and(|w| w.scaled),
@@ -213,19 +223,24 @@ fn method(method: Method) -> String {
 
 /// Both limits as they were written.
 fn limits(requirement: &Requirement) -> String {
-    match (&requirement.lower, &requirement.upper) {
+    let both = match (&requirement.lower, &requirement.upper) {
         (Some(lower), Some(upper)) => format!("{} .. {}", lower.written, upper.written),
         (Some(lower), None) => format!(">= {}", lower.written),
         (None, Some(upper)) => format!("<= {}", upper.written),
         (None, None) => String::new(),
-    }
+    };
+    if of_yield(requirement) { format!("{both} of yield") } else { both }
 }
 
 fn contribution(
     assembly: &Assembly,
     requirement: &Requirement,
+    verdict: &Verdict,
     contributor: &outcome::Contributor,
 ) -> Contribution {
+    let of_variance = verdict.statistics.as_ref().and_then(|s| {
+        s.variance_shares.iter().find(|v| v.unknown == Some(contributor.unknown)).map(|v| v.share)
+    });
     let scale = scale(assembly, contributor.unknown);
     let dimension = match contributor.unknown {
         Unknown::Size { dimension, .. } => Some(assembly.dimension(dimension)),
@@ -241,23 +256,46 @@ fn contribution(
         written: written.cloned().unwrap_or_default(),
         cause: Cause::of(assembly, contributor.unknown),
         basis: dimension.filter(|d| d.basis != Basis::Drawing).map(|d| d.basis.word()),
-        sensitivity: requirement.unit.difference_from_si(contributor.sensitivity * scale.step()),
+        sensitivity: shown_unit(requirement)
+            .difference_from_si(contributor.sensitivity * scale.step()),
         unit: scale.symbol(),
         part: contributor.part,
         share_of_range: contributor.share_of_range,
-        share_of_variance: None,
+        share_of_variance: of_variance,
     }
 }
 
-/// How far temperature alone moves the mean: here minus the same at the condition `reference`.
+fn statistics(s: &outcome::Statistics) -> Statistics {
+    Statistics {
+        mean: s.mean,
+        sigma: s.sigma,
+        second_order: s.second_order,
+        failing: FailingShare {
+            share: s.share_failing,
+            interval: s.share_interval,
+            draws: s.draws,
+        },
+        cpk: s.cpk,
+        assumed: s.assumed,
+        interaction: s.variance_shares.iter().find(|v| v.unknown.is_none()).map(|v| v.share),
+    }
+}
+
+/// How far temperature alone moves the mean: here minus the same at a condition where every part
+/// is at the reference temperature, if the spec states one.
 fn thermal_shift(assembly: &Assembly, evaluation: &Evaluation, verdict: &Verdict) -> Option<f64> {
     let here = evaluation.figures.get(verdict.figure?)?;
+    let is_reference = |condition| {
+        let mut there = evaluation.temperatures.iter().filter(|t| t.condition == condition);
+        there.all(|t| t.least == assembly.reference && t.greatest == assembly.reference)
+    };
     let reference = evaluation.figures.iter().find(|f| {
         f.subject == here.subject
             && f.quantity == here.quantity
             && f.members == here.members
             && f.of_yield == here.of_yield
-            && f.condition.is_some_and(|c| assembly.condition(c).name == "reference")
+            && f.condition != here.condition
+            && f.condition.is_some_and(is_reference)
     })?;
     Some(here.range.mean - reference.range.mean)
 }

@@ -54,6 +54,13 @@ pub fn role(severity: Severity) -> Role {
 
 /// Severity and sentence, then place and code at the two ends of a line.
 fn heading(out: &mut String, diagnostic: &Diagnostic, sources: &Sources, look: Look) {
+    out.push_str(&sentence(diagnostic, look));
+    place(out, diagnostic, sources, look);
+}
+
+/// Severity and sentence alone, for where the reader has no spec to look into.
+pub fn sentence(diagnostic: &Diagnostic, look: Look) -> String {
+    let mut out = String::new();
     let word = diagnostic.severity.word();
     let indent = word.len() + 2;
     for (i, text) in wrap(&visible(&diagnostic.message), look.width - indent).iter().enumerate() {
@@ -64,6 +71,11 @@ fn heading(out: &mut String, diagnostic: &Diagnostic, sources: &Sources, look: L
             out.push_str(&format!("{}{}\n", blanks(indent), look.paint(Role::Title, text)));
         }
     }
+    out
+}
+
+/// Place and code at the two ends of a line.
+fn place(out: &mut String, diagnostic: &Diagnostic, sources: &Sources, look: Look) {
     let span = diagnostic.primary.span;
     let source = sources.get(span.file);
     let (line, column) = source.position(span.start as usize);

@@ -54,6 +54,7 @@ fn case(figures: &[Figure], at: usize, requirement: usize, limits: &str) -> Case
         id: Some(id.clone()),
         name: id,
         subject: figure.subject.clone(),
+        kind: figure.kind,
         quantity: figure.quantity.clone(),
         measure: figure.measure,
         condition: figure.condition.clone(),
@@ -72,6 +73,7 @@ fn case(figures: &[Figure], at: usize, requirement: usize, limits: &str) -> Case
             contribution("housing.bore", "dia 42 K6", Cause::Size, 0.016, 0.68),
             contribution("temperature of hot", "85 ±3", Cause::Temperature, 0.0075, 0.32),
         ],
+        statistics: None,
         thermal_shift: Some(figure.unit.to_si(0.0041)),
         window: Some(vec![(273.15, 331.25), (350.15, f64::INFINITY)]),
         window_scaled: false,
@@ -153,6 +155,7 @@ pub(super) fn report() -> Report {
             sources,
             account: Some(Account {
                 title: "Filter wheel spindle".into(),
+                place: Span::new(FileId(0), 9, 31),
                 drawing: Some(("FW-300".into(), "C".into())),
                 notes: Vec::new(),
                 temperature: unit("degC"),
@@ -164,9 +167,11 @@ pub(super) fn report() -> Report {
                 ],
                 figures,
                 cases,
+                failing: None,
                 grounds: grounds(),
             }),
             findings: vec![finding],
+            stale: Vec::new(),
         }],
     }
 }

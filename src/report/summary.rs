@@ -1,7 +1,7 @@
 //! How a run went, in numbers and in one line.
 
 use super::{Case, Report};
-use crate::diagnostic::Severity;
+use crate::diagnostic::{Code, Severity};
 use crate::findings::Standing;
 use crate::findings::number::{Round, difference_with_unit};
 use crate::findings::words::count;
@@ -22,6 +22,8 @@ pub struct Summary {
     pub conceded: usize,
     /// Specs that are wrong, so that nothing of them was computed.
     pub wrong: usize,
+    /// Requirements with a thinner margin than asked for.
+    pub thin: usize,
     /// Findings of severity error.
     pub errors: usize,
     /// Findings of severity warning.
@@ -44,6 +46,8 @@ pub fn summary(report: &Report) -> Summary {
                 }
             }),
         }
+        let thin = spec.findings.iter().filter(|d| d.code == Code::ThinMargin);
+        summary.thin += thin.count();
         let of = |severity| spec.findings.iter().filter(|d| d.severity == severity).count();
         summary.errors += of(Severity::Error);
         summary.warnings += of(Severity::Warning);

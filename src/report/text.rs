@@ -12,6 +12,7 @@ mod table;
 use super::look::{Look, Role};
 use super::wrap::{blanks, visible, width, wrap};
 use super::{Account, Report, Spec, diagnostic, summary};
+use crate::diagnostic::Severity;
 use crate::findings::Standing;
 use crate::findings::number::{Round, with_unit};
 
@@ -49,6 +50,14 @@ pub fn render(report: &Report, extent: Extent, look: Look) -> String {
             }
             part.push_str(&diagnostic::render(finding, &spec.sources, look));
         }
+        for line in &spec.stale {
+            let role = match line.as_bytes().first() {
+                Some(b'-') => Role::Bad,
+                Some(b'+') => Role::Good,
+                _ => Role::Quiet,
+            };
+            part.push_str(&format!("  {}\n", look.paint(role, &visible(line))));
+        }
         if part.is_empty() {
             continue;
         }
@@ -78,7 +87,8 @@ pub fn render(report: &Report, extent: Extent, look: Look) -> String {
 }
 
 fn all_holds(spec: &Spec, account: &Account) -> bool {
-    spec.findings.is_empty() && account.cases.iter().all(|c| c.standing == Standing::Holds)
+    spec.findings.iter().all(|d| d.severity == Severity::Note)
+        && account.cases.iter().all(|c| c.standing == Standing::Holds)
 }
 
 /// File and how many requirements hold, for specs among others.
@@ -94,6 +104,11 @@ fn one_line(spec: &Spec, account: &Account, look: Look) -> String {
 fn whole(out: &mut String, spec: &Spec, account: &Account, extent: Extent, look: Look) {
     heading(out, spec, account, look);
     table::render(out, account, extent, look);
+    if let Some(failing) = &account.failing {
+        let text = format!("{} break some requirement at some condition", detail::failing(failing));
+        out.push('\n');
+        paragraph(out, 0, &text, Role::Plain, look);
+    }
     if extent == Extent::Detail {
         detail::render(out, account, look);
         grounds::render(out, account, look);

@@ -5,6 +5,8 @@
 //! full precision in the unit named beside them; what is not known or has no end is `null`.
 
 mod from;
+#[cfg(test)]
+mod schema;
 
 pub use from::document;
 use serde::ser::SerializeMap;
@@ -15,6 +17,7 @@ pub const SCHEMA: &str = "gapkeep/1";
 
 /// A whole run.
 #[derive(Debug, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
 pub struct Document {
     /// `gapkeep/1`.
     pub schema: &'static str,
@@ -26,6 +29,7 @@ pub struct Document {
 
 /// One spec.
 #[derive(Debug, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
 pub struct SpecEntry {
     /// Its file, relative to the root of the run.
     pub file: String,
@@ -39,12 +43,29 @@ pub struct SpecEntry {
     pub results: Vec<ResultEntry>,
     /// Each requirement at each of its conditions.
     pub requirements: Vec<RequirementEntry>,
+    /// The share of assemblies that meet every requirement at every condition, where statistics
+    /// were asked for.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub assembly_yield: Option<YieldEntry>,
     /// What is wrong or worth knowing.
     pub findings: Vec<FindingEntry>,
 }
 
+/// A share of assemblies that hold, with what it is known to lie between.
+#[derive(Debug, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
+pub struct YieldEntry {
+    /// The share, 0 … 1.
+    pub share: Option<f64>,
+    /// What it lies between.
+    pub interval: [Option<f64>; 2],
+    /// Number of draws; `null` where it was computed without.
+    pub draws: Option<u64>,
+}
+
 /// One quantity at a condition.
 #[derive(Debug, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
 pub struct ResultEntry {
     /// Name of the fit, gap, result, restraint or fill.
     pub name: String,
@@ -58,8 +79,8 @@ pub struct ResultEntry {
     /// The condition; `null` for what has none.
     pub condition: Option<String>,
     /// The member of each `one of` set it was computed with, in mm.
-    #[serde(skip_serializing_if = "Map::is_empty")]
-    pub members: Map,
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub members: Option<Map>,
     /// Unit of the figures.
     pub unit: &'static str,
     /// No value lies below.
@@ -79,6 +100,7 @@ pub struct ResultEntry {
 
 /// One requirement at a condition.
 #[derive(Debug, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
 pub struct RequirementEntry {
     /// The id; `null` where none is given.
     pub id: Option<String>,
@@ -104,6 +126,21 @@ pub struct RequirementEntry {
     pub greatest: Option<f64>,
     /// Distance to the nearer limit, negative when passed.
     pub margin: Option<f64>,
+    /// Standard deviation to first order, where statistics were asked for.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub sigma: Option<f64>,
+    /// Share of assemblies that break a limit, 0 … 1.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub share_failing: Option<f64>,
+    /// What that share is known to lie between.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub share_failing_interval: Option<[f64; 2]>,
+    /// Number of draws, where it was drawn.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub draws: Option<u64>,
+    /// Capability index to the nearer limit.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub cpk: Option<f64>,
     /// `holds`, `fails`, `undecided` or `conceded`.
     pub verdict: &'static str,
     /// The reason given.
@@ -121,6 +158,7 @@ pub struct RequirementEntry {
 
 /// The temperatures at which a requirement would hold.
 #[derive(Debug, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
 pub struct WindowEntry {
     /// The file's temperature unit, or empty where the ends are multiples of the condition's
     /// distance from reference.
@@ -131,6 +169,7 @@ pub struct WindowEntry {
 
 /// What one unknown does to a quantity.
 #[derive(Debug, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
 pub struct ContributorEntry {
     /// What it is.
     pub name: String,
@@ -153,6 +192,7 @@ pub struct ContributorEntry {
 
 /// One thing said about a spec.
 #[derive(Debug, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
 pub struct FindingEntry {
     /// Names the problem, for good.
     pub code: &'static str,
@@ -174,6 +214,7 @@ pub struct FindingEntry {
 
 /// A place and what is said there.
 #[derive(Debug, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
 pub struct LabelEntry {
     /// Its file.
     pub file: String,
@@ -191,6 +232,7 @@ pub struct LabelEntry {
 
 /// How many requirements at conditions stand how.
 #[derive(Debug, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
 pub struct SummaryEntry {
     /// All of them.
     pub requirements: usize,
@@ -209,12 +251,6 @@ pub struct SummaryEntry {
 /// Names and numbers in an order of their own, written as an object.
 #[derive(Debug, Default)]
 pub struct Map(pub Vec<(String, Option<f64>)>);
-
-impl Map {
-    fn is_empty(&self) -> bool {
-        self.0.is_empty()
-    }
-}
 
 impl Serialize for Map {
     fn serialize<S: Serializer>(&self, serializer: S) -> Result<S::Ok, S::Error> {

@@ -52,6 +52,8 @@ pub(crate) fn visible(text: &str) -> String {
     for c in text.chars() {
         match c {
             '\t' => shown.push_str("    "),
+            // A byte-order mark has no width and says nothing to a reader.
+            '\u{feff}' => {}
             c if c.is_control() || is_directional(c) => shown.push('\u{fffd}'),
             c => shown.push(c),
         }
@@ -61,7 +63,7 @@ pub(crate) fn visible(text: &str) -> String {
 
 /// Marks that reorder text, which would let a line read otherwise than it is.
 fn is_directional(c: char) -> bool {
-    matches!(c, '\u{200e}' | '\u{200f}' | '\u{202a}'..='\u{202e}' | '\u{2066}'..='\u{2069}' | '\u{feff}')
+    matches!(c, '\u{200e}' | '\u{200f}' | '\u{202a}'..='\u{202e}' | '\u{2066}'..='\u{2069}')
 }
 
 /// The part of a text from column `from`, at most `columns` wide.

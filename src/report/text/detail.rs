@@ -7,12 +7,13 @@ use crate::findings::number::{
 };
 use crate::report::look::{Look, Role};
 use crate::report::wrap::{blanks, left, right, visible, width};
-use crate::report::{Account, Case, Cause, Contribution, Coordinate};
+use crate::report::{Account, Case, Cause, Contribution, Coordinate, FailingShare, Statistics};
 
 /// Columns of the bar that draws a share.
 const BAR_COLUMNS: usize = 20;
-/// Names and tolerances longer than this stand on a line of their own.
-const MOST_NAME_COLUMNS: usize = 26;
+/// Names have at least this room; longer ones than there is room for stand on a line of their own.
+const LEAST_NAME_COLUMNS: usize = 16;
+/// Tolerances longer than this stand on a line of their own.
 const MOST_WRITTEN_COLUMNS: usize = 18;
 
 /// Writes each requirement of a spec that has contributors, once.
@@ -69,11 +70,66 @@ fn one(out: &mut String, account: &Account, case: &Case, conditions: usize, look
             paragraph(out, 2, &format!("{character} there"), Role::Plain, look);
         }
     }
+    if let Some(statistics) = &case.statistics {
+        statistics_of(out, case, statistics, look);
+    }
     if let Some(window) = &case.window {
         paragraph(out, 2, &window_words(account, case, window), Role::Plain, look);
     }
     if let Some(concession) = &case.concession {
         paragraph(out, 2, &format!("concession {concession}"), Role::Warn, look);
+    }
+}
+
+fn statistics_of(out: &mut String, case: &Case, s: &Statistics, look: Look) {
+    let mean = with_unit(s.mean, case.unit, Round::Nearest);
+    let sigma = difference_with_unit(s.sigma, case.unit, Round::Up);
+    let cpk = s.cpk.map_or_else(String::new, |c| format!(", Cpk {}", digits(c, 2, Round::Down)));
+    let failing = failing(&s.failing);
+    let text = format!("in statistics mean {mean}, sigma {sigma}{cpk}; {failing} fail");
+    paragraph(out, 2, &text, Role::Plain, look);
+    let (mean2, sigma2) = s.second_order;
+    // To second order is worth a line where it tells something else.
+    if mean2.is_finite()
+        && ((sigma2 - s.sigma).abs() > 0.01 * s.sigma || (mean2 - s.mean).abs() > 0.01 * s.sigma)
+    {
+        let mean = with_unit(mean2, case.unit, Round::Nearest);
+        let sigma = difference_with_unit(sigma2, case.unit, Round::Up);
+        paragraph(
+            out,
+            2,
+            &format!("to second order mean {mean}, sigma {sigma}"),
+            Role::Plain,
+            look,
+        );
+    }
+    if let Some(interaction) = s.interaction {
+        let text = format!("interaction makes {} of the variance", share(interaction));
+        paragraph(out, 2, &text, Role::Plain, look);
+    }
+    if s.assumed {
+        let text = "ASSUMED: sizes without a stated spread are normal, centred, limits at 3 sigma";
+        paragraph(out, 2, text, Role::Warn, look);
+    }
+}
+
+/// A share of assemblies with what it is known to lie between.
+pub(super) fn failing(f: &FailingShare) -> String {
+    let of = |x: f64| {
+        if x == 0.0 { "0".to_string() } else { format!("{x:.3e}") }
+    };
+    match f.draws {
+        Some(draws) => format!(
+            "{} of assemblies ({} .. {} at 99 % confidence, {draws} draws)",
+            of(f.share),
+            of(f.interval.0),
+            of(f.interval.1)
+        ),
+        None if f.share > 0.0 && f.share < 1e-18 => "< 1e-18 of assemblies".to_string(),
+        None if f.interval.0 < f.share || f.share < f.interval.1 => {
+            format!("{} .. {} of assemblies", of(f.interval.0), of(f.interval.1))
+        }
+        None => format!("{} of assemblies", of(f.share)),
     }
 }
 
@@ -86,11 +142,15 @@ fn contributors(out: &mut String, case: &Case, head: &str, look: Look) {
     let most = |of: &dyn Fn(&Contribution) -> usize, most: usize| {
         list.iter().map(of).filter(|&n| n <= most).max().unwrap_or(0)
     };
-    let name = most(&|c| width(&visible(&c.name)), MOST_NAME_COLUMNS).max("contributor".len());
     let written =
         most(&|c| width(&visible(&c.written)), MOST_WRITTEN_COLUMNS).max("as written".len());
     let part = list.iter().map(|c| width(&part(case, c))).max().unwrap_or(0).max(width(head));
     let variance = list.iter().any(|c| c.share_of_variance.is_some());
+    let based = list.iter().any(|c| c.basis.is_some());
+    let optional = 9 * usize::from(variance) + 10 * usize::from(based);
+    let room = look.width.saturating_sub(2 + 2 + written + 13 + 2 + part + 10 + optional);
+    let name = most(&|c| width(&visible(&c.name)), room.max(LEAST_NAME_COLUMNS));
+    let name = name.max("contributor".len());
     let of = if variance { "of range  of var." } else { "of range" };
     let heads = format!(
         "  {}  {}  {:>11}  {}  {of}",

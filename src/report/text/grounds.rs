@@ -47,9 +47,9 @@ fn conditions(out: &mut String, account: &Account, look: Look) {
         }
         let line = format!("{}  {written}", left(&visible(name), column));
         paragraph_kept(out, 2, &line, look);
-        // What all parts share is what was written, unless a history or a rule says more.
+        // One temperature that all parts share is what was written.
         let one = alike.len() == 1;
-        for (range, owners) in alike {
+        for (range, owners) in alike.into_iter().filter(|(range, _)| !one || range.contains("..")) {
             let who = if one { "all parts".to_string() } else { owners.join(", ") };
             paragraph(out, column + 4, &format!("{who} {range}"), Role::Quiet, look);
         }

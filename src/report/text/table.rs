@@ -7,7 +7,7 @@ use crate::findings::Standing;
 use crate::findings::number::{Round, decimals, difference, difference_with_unit, digits, shown};
 use crate::report::look::{Look, Role};
 use crate::report::wrap::{blanks, left, right, visible, width};
-use crate::report::{Account, Case, Figure};
+use crate::report::{Account, Case, Figure, Measure};
 use crate::units::Unit;
 
 /// Condition names longer than this stand on a line of their own.
@@ -94,7 +94,7 @@ fn blocks(account: &Account, extent: Extent) -> Vec<Block<'_>> {
     }
     for case in &account.cases {
         if !subjects.iter().any(|(name, _)| *name == case.subject) {
-            subjects.push((&case.subject, ""));
+            subjects.push((&case.subject, case.kind));
         }
     }
     let mut blocks = Vec::new();
@@ -158,9 +158,11 @@ fn required<'a>(account: &Account, kind: &'static str, cases: &[&'a Case]) -> Bl
     let id = case.id.as_ref().map_or_else(String::new, |id| format!("{id}  "));
     let worst_case = case.method == "worst case";
     let method = if worst_case { String::new() } else { format!(", {}", case.method) };
-    let what = what(case.measure.map(|m| m.word()), &case.quantity);
+    let what = what(case.measure, &case.quantity);
     let unit = case.unit.symbol;
-    let limits = if unit.is_empty() || case.limits.contains(unit) {
+    // A limit that was written with a unit of its own keeps it.
+    let has_unit = case.limits.contains(|c: char| c.is_alphabetic() || c == '%' || c == '°');
+    let limits = if unit.is_empty() || has_unit {
         case.limits.clone()
     } else {
         format!("{} {unit}", case.limits)
@@ -175,7 +177,7 @@ fn required<'a>(account: &Account, kind: &'static str, cases: &[&'a Case]) -> Bl
     Block {
         subject: &case.subject,
         kind,
-        heading: format!("{id}{what} {limits}{method}"),
+        heading: format!("{id}{what} {limits}{method}").trim_start().to_string(),
         because: case.because.as_deref(),
         shows: Some((&case.quantity, case.unit)),
         rows,
@@ -185,12 +187,12 @@ fn required<'a>(account: &Account, kind: &'static str, cases: &[&'a Case]) -> Bl
 
 fn free<'a>(kind: &'static str, figure: &'a Figure) -> Block<'a> {
     let unit = figure.unit.symbol;
-    let what = what(figure.measure.map(|m| m.word()), &figure.quantity);
-    let unit = if unit.is_empty() { String::new() } else { format!(", {unit}") };
+    let what = what(figure.measure, &figure.quantity);
+    let heading: Vec<&str> = [what.as_str(), unit].into_iter().filter(|w| !w.is_empty()).collect();
     Block {
         subject: &figure.subject,
         kind,
-        heading: format!("{what}{unit}"),
+        heading: heading.join(", "),
         because: None,
         shows: None,
         rows: vec![row(figure, None)],
@@ -198,11 +200,11 @@ fn free<'a>(kind: &'static str, figure: &'a Figure) -> Block<'a> {
     }
 }
 
-fn what(measure: Option<&str>, quantity: &str) -> String {
-    match measure {
-        Some(measure) => format!("{measure} {quantity}"),
-        None => quantity.to_string(),
-    }
+/// Across what, and which quantity; a gap and a result are their own quantity.
+fn what(measure: Option<Measure>, quantity: &str) -> String {
+    let quantity = if matches!(quantity, "gap" | "value") { "" } else { quantity };
+    let words = [measure.map_or("", Measure::word), quantity];
+    words.into_iter().filter(|word| !word.is_empty()).collect::<Vec<_>>().join(" ")
 }
 
 fn row(figure: &Figure, case: Option<&Case>) -> Row {

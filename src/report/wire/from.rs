@@ -3,7 +3,7 @@
 
 use super::{
     ContributorEntry, Document, FindingEntry, LabelEntry, Map, RequirementEntry, ResultEntry,
-    SCHEMA, SpecEntry, SummaryEntry, WindowEntry,
+    SCHEMA, SpecEntry, SummaryEntry, WindowEntry, YieldEntry,
 };
 use crate::diagnostic::{Diagnostic, Label};
 use crate::report::summary::summary;
@@ -39,6 +39,11 @@ fn spec(spec: &Spec) -> SpecEntry {
         results: account.map_or_else(Vec::new, |a| a.figures.iter().map(result).collect()),
         requirements: account
             .map_or_else(Vec::new, |a| a.cases.iter().map(|c| requirement(a, c)).collect()),
+        assembly_yield: account.and_then(|a| a.failing).map(|f| YieldEntry {
+            share: number(1.0 - f.share),
+            interval: [number(1.0 - f.interval.1), number(1.0 - f.interval.0)],
+            draws: f.draws,
+        }),
         findings: spec.findings.iter().map(|d| finding(d, &spec.sources)).collect(),
     }
 }
@@ -61,7 +66,9 @@ fn result(figure: &Figure) -> ResultEntry {
         quantity: figure.quantity.clone(),
         measure: figure.measure.map(|m| m.word()),
         condition: figure.condition.clone(),
-        members: Map(figure.members.iter().map(|(name, si)| (name.clone(), size(*si))).collect()),
+        members: (!figure.members.is_empty()).then(|| {
+            Map(figure.members.iter().map(|(name, si)| (name.clone(), size(*si))).collect())
+        }),
         unit: figure.unit.symbol,
         least: value(figure.least, figure.unit),
         mean: value(figure.mean, figure.unit),
@@ -90,6 +97,7 @@ fn corner(at: &[Coordinate]) -> Map {
 fn requirement(account: &Account, case: &Case) -> RequirementEntry {
     let figure = case.figure.map(|f| &account.figures[f]);
     let of = |si: Option<f64>| si.and_then(|si| value(si, case.unit));
+    let statistics = case.statistics.as_ref();
     let window = case.window.as_ref().map(|intervals| {
         let end = |t: f64| {
             if case.window_scaled { number(t) } else { value(t, account.temperature) }
@@ -109,9 +117,14 @@ fn requirement(account: &Account, case: &Case) -> RequirementEntry {
         lower: of(case.lower),
         upper: of(case.upper),
         least: of(figure.map(|f| f.least)),
-        mean: of(figure.map(|f| f.mean)),
+        mean: of(statistics.map(|s| s.mean).or(figure.map(|f| f.mean))),
         greatest: of(figure.map(|f| f.greatest)),
         margin: number(case.unit.difference_from_si(case.margin)),
+        sigma: statistics.and_then(|s| number(case.unit.difference_from_si(s.sigma))),
+        share_failing: statistics.and_then(|s| number(s.failing.share)),
+        share_failing_interval: statistics.map(|s| [s.failing.interval.0, s.failing.interval.1]),
+        draws: statistics.and_then(|s| s.failing.draws),
+        cpk: statistics.and_then(|s| s.cpk).and_then(number),
         verdict: case.standing.word(),
         because: case.because.clone(),
         concession: case.concession.clone(),
