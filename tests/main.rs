@@ -12,5 +12,6 @@ mod materials;
 mod mechanics;
 mod published;
 mod standards_laws;
+mod statistics_laws;
 mod support;
 mod syntax;

@@ -12,8 +12,8 @@ const NEGLIGIBLE: f64 = 1e-18;
 /// Evaluations of a factor up to which the inversion is taken without looking at the nested rule.
 const CHEAP: f64 = 2e5;
 
-/// Evaluations past which neither way is gone: seconds of work for one share.
-const TOO_DEAR: f64 = 5e8;
+/// Evaluations past which neither way is gone: a second of work for one share.
+const TOO_DEAR: f64 = 5e7;
 
 /// How a tail was computed.
 #[derive(Debug, Clone, Copy, PartialEq, Eq)]
