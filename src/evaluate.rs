@@ -10,6 +10,7 @@ mod depends;
 mod elastic;
 mod expression;
 mod figure;
+mod filling;
 mod joint;
 pub mod outcome;
 mod quantity;
@@ -65,6 +66,8 @@ pub fn evaluate(assembly: &Assembly, options: &Options) -> Evaluation {
     for subject in assembly.subject_ids() {
         run.subject(subject);
     }
+    run.evaluation.shop_cards =
+        assembly.subject_ids().filter_map(|s| joint::joining::shop_card(assembly, s)).collect();
     for index in 0..assembly.requirements.len() {
         run.requirement(index);
     }
@@ -128,7 +131,7 @@ impl Run<'_> {
                 Some(joint) => joint::quantities(joint),
             },
             SubjectKind::Restraint(r) => restraint::quantities(r),
-            SubjectKind::Fill(_) => vec![Quantity::Ullage],
+            SubjectKind::Fill(f) => filling::quantities(f),
         }
     }
 

@@ -185,6 +185,17 @@ impl Assembly {
         &self.subjects[id.index()]
     }
 
+    /// What a part or a charge is made of.
+    pub fn material_of(&self, owner: Owner) -> Option<&Arc<Material>> {
+        match owner {
+            Owner::Part(part) => Some(&self.part(part).material),
+            Owner::Fill(fill) => match &self.subject(fill).kind {
+                SubjectKind::Fill(fill) => Some(&fill.material),
+                _ => None,
+            },
+        }
+    }
+
     /// The fit of that index, if the subject is one.
     pub fn fit(&self, id: SubjectId) -> Option<&Fit> {
         match &self.subject(id).kind {

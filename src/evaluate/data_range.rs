@@ -44,13 +44,12 @@ fn hull(assembly: &Assembly, at: At, owner: Owner) -> Interval {
 pub(crate) fn beyond(assembly: &Assembly, temperatures: &[PartTemperature]) -> Vec<BeyondData> {
     let mut list = Vec::new();
     for t in temperatures {
-        let Owner::Part(part) = t.owner else { continue };
-        let material = &assembly.part(part).material;
+        let Some(material) = assembly.material_of(t.owner) else { continue };
         let valid = material.valid();
         let (from, to) = (valid.lo(), valid.hi());
         if t.least < from - SLACK || t.greatest > to + SLACK {
             list.push(BeyondData {
-                part,
+                owner: t.owner,
                 condition: t.condition,
                 temperature: (t.least, t.greatest),
                 valid: (from, to),

@@ -1,8 +1,8 @@
 //! Figures: the proven range of each quantity at each condition.
 
 use super::outcome::{BeyondData, Chosen, End, Figure, Range};
-use super::quantity;
 use super::scene::{At, Response, Scene, Unable};
+use super::{joint, quantity};
 use crate::model::{Assembly, ConditionId, Quantity, SubjectId, SubjectKind};
 use crate::numeric::extremes::{Extreme, extremes};
 use crate::numeric::tolerance::EXTREME_GAP;
@@ -36,11 +36,31 @@ pub(crate) fn compute(
     beyond: &[BeyondData],
     asked: Asked,
 ) -> Result<(Figure, Response), Unable> {
+    if asked.quantity.is_unconditional() {
+        return Ok(joining(assembly, asked));
+    }
     let response = response(assembly, beyond, &asked)?;
     let gap = EXTREME_GAP * shown_unit(assembly, asked.subject, asked.quantity, asked.of_yield);
     let range = range(&response, gap);
     let Asked { subject, quantity, condition, of_yield, members } = asked;
     Ok((Figure { subject, quantity, condition, members, of_yield, range }, response))
+}
+
+/// Joining and loosening temperatures, which are roots and not recorded; their response is empty.
+fn joining(assembly: &Assembly, asked: Asked) -> (Figure, Response) {
+    let found = match asked.quantity {
+        Quantity::JoiningTemperature => joint::joining::joining_range(assembly, asked.subject),
+        _ => joint::joining::loosening_range(assembly, asked.subject),
+    };
+    let unknown = End { bound: f64::NAN, reached: f64::NAN, met: false, corner: Vec::new() };
+    let range = found.unwrap_or_else(|| Range {
+        least: unknown.clone(),
+        mean: f64::NAN,
+        greatest: unknown,
+    });
+    let Asked { subject, quantity, condition, of_yield, members } = asked;
+    let response = Response::constant(range.mean);
+    (Figure { subject, quantity, condition, members, of_yield, range }, response)
 }
 
 /// The range of a recorded quantity.

@@ -4,6 +4,7 @@
 //! together. Stiffness is taken on nominal sizes at the reference temperature, interference on free
 //! sizes at the parts' own temperatures.
 
+pub(crate) mod joining;
 mod stack;
 
 use super::elastic;
@@ -15,6 +16,7 @@ use crate::mechanics::{contact, joint as formulas};
 use crate::model::{DimensionId, Fit, Form, Joint, Owner, PartId, Quantity, SubjectId, Unknown};
 use crate::numeric::{Number, Recorded};
 use stack::Stack;
+pub(crate) use stack::nominal;
 
 /// What a report shows of a joint.
 pub(crate) fn quantities(joint: &Joint) -> Vec<Quantity> {
@@ -24,6 +26,8 @@ pub(crate) fn quantities(joint: &Joint) -> Vec<Quantity> {
         Quantity::Stress(joint.outer.part),
         Quantity::Stress(joint.inner.part),
     ];
+    list.push(Quantity::JoiningTemperature);
+    list.push(Quantity::LooseningTemperature);
     if joint.friction.is_some() {
         list.push(Quantity::Torque);
         list.push(Quantity::AxialForce);
@@ -47,7 +51,7 @@ pub(crate) fn quantity(
     let pressure = pressures[place].clone();
     Ok(match quantity {
         Quantity::Stress(part) => {
-            let stress = stress(scene, at, &stack, &pressures, subject, part)?;
+            let stress = stress(scene, at, &stack, &pressures, part)?;
             if of_yield { stress / yield_strength(scene, at, part)? } else { stress }
         }
         Quantity::Torque | Quantity::AxialForce => {
@@ -76,22 +80,16 @@ fn stress(
     at: At,
     stack: &Stack,
     pressures: &[Recorded],
-    subject: SubjectId,
     part: PartId,
 ) -> Result<Recorded, Unable> {
     let place = stack.ring_of(part);
     let ring = stack.ring(scene, at, place)?;
     let (inside, outside) = contact::faces(pressures, place);
+    // The general form is the same at rest, but its enclosure is wider there.
     if !stack.turns(scene, at, place) {
-        return Ok(ring.greatest_von_mises(inside, outside));
+        return Ok(ring.greatest_von_mises_at_rest(inside, outside));
     }
-    // A turning ring may be stressed most anywhere: the depth is one more unknown, and what the bore
-    // has is reached at every depth.
-    let depth = scene.unknown(Unknown::Depth(subject));
-    let bore = ring.bore.clone().unwrap_or_else(|| Recorded::exact(0.0));
-    let radius = bore.clone() + depth * (ring.outside.clone() - bore);
-    let there = ring.stress_at(inside.clone(), outside.clone(), radius).von_mises();
-    Ok(ring.stress_inside(inside, outside).von_mises().max(there))
+    Ok(ring.greatest_von_mises(inside, outside))
 }
 
 /// A bore or outside once the joint is made, m: the free size where it is loose.

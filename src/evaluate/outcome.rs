@@ -18,6 +18,8 @@ pub struct Evaluation {
     pub missing: Vec<Missing>,
     /// Each `one of` set that some requirement depends on.
     pub selections: Vec<Selection>,
+    /// What a shop needs to make each joint.
+    pub shop_cards: Vec<ShopCard>,
     /// The share of assemblies that break some requirement somewhere, where the spec asks for
     /// statistics.
     pub assembly_yield: Option<AssemblyYield>,
@@ -154,11 +156,11 @@ pub struct PartTemperature {
     pub greatest: f64,
 }
 
-/// A part that gets colder or hotter than its material's data go.
+/// A part or charge that gets colder or hotter than its material's data go.
 #[derive(Debug, Clone, PartialEq)]
 pub struct BeyondData {
-    /// Which part.
-    pub part: PartId,
+    /// Whose temperature.
+    pub owner: Owner,
     /// Where.
     pub condition: ConditionId,
     /// Its temperatures there, K.
@@ -282,4 +284,28 @@ pub struct AssemblyYield {
     pub share_interval: (f64, f64),
     /// Number of draws, where it was drawn.
     pub draws: Option<u64>,
+}
+
+/// What a shop needs to join an outer part and an inner one without force. Temperatures in K; they
+/// hold for every pair within the tolerances.
+#[derive(Debug, Clone, Copy, PartialEq)]
+pub struct ShopCard {
+    /// Which joint.
+    pub subject: SubjectId,
+    /// Temperature of the day of assembly.
+    pub ambient: f64,
+    /// The condition it was taken from; the reference temperature if none.
+    pub day: Option<ConditionId>,
+    /// Clearance while joining, m.
+    pub insertion_clearance: f64,
+    /// Heat the outer part to this, the inner one at ambient; `None` where its data end first.
+    pub heat_outer: Option<f64>,
+    /// The highest temperature that the outer part's material allows.
+    pub outer_limit: Option<f64>,
+    /// Where the outer part's data end.
+    pub outer_data: f64,
+    /// Or chill the inner part to this, the outer one at ambient; `None` where its data end first.
+    pub chill_inner: Option<f64>,
+    /// Where the inner part's data end.
+    pub inner_data: f64,
 }

@@ -2,7 +2,7 @@
 
 use super::expression::{clearance, value};
 use super::scene::{At, Scene, Unable};
-use super::{joint, restraint};
+use super::{filling, joint, restraint};
 use crate::model::{Quantity, SubjectId, SubjectKind};
 use crate::numeric::Recorded;
 
@@ -23,6 +23,6 @@ pub(crate) fn record(
         (SubjectKind::Restraint(r), _) => {
             restraint::quantity(scene, at, subject, r, quantity, of_yield)
         }
-        (SubjectKind::Fill(f), _) => restraint::ullage(scene, at, subject, f),
+        (SubjectKind::Fill(f), _) => filling::quantity(scene, at, subject, f, quantity),
     }
 }

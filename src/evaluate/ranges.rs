@@ -34,6 +34,7 @@ pub(crate) fn read(assembly: &Assembly, unknown: Unknown) -> Scenario {
         Unknown::ExpansionScatter(_)
         | Unknown::ModulusScatter(_)
         | Unknown::SwellScatter(_)
+        | Unknown::FillScatter(_)
         | Unknown::Seat { .. } => scatter(),
         Unknown::Temperature(condition) => match &assembly.condition(condition).thermal {
             Thermal::Uniform(t) => t.clone(),
@@ -63,7 +64,6 @@ pub(crate) fn read(assembly: &Assembly, unknown: Unknown) -> Scenario {
             Some(rotation) => rotation.speed.clone(),
             None => Scenario::exact(0.0),
         },
-        Unknown::Depth(_) => Scenario::between(0.0, 1.0),
         Unknown::Friction(subject)
         | Unknown::Preload(subject)
         | Unknown::Stiffness { restraint: subject, .. }

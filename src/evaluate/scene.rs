@@ -5,7 +5,7 @@
 
 use super::outcome::{BeyondData, Chosen, Property};
 use super::ranges;
-use crate::model::{Assembly, ConditionId, DimensionId, PartId, Unknown};
+use crate::model::{Assembly, ConditionId, DimensionId, Owner, PartId, SubjectId, Unknown};
 use crate::numeric::tape::Recorder;
 use crate::numeric::{Interval, Number, Recorded, Tape};
 use std::cell::RefCell;
@@ -30,6 +30,14 @@ pub struct Response {
     pub ranges: Vec<Interval>,
     /// The middle of each.
     pub middle: Vec<f64>,
+}
+
+impl Response {
+    /// A quantity without unknowns.
+    pub(crate) fn constant(value: f64) -> Self {
+        let tape = Recorder::new().finish(&[Recorded::exact(value)]);
+        Response { tape, unknowns: Vec::new(), ranges: Vec::new(), middle: Vec::new() }
+    }
 }
 
 /// Why a quantity cannot be computed.
@@ -135,9 +143,18 @@ impl<'a> Scene<'a> {
 
     /// Fails where a part's temperature lies beyond data that may not be extrapolated.
     pub(crate) fn within_data(&self, at: At, part: PartId) -> Result<(), Unable> {
+        self.owner_within_data(at, Owner::Part(part))
+    }
+
+    /// The same for the charge of a fill.
+    pub(crate) fn fill_within_data(&self, at: At, fill: SubjectId) -> Result<(), Unable> {
+        self.owner_within_data(at, Owner::Fill(fill))
+    }
+
+    fn owner_within_data(&self, at: At, owner: Owner) -> Result<(), Unable> {
         let At::Condition(condition) = at else { return Ok(()) };
         let stopped =
-            |b: &BeyondData| b.part == part && b.condition == condition && !b.extrapolated;
+            |b: &BeyondData| b.owner == owner && b.condition == condition && !b.extrapolated;
         if self.beyond.iter().any(stopped) { Err(Unable::BeyondData) } else { Ok(()) }
     }
 }

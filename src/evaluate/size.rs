@@ -5,7 +5,7 @@ use super::{elastic, temperature};
 use crate::materials::{Expansion, Expansions, Material};
 use crate::mechanics::expansion;
 use crate::model::{
-    ConditionId, Dimension, DimensionId, Direction, Feature, Form, LotId, Owner, PartId, Unknown,
+    ConditionId, Dimension, DimensionId, Direction, Feature, Form, Owner, PartId, Unknown,
 };
 use crate::numeric::{Number, Recorded};
 
@@ -109,13 +109,14 @@ pub(crate) fn thermal_strain(
     temperature: Recorded,
 ) -> Recorded {
     let part = scene.assembly.part(dimension.part);
-    strain_of(scene, part.lot, &part.material, dimension.direction, temperature)
+    let scatter = Unknown::ExpansionScatter(part.lot);
+    strain_of_lot(scene, scatter, &part.material, dimension.direction, temperature)
 }
 
 /// Thermal strain of a lot of material in a direction, from the file's reference temperature.
-pub(crate) fn strain_of(
+pub(crate) fn strain_of_lot(
     scene: &Scene<'_>,
-    lot: LotId,
+    scatter: Unknown,
     material: &Material,
     direction: Direction,
     temperature: Recorded,
@@ -126,12 +127,12 @@ pub(crate) fn strain_of(
     if data.scatter.is_none() {
         return strain;
     }
-    let w = scene.unknown(Unknown::ExpansionScatter(lot));
+    let w = scene.unknown(scatter);
     expansion::scattered_strain(strain, temperature - reference, data.scatter, w)
 }
 
 /// The expansion data of a material in a direction; a fluid's are those of its volume.
-fn expansion_in(material: &Material, direction: Direction) -> &Expansion {
+pub(crate) fn expansion_in(material: &Material, direction: Direction) -> &Expansion {
     match (&material.expansion, direction) {
         (Expansions::Isotropic(one) | Expansions::Volume(one), _) => one,
         (Expansions::Directional { across, .. }, Direction::Across) => across,

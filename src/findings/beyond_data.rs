@@ -5,7 +5,7 @@ use super::number::{Round, with_unit};
 use super::words;
 use crate::diagnostic::{Code, Diagnostic};
 use crate::evaluate::Evaluation;
-use crate::model::Assembly;
+use crate::model::{Assembly, Owner};
 
 pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec<Diagnostic>) {
     let unit = assembly.defaults.temperature;
@@ -13,7 +13,11 @@ pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec
         format!("{} .. {}", with_unit(from, unit, Round::Down), with_unit(to, unit, Round::Up))
     };
     for beyond in &evaluation.beyond_data {
-        let part = assembly.part(beyond.part);
+        let Some(material) = assembly.material_of(beyond.owner) else { continue };
+        let material_span = match beyond.owner {
+            Owner::Part(part) => assembly.part(part).material_span,
+            Owner::Fill(fill) => assembly.subject(fill).span,
+        };
         let condition = assembly.condition(beyond.condition);
         let reached = if beyond.temperature.0 == beyond.temperature.1 {
             with_unit(beyond.temperature.0, unit, Round::Nearest)
@@ -25,15 +29,15 @@ pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec
             with_unit(beyond.valid.0, unit, Round::Nearest),
             with_unit(beyond.valid.1, unit, Round::Nearest)
         );
-        let source = match part.material.sources().first() {
+        let source = match material.sources().first() {
             Some(source) => format!(", {source}"),
             None => String::new(),
         };
         let message = format!(
             "{} reaches {reached} at {}, outside the data of {}",
-            words::name(&part.name),
+            words::name(&words::owner(assembly, beyond.owner)),
             words::name(&condition.name),
-            words::name(&part.material.name)
+            words::name(&material.name)
         );
         let (code, help) = if beyond.extrapolated {
             (Code::DataExtrapolated, "figures beyond the data are an extrapolation".to_string())
@@ -48,7 +52,7 @@ pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec
         found.push(
             Diagnostic::new(code, condition.span, message)
                 .here(reached)
-                .label(part.material_span, format!("known over {valid}{source}"))
+                .label(material_span, format!("known over {valid}{source}"))
                 .help(help),
         );
     }

@@ -99,7 +99,7 @@ pub fn unknown(assembly: &Assembly, unknown: Unknown) -> String {
         }
         Unknown::Cavity(s) => format!("cavity of {}", subject(s)),
         Unknown::Charge(s) => format!("charge of {}", subject(s)),
-        Unknown::Depth(s) => format!("depth in {}", subject(s)),
+        Unknown::FillScatter(s) => format!("expansion scatter of the charge of {}", subject(s)),
     }
 }
 
@@ -155,7 +155,7 @@ pub fn place(assembly: &Assembly, unknown: Unknown) -> Span {
         | Unknown::Preload(s)
         | Unknown::Cavity(s)
         | Unknown::Charge(s)
-        | Unknown::Depth(s)
+        | Unknown::FillScatter(s)
         | Unknown::Stiffness { restraint: s, .. }
         | Unknown::Area { restraint: s, .. } => assembly.subject(s).span,
     }

@@ -132,6 +132,6 @@ pub enum Unknown {
     Cavity(SubjectId),
     /// Volume of a charge, m³.
     Charge(SubjectId),
-    /// Radius inside a ring at which a stress is looked for, 0 at the bore, 1 at the outside.
-    Depth(SubjectId),
+    /// Scatter of the expansion of a charge.
+    FillScatter(SubjectId),
 }

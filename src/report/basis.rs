@@ -180,7 +180,7 @@ fn cautions(assembly: &Assembly, evaluation: &Evaluation) -> Vec<String> {
     for beyond in evaluation.beyond_data.iter().filter(|b| b.extrapolated) {
         cautions.push(format!(
             "{} at {} lies outside its material's data, which are continued at the spec's wish",
-            words::name(&assembly.part(beyond.part).name),
+            words::name(&words::owner(assembly, beyond.owner)),
             words::name(&assembly.condition(beyond.condition).name),
         ));
     }

@@ -68,7 +68,7 @@ impl Cause {
             }
             Unknown::Size { .. } => Cause::Size,
             Unknown::Coating { .. } => Cause::Coating,
-            Unknown::ExpansionScatter(_) => Cause::Expansion,
+            Unknown::ExpansionScatter(_) | Unknown::FillScatter(_) => Cause::Expansion,
             Unknown::SwellScatter(_) => Cause::Moisture,
             Unknown::Temperature(_) | Unknown::OwnTemperature { .. } | Unknown::Time(_) => {
                 Cause::Temperature
@@ -83,8 +83,7 @@ impl Cause {
             | Unknown::Speed(_)
             | Unknown::Preload(_)
             | Unknown::Stiffness { .. }
-            | Unknown::Area { .. }
-            | Unknown::Depth(_) => Cause::Load,
+            | Unknown::Area { .. } => Cause::Load,
         }
     }
 }

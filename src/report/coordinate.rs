@@ -94,6 +94,6 @@ pub(super) fn scale(assembly: &Assembly, unknown: Unknown) -> Scale {
         | Unknown::SwellScatter(_)
         | Unknown::Seat { .. }
         | Unknown::Friction(_)
-        | Unknown::Depth(_) => Scale { unit: None, difference: false },
+        | Unknown::FillScatter(_) => Scale { unit: None, difference: false },
     }
 }

@@ -143,7 +143,7 @@ pub(super) fn smoothing(fit: &Fit) -> f64 {
 }
 
 /// The value of an expression with every size at its nominal, as drawn.
-pub(super) fn nominal(assembly: &Assembly, expr: &Expr) -> f64 {
+pub(crate) fn nominal(assembly: &Assembly, expr: &Expr) -> f64 {
     let recorded =
         Scene::record(assembly, &[], &[], |scene| expression::value(scene, At::Reference, expr));
     let Ok(Response { tape, unknowns, middle, .. }) = recorded else { return 0.0 };

@@ -1,0 +1,184 @@
+//! Joints, restraints and fills from text to figures, with values worked out independently in double
+//! precision with numpy from the formulas of `docs/method-joints.md` (relative 1e-8 unless stated).
+
+use crate::support::{Run, assert_range, run};
+use gapkeep::model::{PartId, Quantity};
+
+const HEAD: &str = r#"
+assembly "acceptance"
+lengths in mm
+temperatures in degC
+material light { cte 23.4 ppm/K; modulus 70 GPa; poisson 0.33; density 2700 kg/m3; source "test" }
+material steel { cte 11.7 ppm/K; modulus 207 GPa; poisson 0.29; density 7850 kg/m3; source "test" }
+material bronze { cte 17.8 ppm/K; modulus 110 GPa; poisson 0.34; density 8800 kg/m3; source "test" }
+"#;
+
+fn spec(body: &str) -> Run {
+    run(&format!("{HEAD}{body}"))
+}
+
+fn hub_and_shaft(clearance: &str) -> Run {
+    spec(&format!(
+        r#"
+condition warm 60
+part hub of light {{
+  bore    = dia 40 +0.025/0
+  outside = dia 80 exact
+}}
+part shaft of steel {{
+  seat = dia 40 +0.076/+0.060
+  bore = dia 20 exact
+}}
+fit seat = shaft.seat in hub.bore {{
+  joint {{
+    length   30
+    hub      outside hub.outside
+    shaft    bore shaft.bore
+    friction 0.12
+    hub      Rz 4 um
+    shaft    Rz 6 um
+    insertion clearance {clearance}
+  }}
+}}
+"#
+    ))
+}
+
+#[test]
+fn a_steel_shaft_in_a_light_alloy_hub_when_warm() {
+    let run = hub_and_shaft("0.04");
+    let range = |quantity| run.range("seat", quantity, "warm");
+    assert_range(range(Quantity::Pressure), (5.888_292_571, 35.050_779_59), 1e-8);
+    let hub = range(Quantity::Stress(PartId(0))).1;
+    let shaft = range(Quantity::Stress(PartId(1))).1;
+    assert_range((hub, shaft), (81.785_152_39, 93.468_745_59), 1e-8);
+    let torque = range(Quantity::Torque).0;
+    assert_range((torque, torque), (53.276_016_05, 53.276_016_05), 1e-8);
+}
+
+#[test]
+fn the_hub_joins_at_a_temperature_that_every_pair_allows() {
+    let run = hub_and_shaft("0.04");
+    let figure = run.figure("seat", Quantity::JoiningTemperature, None);
+    let celsius = figure.range.greatest.bound - 273.15;
+    assert!((celsius - 143.931_624).abs() < 1e-5, "{celsius}");
+}
+
+fn three_rings(sleeve_bore: &str, case_bore: &str, condition: &str) -> Run {
+    spec(&format!(
+        r#"
+{condition}
+part core of steel {{
+  bore    = dia 20 exact
+  outside = dia 40 exact
+}}
+part sleeve of bronze {{
+  bore    = dia 40 {sleeve_bore}
+  outside = dia 50 exact
+}}
+part case of light {{
+  bore    = dia 50 {case_bore}
+  outside = dia 90 exact
+}}
+fit first = core.outside in sleeve.bore {{
+  joint {{ length 20; core bore core.bore; sleeve outside sleeve.outside }}
+}}
+fit second = sleeve.outside in case.bore {{
+  joint {{ length 20; sleeve bore sleeve.bore; case outside case.outside }}
+}}
+result closure = (core.bore after first) - core.bore
+"#
+    ))
+}
+
+#[test]
+fn three_rings_turning() {
+    let run = three_rings(
+        "-0.04/-0.0400000001",
+        "-0.05/-0.0500000001",
+        "condition run 70 { speed 9000 rpm of core, sleeve, case }",
+    );
+    let first = run.range("first", Quantity::Pressure, "run");
+    let second = run.range("second", Quantity::Pressure, "run");
+    // Stiffness is taken on the nominal radii, interference on free sizes at temperature.
+    assert_range((first.0, second.0), (41.473_217_10, 28.971_373_44), 2e-3);
+    let closure = run.range("closure", Quantity::Value, "run").0 * 1e3 / 2.0;
+    assert!((closure - 0.624_038_597_8).abs() < 0.05, "{closure}");
+}
+
+#[test]
+fn a_contact_that_opens_carries_nothing() {
+    let run = three_rings("-0.04/-0.0400000001", "-0.012/-0.0120000001", "condition hot 150");
+    let first = run.range("first", Quantity::Pressure, "hot");
+    let second = run.range("second", Quantity::Pressure, "hot");
+    assert_range(first, (4.046_476_689, 4.046_476_689), 5e-3);
+    assert_eq!(second, (0.0, 0.0));
+}
+
+#[test]
+fn preload_of_a_bolt_through_a_light_alloy_flange() {
+    let run = spec(
+        r#"
+condition assembly 20
+condition hot 150
+material bolt_steel like steel { modulus { 20 degC 207 GPa; 150 degC 198 GPa } }
+material flange_alloy like light { modulus { 20 degC 70 GPa; 150 degC 64 GPa } }
+part bolt of bolt_steel { grip = 100 exact }
+part flange of flange_alloy { thickness = 100 exact }
+restraint clamp {
+  squeezed  flange.thickness area 400 mm2
+  stretched bolt.grip area 84.3 mm2
+  preload 12 kN ±15 % at assembly
+}
+"#,
+    );
+    let force = run.range("clamp", Quantity::Force, "hot");
+    assert_range(force, (24_954.228_06, 28_337.695_96), 1e-8);
+}
+
+#[test]
+fn two_bars_that_close_a_gap() {
+    // Beer and Johnston, Mechanics of Materials, problem 2.57: P = 217.5 kN (217 465 N recomputed).
+    let run = spec(
+        r#"
+condition hot 116
+material bronze_257 { cte 21.6 ppm/K; modulus 105 GPa; source "test" }
+material light_257 { cte 23.2 ppm/K; modulus 73 GPa; source "test" }
+material rigid { cte 0 ppm/K; modulus 100000 GPa; source "test" }
+part left of bronze_257 { length = 350 exact }
+part right of light_257 { length = 450 exact }
+part walls of rigid { apart = 800.5 exact }
+gap opening = walls.apart - left.length - right.length
+restraint between {
+  squeezed left.length area 1500 mm2
+  squeezed right.length area 1800 mm2
+  start gap opening
+}
+"#,
+    );
+    let force = run.range("between", Quantity::Force, "hot");
+    assert_range(force, (217_465.0, 217_465.0), 1e-4);
+}
+
+#[test]
+fn a_reservoir_that_loses_its_free_volume_when_warm() {
+    // Volumetric expansion of the liquid against three times the linear one of the cavity.
+    let run = spec(
+        r#"
+condition cold 0
+condition hot 80
+part body of light { bore = dia 60 exact; stroke = 100 exact }
+fill tank {
+  cavity of body = pi / 4 * body.bore^2 * body.stroke
+  charge water 270 cm3
+}
+"#,
+    );
+    // Density of water at 20 and 80 °C: 998.207 and 971.790 kg/m³ (IAPWS-95 at 101.325 kPa).
+    let liquid = 270.0 * 998.207 / 971.790;
+    let grown = libm::pow(1.0 + 23.4e-6 * 60.0, 3.0);
+    let cavity = std::f64::consts::PI / 4.0 * 3600.0 * 100.0 / 1e3 * grown;
+    let expected = 1.0 - liquid / cavity;
+    let found = run.range("tank", Quantity::Ullage, "hot");
+    assert!((found.0 - expected).abs() < 2e-4, "{found:?} {expected}");
+}
