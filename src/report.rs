@@ -159,6 +159,8 @@ pub struct Case {
     pub condition: Option<String>,
     /// How it is shown to hold, in words.
     pub method: String,
+    /// True where statistics and not the bounds decide.
+    pub statistical: bool,
     /// The limits, as written.
     pub limits: String,
     /// Least allowed value.
@@ -204,6 +206,12 @@ pub struct Statistics {
     pub second_order: (f64, f64),
     /// The share of assemblies that break a limit.
     pub failing: FailingShare,
+    /// Mean and standard deviation where the scenarios make it least.
+    pub low: (f64, f64),
+    /// Mean and standard deviation where they make it greatest.
+    pub high: (f64, f64),
+    /// How many standard deviations to each side its row shows: what the method asks for, else 3.
+    pub shown_sigmas: f64,
     /// Capability index to the nearer limit.
     pub cpk: Option<f64>,
     /// True where some spread is the default and not stated.

@@ -182,6 +182,7 @@ fn case(assembly: &Assembly, evaluation: &Evaluation, verdict: &Verdict, today: 
         measure: measure(assembly, requirement.subject, requirement.quantity),
         condition: verdict.condition.map(|c| assembly.condition(c).name.clone()),
         method: method(requirement.method),
+        statistical: requirement.method != Method::WorstCase,
         limits: limits(requirement),
         lower,
         upper,
@@ -200,7 +201,7 @@ fn case(assembly: &Assembly, evaluation: &Evaluation, verdict: &Verdict, today: 
             .iter()
             .map(|c| contribution(assembly, requirement, verdict, c))
             .collect(),
-        statistics: verdict.statistics.as_ref().map(statistics),
+        statistics: verdict.statistics.as_ref().map(|s| statistics(s, requirement.method)),
         thermal_shift: thermal_shift(assembly, evaluation, verdict),
         window: verdict.window.as_ref().map(|w| w.intervals.clone()),
         window_scaled: verdict.window.as_ref().is_some_and(|w| w.scaled),
@@ -265,7 +266,7 @@ fn contribution(
     }
 }
 
-fn statistics(s: &outcome::Statistics) -> Statistics {
+fn statistics(s: &outcome::Statistics, method: Method) -> Statistics {
     Statistics {
         mean: s.mean,
         sigma: s.sigma,
@@ -274,6 +275,12 @@ fn statistics(s: &outcome::Statistics) -> Statistics {
             share: s.share_failing,
             interval: s.share_interval,
             draws: s.draws,
+        },
+        low: s.low,
+        high: s.high,
+        shown_sigmas: match method {
+            Method::Rss { sigmas } => sigmas,
+            Method::WorstCase | Method::Cpk(_) | Method::Share(_) => 3.0,
         },
         cpk: s.cpk,
         assumed: s.assumed,

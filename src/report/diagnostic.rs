@@ -198,9 +198,9 @@ impl Page {
         }
         self.row(out, "", &drawn);
         // Below the mark, further left where there is too little room from there on.
-        let room = (columns - start)
-            .max(LEAST_LABEL_COLUMNS.min(columns))
-            .max(width(&label).min(columns / 2));
+        let longest = label.split(' ').map(width).max().unwrap_or(0);
+        let least = longest.max(LEAST_LABEL_COLUMNS).max(width(&label).min(columns / 2));
+        let room = (columns - start).max(least.min(columns));
         let indent = columns - room;
         for text in wrap(&label, room) {
             self.row(

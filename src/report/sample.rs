@@ -59,6 +59,7 @@ fn case(figures: &[Figure], at: usize, requirement: usize, limits: &str) -> Case
         measure: figure.measure,
         condition: figure.condition.clone(),
         method: "worst case".into(),
+        statistical: false,
         limits: limits.into(),
         lower: Some(ends[0]),
         upper: Some(ends[1]),

@@ -105,7 +105,10 @@ fn whole(out: &mut String, spec: &Spec, account: &Account, extent: Extent, look:
     heading(out, spec, account, look);
     table::render(out, account, extent, look);
     if let Some(failing) = &account.failing {
-        let text = format!("{} break some requirement at some condition", detail::failing(failing));
+        let text = format!(
+            "{} break some requirement at some condition",
+            detail::statistics::failing(failing)
+        );
         out.push('\n');
         paragraph(out, 0, &text, Role::Plain, look);
     }
@@ -140,7 +143,8 @@ fn heading(out: &mut String, spec: &Spec, account: &Account, look: Look) {
 
 /// A heading of a section and the lines below it, each indented and wrapped.
 fn section(out: &mut String, title: &str, look: Look) {
-    out.push_str(&format!("\n{}\n", look.paint(Role::Title, title)));
+    out.push('\n');
+    paragraph(out, 0, title, Role::Title, look);
 }
 
 /// A paragraph, wrapped, first line and others indented alike.

@@ -114,8 +114,10 @@ fn material_note(out: &mut String, material: &MaterialNote, unit: &'static Unit,
 fn assumptions(out: &mut String, account: &Account, look: Look) {
     let grounds = &account.grounds;
     section(out, "where the sizes come from", look);
-    let drawn = count(grounds.from_drawings, "size", "sizes");
-    paragraph(out, 2, &format!("{drawn} from drawings, as stated"), Role::Plain, look);
+    if grounds.from_drawings > 0 {
+        let drawn = count(grounds.from_drawings, "size", "sizes");
+        paragraph(out, 2, &format!("{drawn} from drawings, as stated"), Role::Plain, look);
+    }
     let names = grounds.assumptions.iter().map(|a| width(&visible(&a.what)));
     let column = names.filter(|&n| n <= MOST_NAME_COLUMNS).max().unwrap_or(0);
     for assumption in &grounds.assumptions {

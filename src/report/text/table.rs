@@ -1,6 +1,7 @@
 //! The table at a glance: requirements by subject, a row a condition, and what nothing is required
 //! of below. Columns are as wide in every block of a spec, so that figures stand under figures.
 
+use super::detail::statistics::capability;
 use super::strip::{Band, Scale, strip};
 use super::{Extent, paragraph};
 use crate::findings::Standing;
@@ -156,8 +157,13 @@ fn covered(account: &Account, index: usize) -> bool {
 fn required<'a>(account: &Account, kind: &'static str, cases: &[&'a Case]) -> Block<'a> {
     let case = cases[0];
     let id = case.id.as_ref().map_or_else(String::new, |id| format!("{id}  "));
-    let worst_case = case.method == "worst case";
-    let method = if worst_case { String::new() } else { format!(", {}", case.method) };
+    let method = match &case.statistics {
+        _ if !case.statistical => String::new(),
+        Some(s) if s.mean.is_finite() => {
+            format!(", {}: mean and {} sigma to each side", case.method, s.shown_sigmas)
+        }
+        _ => format!(", {}", case.method),
+    };
     let what = what(case.measure, &case.quantity);
     let unit = case.unit.symbol;
     // A limit that was written with a unit of its own keeps it.
@@ -215,15 +221,29 @@ fn row(figure: &Figure, case: Option<&Case>) -> Row {
         name.push_str(&format!(", {set} {size} mm"));
     }
     let margin = case.map(|c| c.margin).filter(|m| !m.is_nan());
+    // A row is about what decides: the proven bounds, or the spread from assembly to assembly.
+    let statistics = case.filter(|c| c.statistical).and_then(|c| c.statistics.as_ref());
+    let (least, mean, greatest) = match statistics.filter(|s| s.mean.is_finite()) {
+        Some(s) => {
+            let (low, high) =
+                (s.low.0 - s.shown_sigmas * s.low.1, s.high.0 + s.shown_sigmas * s.high.1);
+            (low, s.mean, high)
+        }
+        None => (figure.least, figure.mean, figure.greatest),
+    };
+    let aside = match statistics {
+        Some(s) => capability(s),
+        None => aside(figure),
+    };
     Row {
         name: visible(&name),
-        least: shown(figure.least, unit, Round::Down),
-        mean: shown(figure.mean, unit, Round::Nearest),
-        greatest: shown(figure.greatest, unit, Round::Up),
+        least: shown(least, unit, Round::Down),
+        mean: shown(mean, unit, Round::Nearest),
+        greatest: shown(greatest, unit, Round::Up),
         margin: margin.map_or_else(String::new, |m| difference(m, unit, Round::Down)),
         standing: case.map(|c| c.standing),
-        band: Some((figure.least, figure.mean, figure.greatest)),
-        aside: aside(figure),
+        band: Some((least, mean, greatest)),
+        aside,
     }
 }
 
