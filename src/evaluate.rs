@@ -17,6 +17,7 @@ mod quantity;
 mod ranges;
 mod restraint;
 pub mod scene;
+pub mod select;
 mod selection;
 mod size;
 mod statistics;
@@ -76,6 +77,21 @@ pub fn evaluate(assembly: &Assembly, options: &Options) -> Evaluation {
     run.windows();
     run.evaluation.missing.sort();
     run.evaluation.missing.dedup();
+    run.evaluation
+}
+
+/// Verdicts alone: no figure that nothing is required of, no window.
+fn verdicts(assembly: &Assembly, options: &Options) -> Evaluation {
+    let detail = Detail::Brief;
+    let mut run =
+        Run { assembly, detail, responses: Vec::new(), evaluation: Evaluation::default() };
+    run.evaluation.temperatures = data_range::temperatures(assembly);
+    run.evaluation.beyond_data = data_range::beyond(assembly, &run.evaluation.temperatures);
+    for index in 0..assembly.requirements.len() {
+        run.requirement(index);
+    }
+    statistics::settle(assembly, &run.responses, &mut run.evaluation, options);
+    selection::settle(assembly, &mut run.evaluation);
     run.evaluation
 }
 

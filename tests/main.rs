@@ -12,6 +12,7 @@ mod laws;
 mod materials;
 mod mechanics;
 mod published;
+mod select;
 mod standards_laws;
 mod statistics_laws;
 mod support;

@@ -92,6 +92,8 @@ codes! {
     ClassMisspelled = "class-misspelled", Error;
     /// A tolerance class that ISO 286 does not define at that size.
     ClassUndefined = "class-undefined", Error;
+    /// A tolerance class that is still to be chosen.
+    ClassLeftOpen = "class-left-open", Error;
     /// A tolerance class of the other side than the one stated.
     ClassAgainstSide = "class-against-side", Error;
     /// A tolerance class where there is no feature of size.

@@ -3,6 +3,7 @@
 //! Each function looks for one thing and gives its findings; none of them stops anything.
 
 mod joint;
+mod open;
 mod state;
 mod statistics;
 mod usage;
@@ -28,6 +29,7 @@ pub(crate) fn lint(subject: &Subject) -> Vec<Diagnostic> {
     if subject.whole {
         found.extend(usage::unused_dimensions(subject));
     }
+    found.extend(open::classes_left_open(subject.assembly));
     found.extend(usage::drawing_revisions(subject.assembly));
     found.extend(usage::constant_subjects(subject.assembly));
     found.extend(state::one_temperature(subject.assembly));
