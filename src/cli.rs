@@ -16,6 +16,7 @@ mod materials;
 mod pipeline;
 mod record;
 mod refusal;
+mod select;
 mod tidy;
 mod write;
 
@@ -69,6 +70,7 @@ fn dispatch(
         Command::Limits(arguments) => limits::run(arguments, console),
         Command::Materials(arguments) => materials::run(arguments, console),
         Command::Record(arguments) => record::run(arguments, console),
+        Command::Select(arguments) => select::run(arguments, console),
         Command::Tidy(arguments) => tidy::run(arguments, console),
         Command::Completions(arguments) => completions::completions(arguments, console),
         Command::Man => completions::man(console),

@@ -16,6 +16,7 @@ pub mod look;
 pub mod record;
 #[cfg(test)]
 mod sample;
+pub mod select;
 pub mod summary;
 pub mod text;
 pub mod wire;

@@ -3,6 +3,7 @@
 mod binary;
 mod check;
 mod record;
+mod select;
 mod tools;
 
 use gapkeep::cli::{Console, Environment, run};

@@ -10,7 +10,7 @@ use gapkeep::evaluate::{Options, evaluate};
 use gapkeep::model::{Assembly, DimensionId};
 use gapkeep::resolve::resolve;
 use gapkeep::source::{Source, Sources};
-use gapkeep::standards::iso286::{HOLES, Kind, SHAFTS, classes_at};
+use gapkeep::standards::iso286::{HOLES, Kind, Letters, SHAFTS, classes_at};
 use std::collections::BTreeMap;
 
 const HEAD: &str = r#"
@@ -186,12 +186,12 @@ gap wall = housing.edge - housing.bore / 2 - shaft.arm {{
 }
 
 #[test]
-fn a_fit_with_both_sides_open_takes_pairs_of_recommended_classes() {
+fn a_fit_with_both_sides_open_takes_fits_of_the_two_systems() {
     let text = format!(
         r#"{HEAD}{RUNNING}
 part housing of light {{ bore = dia 8 ? }}
 part shaft of steel {{ seat = dia 8 ? }}
-fit race = shaft.seat in housing.bore {{ require clearance 0 .. 0.040 at cold, hot }}
+fit race = shaft.seat in housing.bore {{ require clearance 0 .. 0.055 at cold, hot }}
 "#
     );
     let (assembly, found) = selections(&text);
@@ -203,6 +203,9 @@ fit race = shaft.seat in housing.bore {{ require clearance 0 .. 0.040 at cold, h
     for h in HOLES {
         for s in SHAFTS {
             let (Ok(of_hole), Ok(of_shaft)) = (h.limits(8.0), s.limits(8.0)) else { continue };
+            if h.letters != Letters::H && s.letters != Letters::H {
+                continue;
+            }
             for (d, limits) in [(hole, of_hole), (shaft, of_shaft)] {
                 let changed = &mut edited.dimensions[d.index()];
                 changed.lower = limits.lower.metres();
@@ -219,7 +222,7 @@ fit race = shaft.seat in housing.bore {{ require clearance 0 .. 0.040 at cold, h
         choice.serving.iter().map(|c| format!("{}/{}", c.classes[0].0, c.classes[1].0)).collect();
     shown.sort();
     assert_eq!(shown, expected);
-    assert!(shown.len() > 5 && shown.len() < 1000, "{}", shown.len());
+    assert!(shown.len() > 2 && shown.len() < 100, "{}", shown.len());
     assert_widest_first(choice);
 }
 

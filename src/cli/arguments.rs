@@ -6,6 +6,7 @@ use super::console::Colour;
 use super::limits::LimitsArguments;
 use super::materials::MaterialsArguments;
 use super::record::RecordArguments;
+use super::select::SelectArguments;
 use super::tidy::TidyArguments;
 use clap::{CommandFactory, Parser, Subcommand};
 
@@ -52,6 +53,8 @@ pub(super) enum Command {
     Limits(LimitsArguments),
     /// Look into the library of materials.
     Materials(MaterialsArguments),
+    /// Find classes, nominals and tolerances that meet every requirement.
+    Select(SelectArguments),
     /// Give specs their one layout.
     Tidy(TidyArguments),
     /// Write completions for a shell.

@@ -1,8 +1,9 @@
 //! Classes for dimensions: every class that the standard defines at the size, judged.
 //!
-//! A fit with both sides open is a choice of pairs, among the recommended classes of ISO 286-1: all
-//! pairs of all classes would be some hundred thousand, most of which no gauge is made for. Any
-//! other dimension left open is chosen with the rest as it is, open ones at their nominal size.
+//! A fit with both sides open is a choice of pairs, among the recommended classes of ISO 286-1: fits
+//! of the hole-basis and the shaft-basis system (a hole H or a shaft h), and only where none of them
+//! serves any other pair. All pairs of all classes would be some hundred thousand, most of which no
+//! gauge is made for. Any other dimension left open is chosen with the rest as it is, open ones at their nominal size.
 
 use super::cases::Cases;
 use super::trial::Trial;
@@ -12,7 +13,7 @@ use crate::model::{
     Assembly, Dimension, DimensionId, Feature, Fit, Form, Origin, SubjectId, SubjectKind,
 };
 use crate::standards::iso286::{
-    Class, Deviations, HOLES, Kind, PREFERRED_HOLES, PREFERRED_SHAFTS, SHAFTS, classes_at,
+    Class, Deviations, HOLES, Kind, Letters, PREFERRED_HOLES, PREFERRED_SHAFTS, SHAFTS, classes_at,
     preferred_fits,
 };
 use std::collections::BTreeSet;
@@ -141,25 +142,42 @@ fn of_pair(
     let (holes, shafts) = (at(hole, HOLES), at(shaft, SHAFTS));
     let same_size = assembly.dimension(hole).nominal == assembly.dimension(shaft).nominal;
     let mut trial = trial(assembly, cases, &[hole, shaft], options);
-    for &(of_hole, h) in &holes {
-        trial.set(hole, h.lower.metres(), h.upper.metres());
-        for &(of_shaft, s) in &shafts {
-            choice.judged += 1;
-            trial.set(shaft, s.lower.metres(), s.upper.metres());
-            if let Ok(governing) = trial.judge() {
-                let mate: &[Class] = if same_size { &[of_shaft] } else { &[] };
-                let rank = match rank(of_hole, mate) {
-                    Rank::PreferredFit => Rank::PreferredFit,
-                    // Two classes are no more to be preferred than the one that is less so.
-                    of_hole => of_hole.max(rank(of_shaft, &[])),
-                };
-                let classes = vec![(of_hole, h), (of_shaft, s)];
-                choice.serving.push(Candidate { classes, rank, governing });
+    for basis in [true, false] {
+        for &(of_hole, h) in &holes {
+            for &(of_shaft, s) in &shafts {
+                if is_basis(of_hole, of_shaft) != basis {
+                    continue;
+                }
+                choice.judged += 1;
+                trial.set(hole, h.lower.metres(), h.upper.metres());
+                trial.set(shaft, s.lower.metres(), s.upper.metres());
+                if let Ok(governing) = trial.judge() {
+                    let rank = rank_of_pair(of_hole, of_shaft, same_size);
+                    let classes = vec![(of_hole, h), (of_shaft, s)];
+                    choice.serving.push(Candidate { classes, rank, governing });
+                }
             }
+        }
+        if !choice.serving.is_empty() {
+            break;
         }
     }
     sort(&mut choice.serving);
     choice
+}
+
+/// True for fits of the hole-basis or the shaft-basis system (ISO 286-1, clause 5).
+fn is_basis(hole: Class, shaft: Class) -> bool {
+    hole.letters == Letters::H || shaft.letters == Letters::H
+}
+
+fn rank_of_pair(hole: Class, shaft: Class, same_size: bool) -> Rank {
+    let mate: &[Class] = if same_size { &[shaft] } else { &[] };
+    match rank(hole, mate) {
+        Rank::PreferredFit => Rank::PreferredFit,
+        // Two classes are no more to be preferred than the one that is less so.
+        of_hole => of_hole.max(rank(shaft, &[])),
+    }
 }
 
 fn blank(

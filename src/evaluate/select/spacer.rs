@@ -22,6 +22,8 @@ pub struct Spacer {
     pub dimension: DimensionId,
     /// Of what.
     pub subject: SubjectId,
+    /// Between which conditions.
+    pub between: (ConditionId, ConditionId),
     /// The nominal length, m.
     pub nominal: f64,
     /// What the mean is with it, at both conditions, SI.
@@ -104,6 +106,7 @@ pub fn spacer(
         Crossing::Reached { at, .. } if at > 0.0 => Ok(Spacer {
             dimension,
             subject,
+            between,
             nominal: at - (now - stated.nominal),
             mean: OfLength::new(&here, &of_spacer).at(at),
             means_now: (
