@@ -433,3 +433,36 @@ fn a_spacer_that_cannot_do_it_is_refused() {
     let refused = spacer(&stiff, base, subject, between);
     assert!(matches!(refused, Err(NoSpacer::NoLength(_))), "{refused:?}");
 }
+
+#[test]
+fn classes_of_a_pressed_shaft_meet_pressure_and_torque_besides() {
+    let text = r#"
+assembly "press"
+lengths in mm
+temperatures in degC
+material light { cte 23.4 ppm/K; modulus 70 GPa; poisson 0.33; source "test" }
+material steel { cte 11.7 ppm/K; modulus 207 GPa; poisson 0.29; source "test" }
+condition cold -20
+condition hot 60
+part hub of light { bore = dia 40 H7 }
+part shaft of steel { seat = dia 40 ? }
+fit pressed = shaft.seat in hub.bore {
+  joint { length 30; hub outside 80; shaft solid; friction 0.12 }
+  require "P" pressure 5 .. 95 MPa at hot, cold
+  require "T" torque >= 30 Nm at hot
+  require "I" interference >= 0.020 at reference
+}
+"#;
+    let (_, found) = selections(text);
+    let [choice] = &found.choices[..] else { panic!("{:?}", found.choices) };
+    assert_eq!((choice.requirements.len(), choice.obstacle), (3, None));
+    let serving: Vec<_> = choice.serving.iter().map(|c| c.classes[0].0).collect();
+    let mut servants = 0;
+    for (class, _) in classes_at(40.0, Kind::Shaft) {
+        let holds = least_margin(&text.replacen('?', &class.to_string(), 1)).is_some();
+        assert_eq!(holds, serving.contains(&class), "{class}");
+        servants += usize::from(holds);
+    }
+    assert!(servants > 2, "{servants}");
+    assert_widest_first(choice);
+}
