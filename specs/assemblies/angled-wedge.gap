@@ -21,7 +21,7 @@ gap closing =
   - board.thickness
   - wedge.travel * tan(wedge.ramp)
 {
-  require "CW-1" -0.20 .. 0.16
+  require "CW-1" -0.21 .. 0.16
 }
 result tilt = atan((wedge.height - 6.2 mm) / wedge.travel) {
   require "CW-2" <= 3 deg

@@ -26,10 +26,10 @@ part spindle of steel_42crmo4 {
 }
 
 fit outer = bearing.outside in head.bore {
-  require "PS-1" clearance -.0005 .. .0015
+  require "PS-1" clearance -.0006 .. .0015
 }
 fit inner = spindle.journal in bearing.bore {
-  require "PS-2" clearance -.0007 .. .0006
+  require "PS-2" clearance -.0008 .. .0006
 }
 gap float = head.depth - bearing.width - spindle.shoulder {
   require "PS-3" .030 .. .090

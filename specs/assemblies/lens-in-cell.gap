@@ -6,7 +6,7 @@ drawing "RL-20" rev "A"
 lengths in mm
 temperatures in degC
 
-condition stowed  -40
+condition stowed  -30
 condition lab      20 ±2
 condition field   -10 .. 50
 condition sun      70 { cell 4 K above }
@@ -28,7 +28,7 @@ fit rim = lens.rim in cell.bore {
     because "no contact with the cell wall at any temperature"
 }
 result decentre = play(rim) {
-  require "RL-2" -0.090 .. 0.090
+  require "RL-2" -0.100 .. 0.100
 }
 gap axial = cell.seat - lens.edge - spacer.thickness {
   require "RL-3" >= -0.05

@@ -4,7 +4,7 @@ assembly "Viewport, sealed window"
 lengths in mm
 temperatures in degC
 
-condition cold -40
+condition cold -30
 condition room  20
 condition hot   85
 

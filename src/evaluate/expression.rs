@@ -40,9 +40,45 @@ pub(crate) fn value(scene: &Scene<'_>, at: At, expr: &Expr) -> Result<Recorded, 
         ExprKind::Clearance(fit) => clearance_of(scene, at, *fit)?,
         ExprKind::Play(fit) => play(scene, at, *fit)?,
         ExprKind::Change { of: e, from } => {
-            let there = from.map_or(At::Reference, At::Condition);
-            of(e)? - value(scene, there, e)?
+            change(scene, at, from.map_or(At::Reference, At::Condition), e)?
         }
+    })
+}
+
+/// An expression here less the same there; sums are taken apart, so that each size enters once.
+pub(crate) fn change(
+    scene: &Scene<'_>,
+    here: At,
+    there: At,
+    expr: &Expr,
+) -> Result<Recorded, Unable> {
+    let of = |e: &Expr| change(scene, here, there, e);
+    Ok(match &expr.kind {
+        ExprKind::Constant(_) | ExprKind::Pi => Recorded::exact(0.0),
+        ExprKind::Size { dimension, piece } => {
+            size::change(scene, here, there, *dimension, *piece)?
+        }
+        ExprKind::Pieces { dimension, count } => {
+            let mut sum = Recorded::exact(0.0);
+            for piece in 1..=*count {
+                sum = sum + size::change(scene, here, there, *dimension, piece)?;
+            }
+            sum
+        }
+        ExprKind::Named(_, e) => of(e)?,
+        ExprKind::Negate(e) => -of(e)?,
+        ExprKind::Binary(Binary::Add, a, b) => of(a)? + of(b)?,
+        ExprKind::Binary(Binary::Sub, a, b) => of(a)? - of(b)?,
+        ExprKind::Binary(Binary::Mul, a, b) => match (&a.kind, &b.kind) {
+            (ExprKind::Constant(k), _) => of(b)? * *k,
+            (_, ExprKind::Constant(k)) => of(a)? * *k,
+            _ => value(scene, here, expr)? - value(scene, there, expr)?,
+        },
+        ExprKind::Binary(Binary::Div, a, b) => match &b.kind {
+            ExprKind::Constant(k) => of(a)? / *k,
+            _ => value(scene, here, expr)? - value(scene, there, expr)?,
+        },
+        _ => value(scene, here, expr)? - value(scene, there, expr)?,
     })
 }
 

@@ -34,8 +34,10 @@ pub(crate) fn quantity(
         (Some(modulus), Quantity::Pressure) => {
             // A cavity that does not give way: the true pressure is at most this.
             let rigid = Recorded::exact(0.0);
-            let full = liquid.clone().max(cavity.clone());
-            Ok(formulas::full_pressure(full, cavity, t.apply(&modulus.curve), rigid))
+            // As a ratio, one where there is room left, it is exactly nothing then.
+            let one = Recorded::exact(1.0);
+            let full = (liquid / cavity).max(one.clone());
+            Ok(formulas::full_pressure(full, one, t.apply(&modulus.curve), rigid))
         }
         _ => Ok(formulas::ullage(liquid, cavity)),
     }
@@ -66,7 +68,8 @@ fn charge(
     let then = match fill.charged_at {
         Charge::Reference => Recorded::exact(scene.assembly.reference),
         Charge::At(t) => Recorded::exact(t),
-        Charge::Condition(c) if at == At::Condition(c) => temperature.clone(),
+        // Where it was measured it is what was measured.
+        Charge::Condition(c) if at == At::Condition(c) => return stated,
         Charge::Condition(c) => temperature::of(scene, At::Condition(c), Owner::Fill(subject)),
     };
     let scatter = Unknown::FillScatter(subject);

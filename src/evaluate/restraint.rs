@@ -1,6 +1,6 @@
 //! Quantities of parts that hold each other.
 
-use super::expression::value;
+use super::expression::{self, value};
 use super::joint::{nominal, yield_strength};
 use super::scene::{At, Scene, Unable};
 use super::{elastic, temperature};
@@ -32,11 +32,24 @@ pub(crate) fn quantity(
     quantity: Quantity,
     of_yield: bool,
 ) -> Result<Recorded, Unable> {
-    let take_up = take_up(scene, at, subject, restraint)?;
+    let known_here = match restraint.start {
+        Start::Preload { condition, .. } => at == At::Condition(condition),
+        _ => false,
+    };
+    let force = if known_here {
+        // Where the preload was set the force is the preload; the formula would say the same, with
+        // every compliance divided by itself.
+        scene.unknown(Unknown::Preload(subject))
+    } else {
+        let take_up = take_up(scene, at, subject, restraint)?;
+        if quantity == Quantity::Separation {
+            return Ok(formulas::separation(take_up));
+        }
+        formulas::force(take_up, compliance(scene, at, subject, restraint)?)
+    };
     if quantity == Quantity::Separation {
-        return Ok(formulas::separation(take_up));
+        return Ok(Recorded::exact(0.0));
     }
-    let force = formulas::force(take_up, compliance(scene, at, subject, restraint)?);
     let Quantity::Stress(part) = quantity else { return Ok(force) };
     let place = restraint.members.iter().position(|m| m.part == part && m.area.is_some());
     let area = area(scene, subject, place.unwrap_or(0));
@@ -81,7 +94,7 @@ fn preloaded(
     let compliance_then = compliance(scene, then, subject, restraint)?;
     let mut growth = Recorded::exact(0.0);
     for member in &restraint.members {
-        let change = value(scene, at, &member.length)? - value(scene, then, &member.length)?;
+        let change = expression::change(scene, at, then, &member.length)?;
         growth = match member.hold {
             Hold::Squeezed => growth + change,
             Hold::Stretched => growth - change,

@@ -49,9 +49,18 @@ pub enum Unable {
     BeyondData,
 }
 
-/// How the temperatures of a condition are moved away from what the spec states, tolerances kept.
+/// How the temperatures of one condition are moved away from what the spec states, tolerances kept.
 #[derive(Debug, Clone)]
-pub(crate) enum Shift {
+pub(crate) struct Shift {
+    /// Which condition; every other one stays as it is.
+    pub(crate) condition: ConditionId,
+    /// How.
+    pub(crate) way: Way,
+}
+
+/// The two ways to move temperatures.
+#[derive(Debug, Clone)]
+pub(crate) enum Way {
     /// Every part to this temperature, K.
     Common(Recorded),
     /// Every departure from the reference temperature by this factor.
@@ -122,9 +131,9 @@ impl<'a> Scene<'a> {
         variable
     }
 
-    /// How temperatures are moved, if they are.
-    pub(crate) fn shift(&self) -> Option<&Shift> {
-        self.shift.as_ref()
+    /// How the temperatures of a condition are moved, if they are.
+    pub(crate) fn shift(&self, condition: ConditionId) -> Option<&Way> {
+        self.shift.as_ref().filter(|s| s.condition == condition).map(|s| &s.way)
     }
 
     /// The member chosen from a `one of` set.

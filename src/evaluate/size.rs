@@ -3,7 +3,7 @@
 use super::scene::{At, Scene, Unable};
 use super::{elastic, temperature};
 use crate::materials::{Expansion, Expansions, Material};
-use crate::mechanics::expansion;
+use crate::mechanics::{expansion, restraint};
 use crate::model::{
     ConditionId, Dimension, DimensionId, Direction, Feature, Form, Owner, PartId, Unknown,
 };
@@ -28,6 +28,31 @@ pub(crate) fn at(
     }
     let when_stated = thermal_strain(scene, dimension, Recorded::exact(dimension.reference));
     Ok(expansion::length_from_own_reference(stated, here, when_stated))
+}
+
+/// What one piece of a dimension is longer by here than there, m or rad.
+///
+/// The size enters once, so that its tolerance hardly matters to a change, also in an enclosure.
+pub(crate) fn change(
+    scene: &Scene<'_>,
+    here: At,
+    there: At,
+    id: DimensionId,
+    piece: u32,
+) -> Result<Recorded, Unable> {
+    let dimension = scene.assembly.dimension(id);
+    if dimension.form == Form::Angle {
+        return Ok(Recorded::exact(0.0));
+    }
+    let stated = as_stated(scene, id, dimension, piece);
+    let (strain, then) =
+        (stretch(scene, here, id, dimension)?, stretch(scene, there, id, dimension)?);
+    let growth = restraint::growth(stated, strain, then);
+    if dimension.reference == scene.assembly.reference {
+        return Ok(growth);
+    }
+    let when_stated = thermal_strain(scene, dimension, Recorded::exact(dimension.reference));
+    Ok(growth / (when_stated + 1.0))
 }
 
 /// The size at its own reference temperature, coating included.

@@ -1,6 +1,6 @@
 //! Temperatures of parts and fills, K.
 
-use super::scene::{At, Scene, Shift};
+use super::scene::{At, Scene, Way};
 use crate::model::{Assembly, Condition, ConditionId, OwnTemperature, Owner, Thermal, Unknown};
 use crate::numeric::{Number, Recorded};
 
@@ -12,16 +12,16 @@ pub(crate) fn of(scene: &Scene<'_>, at: At, owner: Owner) -> Recorded {
     let reference = Recorded::exact(scene.assembly.reference);
     let At::Condition(id) = at else { return reference };
     let real = in_condition(scene, id, owner);
-    match scene.shift() {
+    match scene.shift(id) {
         None => real,
         // A range is not a tolerance about its middle: it is asked point by point.
-        Some(Shift::Common(temperature)) if scene.assembly.condition(id).is_range() => {
+        Some(Way::Common(temperature)) if scene.assembly.condition(id).is_range() => {
             temperature.clone()
         }
-        Some(Shift::Common(temperature)) => {
+        Some(Way::Common(temperature)) => {
             temperature.clone() + (real - at_middle(scene.assembly, id, owner))
         }
-        Some(Shift::Scaled(factor)) => {
+        Some(Way::Scaled(factor)) => {
             let middle = at_middle(scene.assembly, id, owner);
             let departure = factor.clone() * (middle - scene.assembly.reference);
             reference + departure + (real - middle)

@@ -7,17 +7,19 @@
 //! of every material are looked at.
 
 use super::outcome::{Chosen, Outcome, Verdict, Window};
-use super::scene::{At, Response, Scene, Shift};
+use super::scene::{At, Response, Scene, Shift, Way};
 use super::{depends, quantity, temperature};
 use crate::model::{Assembly, ConditionId, Owner, Requirement, Thermal};
 use crate::numeric::Interval;
-use crate::numeric::extremes::extremes;
+use crate::numeric::extremes::extremes_within;
 use crate::numeric::tolerance::{EXTREME_GAP, WINDOW_SLACK, WINDOW_SLIVER};
 
 /// Farthest factor that is looked at where temperatures are scaled.
 const MOST_SCALE: f64 = 10.0;
+/// Most boxes the extremes of one piece may take: where that is too few, the piece is halved.
+const MOST_BOXES: usize = 16;
 /// Most pieces one window is made of.
-const MOST_PIECES: usize = 4000;
+const MOST_PIECES: usize = 800;
 /// Temperatures that are looked at where a material's data are unbounded, K.
 const WIDEST: (f64, f64) = (1.0, 2000.0);
 
@@ -34,7 +36,8 @@ pub(crate) fn window(assembly: &Assembly, verdict: &Verdict, members: &[Chosen])
         &[],
         |recorder| {
             let variable = recorder.input();
-            Some(if axis.scaled { Shift::Scaled(variable) } else { Shift::Common(variable) })
+            let way = if axis.scaled { Way::Scaled(variable) } else { Way::Common(variable) };
+            Some(Shift { condition, way })
         },
         |scene| {
             let at = At::Condition(condition);
@@ -62,6 +65,10 @@ struct Axis {
 impl Axis {
     fn of(assembly: &Assembly, requirement: &Requirement, condition: ConditionId) -> Option<Self> {
         let state = assembly.condition(condition);
+        if matches!(state.thermal, Thermal::History(_)) {
+            // A history is not one temperature, nor one departure, that could be moved.
+            return None;
+        }
         let parts: Vec<_> = depends::parts(assembly, requirement.subject).into_iter().collect();
         let middles: Vec<f64> = parts
             .iter()
@@ -139,7 +146,8 @@ impl Search<'_> {
             std::iter::once(at).chain(self.response.ranges.iter().copied()).collect::<Vec<_>>()
         };
         // A coarse gap is enough: what matters is the sign of a margin, and pieces only shrink.
-        let whole = extremes(&self.response.tape, &with(piece), EXTREME_GAP * unit);
+        let whole =
+            extremes_within(&self.response.tape, &with(piece), EXTREME_GAP * unit, MOST_BOXES);
         let holds = limits.0.is_none_or(|l| whole.least.bound >= l.value - slack)
             && limits.1.is_none_or(|u| whole.greatest.bound <= u.value + slack);
         if holds {

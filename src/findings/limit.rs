@@ -175,11 +175,12 @@ fn mend(
             room_up = room_up.min(u.value - range.greatest.bound);
         }
     }
+    // A size that hardly moves the quantity is no cure.
     let size = worst
         .verdict
         .contributors
         .iter()
-        .find(|c| matches!(c.unknown, Unknown::Size { .. }) && c.sensitivity.abs() > 1e-6);
+        .find(|c| matches!(c.unknown, Unknown::Size { .. }) && c.sensitivity.abs() > 0.1);
     let shift = if raise > 0.0 && room_up >= raise {
         Some(raise)
     } else if lower > 0.0 && room_down >= lower {
@@ -204,11 +205,12 @@ fn mend(
             number::difference_with_unit(shift.abs(), unit, Round::Up),
         )),
         (None, _) => {
-            let excess = raise.max(0.0) + lower.max(0.0);
+            // What is left once the nominal is centred.
+            let excess = -(room_down + room_up);
             let largest = worst.verdict.contributors.first()?;
             Some(format!(
-                "no nominal mends both ends: the range must become {} narrower; {} is the widest \
-                 contributor, {} of it",
+                "no nominal mends both ends: once centred, the range must become {} narrower; {} is \
+                 the widest contributor, {} of it",
                 number::difference_with_unit(excess, unit, Round::Up),
                 words::name(&words::unknown(assembly, largest.unknown)),
                 number::difference_with_unit(largest.part.abs(), unit, Round::Nearest),

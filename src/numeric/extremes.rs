@@ -6,7 +6,7 @@
 //! and never 2⁴⁰ corners; the rest is bisected, worst bound first (Moore, Kearfott and Cloud,
 //! *Introduction to Interval Analysis*, ch. 6 on mean value forms, from memory).
 
-use super::tolerance::MOST_BOXES;
+use super::tolerance::{MOST_BOXES, RELATIVE_GAP};
 use super::{Interval, Tape};
 use std::cmp::Ordering;
 use std::collections::BinaryHeap;
@@ -42,9 +42,15 @@ pub struct Extremes {
 /// # Panics
 /// If there are fewer ranges than inputs.
 pub fn extremes(tape: &Tape, ranges: &[Interval], gap: f64) -> Extremes {
+    extremes_within(tape, ranges, gap, MOST_BOXES)
+}
+
+/// As [`extremes`], with at most `most_boxes` pieces for each end: for a search that asks again and
+/// again and can do with a coarse answer.
+pub fn extremes_within(tape: &Tape, ranges: &[Interval], gap: f64, most_boxes: usize) -> Extremes {
     let breaks: Vec<Vec<f64>> = (0..tape.inputs()).map(|i| tape.breakpoints(i)).collect();
     let whole = Piece::of(tape, ranges.to_vec());
-    let search = |side| Search::new(tape, &breaks, gap, side).run(whole.clone());
+    let search = |side| Search::new(tape, &breaks, gap, most_boxes, side).run(whole.clone());
     Extremes { least: search(Side::Least), greatest: search(Side::Greatest) }
 }
 
@@ -109,19 +115,38 @@ struct Search<'a> {
     tape: &'a Tape,
     breaks: &'a [Vec<f64>],
     gap: f64,
+    most_boxes: usize,
     side: Side,
     reached: f64,
     at: Vec<f64>,
+    /// Widths of the whole box.
+    whole: Vec<f64>,
 }
 
 impl<'a> Search<'a> {
-    fn new(tape: &'a Tape, breaks: &'a [Vec<f64>], gap: f64, side: Side) -> Self {
-        Search { tape, breaks, gap, side, reached: f64::NEG_INFINITY, at: Vec::new() }
+    fn new(
+        tape: &'a Tape,
+        breaks: &'a [Vec<f64>],
+        gap: f64,
+        most_boxes: usize,
+        side: Side,
+    ) -> Self {
+        Search {
+            tape,
+            breaks,
+            gap,
+            most_boxes,
+            side,
+            reached: f64::NEG_INFINITY,
+            at: Vec::new(),
+            whole: Vec::new(),
+        }
     }
 
     fn run(mut self, whole: Piece) -> Extreme {
         // Even a formula that is nowhere defined must name some place.
         self.at = whole.ranges.iter().map(|r| r.mid()).collect();
+        self.whole = whole.ranges.iter().map(|r| r.width().max(f64::MIN_POSITIVE)).collect();
         let mut open = BinaryHeap::new();
         // What was settled without being split further: its bound counts to the end.
         let mut settled = f64::NEG_INFINITY;
@@ -130,7 +155,7 @@ impl<'a> Search<'a> {
         let mut bound = f64::INFINITY;
         while let Some(worst) = open.pop() {
             bound = worst.bound.max(settled);
-            if bound <= self.reached + self.gap || looked_at >= MOST_BOXES {
+            if bound <= self.reached + self.allowed() || looked_at >= self.most_boxes {
                 break;
             }
             let Some((first, second)) = self.split(&worst.piece) else {
@@ -150,7 +175,7 @@ impl<'a> Search<'a> {
             }
             bound = settled.max(self.reached);
         }
-        let met = bound <= self.reached + self.gap;
+        let met = bound <= self.reached + self.allowed();
         // Whatever was dropped lay at or below the value reached.
         let bound = bound.max(self.reached);
         match self.side {
@@ -159,28 +184,38 @@ impl<'a> Search<'a> {
         }
     }
 
+    /// How far the bound may stay from the value reached: what was asked for, or a share of the value
+    /// that no printed digit shows.
+    fn allowed(&self) -> f64 {
+        self.gap.max(RELATIVE_GAP * self.reached.abs())
+    }
+
     /// Sends what has a proven sign to its end, bounds the piece, and tries points in it.
     fn examine(&mut self, mut piece: Piece) -> Open {
-        let mut corner = Vec::with_capacity(piece.ranges.len());
-        let mut moved = false;
-        for (range, slope) in piece.ranges.iter_mut().zip(&piece.slopes) {
-            let slope = self.side.turn(*slope);
-            let end = if slope.mid() >= 0.0 { range.hi() } else { range.lo() };
-            corner.push(end);
-            if !range.is_point() && (slope.lo() >= 0.0 || slope.hi() <= 0.0) {
-                *range = Interval::point(end);
-                moved = true;
+        let mut bound = f64::INFINITY;
+        loop {
+            bound = bound.min(self.side.turn(piece.value).hi());
+            let mut corner = Vec::with_capacity(piece.ranges.len());
+            let mut moved = false;
+            for (range, slope) in piece.ranges.iter_mut().zip(&piece.slopes) {
+                let slope = self.side.turn(*slope);
+                let end = if slope.mid() >= 0.0 { range.hi() } else { range.lo() };
+                corner.push(end);
+                if !range.is_point() && (slope.lo() >= 0.0 || slope.hi() <= 0.0) {
+                    *range = Interval::point(end);
+                    moved = true;
+                }
             }
-        }
-        let here = self.try_point(&corner);
-        let all_points = piece.ranges.iter().all(|r| r.is_point());
-        if all_points {
-            // The corner is the whole piece.
-            return Open { bound: here.hi(), piece };
-        }
-        let mut bound = self.side.turn(piece.value).hi();
-        if moved {
-            bound = bound.min(self.side.turn(self.tape.value(&piece.ranges)).hi());
+            let here = self.try_point(&corner);
+            if piece.ranges.iter().all(|r| r.is_point()) {
+                // The corner is the whole piece.
+                return Open { bound: here.hi(), piece };
+            }
+            if !moved || bound <= self.reached {
+                break;
+            }
+            // On the smaller piece more signs may be certain.
+            piece = Piece::of(self.tape, piece.ranges);
         }
         let middle: Vec<f64> = piece.ranges.iter().map(|r| r.mid()).collect();
         let mut form = self.try_point(&middle);
@@ -214,7 +249,13 @@ impl<'a> Search<'a> {
             if range.is_point() || width <= 1e-13 * range.magnitude() {
                 continue;
             }
-            let cost = slope.magnitude().min(f64::MAX) * width;
+            // Where nothing is known of a slope, widths of different units tell nothing: the widest of
+            // its kind goes first.
+            let cost = if slope.is_bounded() {
+                slope.magnitude() * width
+            } else {
+                f64::MAX * (width / self.whole[i]).min(1.0)
+            };
             if cost > most {
                 most = cost;
                 worst = Some(i);

@@ -4,6 +4,9 @@
 /// far below what a gauge resolves, far above rounding.
 pub const EXTREME_GAP: f64 = 1e-9;
 
+/// The same as a share of the value itself, for quantities that are large in their unit.
+pub const RELATIVE_GAP: f64 = 1e-10;
+
 /// Most boxes one search for an extreme may look at before it gives up and says so.
 pub const MOST_BOXES: usize = 100_000;
 
