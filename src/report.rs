@@ -17,6 +17,7 @@ pub mod record;
 #[cfg(test)]
 mod sample;
 pub mod select;
+mod shop;
 pub mod summary;
 pub mod text;
 pub mod wire;
@@ -31,6 +32,7 @@ pub use account::account;
 pub use basis::{Assumption, Grounds, MaterialNote, PartTemperature};
 pub use cause::Cause;
 pub use coordinate::Coordinate;
+pub use shop::ShopCard;
 
 /// Everything one run has to say.
 #[derive(Debug, Clone, Default)]
@@ -65,6 +67,8 @@ pub struct Account {
     pub drawing: Option<(String, String)>,
     /// Free remarks.
     pub notes: Vec<String>,
+    /// Unit of lengths.
+    pub length: &'static Unit,
     /// Unit of temperatures.
     pub temperature: &'static Unit,
     /// Temperature the sizes are stated at, K.
@@ -78,6 +82,8 @@ pub struct Account {
     /// The share of assemblies that break some requirement somewhere, where statistics were asked
     /// for.
     pub failing: Option<FailingShare>,
+    /// What a shop needs to make each joint.
+    pub shop: Vec<ShopCard>,
     /// What the figures rest on.
     pub grounds: Grounds,
 }

@@ -3,6 +3,7 @@
 use super::basis::grounds;
 use super::cause::Cause;
 use super::coordinate::{coordinates, scale};
+use super::shop::cards;
 use super::{Account, Case, Contribution, FailingShare, Figure, Measure, Statistics};
 use crate::evaluate::Evaluation;
 use crate::evaluate::outcome::{self, Verdict};
@@ -23,6 +24,7 @@ pub fn account(assembly: &Assembly, evaluation: &Evaluation, today: &str) -> Acc
         place: assembly.span,
         drawing: assembly.drawing.as_ref().map(|d| (d.number.clone(), d.revision.clone())),
         notes: assembly.notes.clone(),
+        length: assembly.defaults.length,
         temperature: assembly.defaults.temperature,
         reference: assembly.reference,
         conditions: assembly.conditions.iter().map(written).collect(),
@@ -33,6 +35,7 @@ pub fn account(assembly: &Assembly, evaluation: &Evaluation, today: &str) -> Acc
             interval: y.share_interval,
             draws: y.draws,
         }),
+        shop: cards(assembly, evaluation),
         grounds: grounds(assembly, evaluation),
     }
 }

@@ -1,7 +1,7 @@
 //! A report made by hand, which the tests of every rendering share.
 
 use super::{Account, Case, Cause, Contribution, Coordinate, Figure, Grounds, Measure};
-use super::{Assumption, MaterialNote, PartTemperature, Report, Spec};
+use super::{Assumption, MaterialNote, PartTemperature, Report, ShopCard, Spec};
 use crate::diagnostic::{Code, Diagnostic};
 use crate::findings::Standing;
 use crate::source::{Source, Sources};
@@ -159,6 +159,7 @@ pub(super) fn report() -> Report {
                 place: Span::new(FileId(0), 9, 31),
                 drawing: Some(("FW-300".into(), "C".into())),
                 notes: Vec::new(),
+                length: unit("mm"),
                 temperature: unit("degC"),
                 reference: 293.15,
                 conditions: vec![
@@ -169,6 +170,19 @@ pub(super) fn report() -> Report {
                 figures,
                 cases,
                 failing: None,
+                shop: vec![ShopCard {
+                    joint: "outer_race".into(),
+                    outer: "housing".into(),
+                    inner: "bearing".into(),
+                    day: None,
+                    ambient: 293.15,
+                    clearance: 42e-6,
+                    heat: Some(373.21),
+                    limit: Some(423.15),
+                    outer_data: 423.15,
+                    chill: None,
+                    inner_data: 173.15,
+                }],
                 grounds: grounds(),
             }),
             findings: vec![finding],

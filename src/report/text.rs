@@ -6,6 +6,7 @@
 
 mod detail;
 mod grounds;
+mod shop;
 mod strip;
 mod table;
 
@@ -114,6 +115,7 @@ fn whole(out: &mut String, spec: &Spec, account: &Account, extent: Extent, look:
     }
     if extent == Extent::Detail {
         detail::render(out, account, look);
+        shop::render(out, account, look);
         grounds::render(out, account, look);
     }
 }

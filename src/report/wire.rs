@@ -43,12 +43,40 @@ pub struct SpecEntry {
     pub results: Vec<ResultEntry>,
     /// Each requirement at each of its conditions.
     pub requirements: Vec<RequirementEntry>,
+    /// What a shop needs to make each joint; temperatures in the file's unit, clearance in mm.
+    pub shop_cards: Vec<ShopCardEntry>,
     /// The share of assemblies that meet every requirement at every condition, where statistics
     /// were asked for.
     #[serde(skip_serializing_if = "Option::is_none")]
     pub assembly_yield: Option<YieldEntry>,
     /// What is wrong or worth knowing.
     pub findings: Vec<FindingEntry>,
+}
+
+/// What a shop needs to join two parts without force, for every pair within the tolerances.
+#[derive(Debug, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
+pub struct ShopCardEntry {
+    /// The joint.
+    pub joint: String,
+    /// The part outside.
+    pub outer: String,
+    /// The part inside.
+    pub inner: String,
+    /// Unit of the temperatures.
+    pub unit: &'static str,
+    /// The condition that is the day of assembly; `null` for the reference temperature.
+    pub day: Option<String>,
+    /// Temperature of that day.
+    pub ambient: Option<f64>,
+    /// Clearance while joining, mm.
+    pub clearance: Option<f64>,
+    /// Heat the outer part to this; `null` where its data end first.
+    pub heat_outer: Option<f64>,
+    /// The highest temperature that its material allows.
+    pub outer_limit: Option<f64>,
+    /// Or chill the inner part to this; `null` where its data end first.
+    pub chill_inner: Option<f64>,
 }
 
 /// A share of assemblies that hold, with what it is known to lie between.

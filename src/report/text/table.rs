@@ -1,24 +1,16 @@
 //! The table at a glance: requirements by subject, a row a condition, and what nothing is required
-//! of below. Columns are as wide in every block of a spec, so that figures stand under figures.
+//! of below.
 
-use super::detail::statistics::capability;
-use super::strip::{Band, Scale, strip};
+mod columns;
+mod row;
+
 use super::{Extent, paragraph};
-use crate::findings::Standing;
-use crate::findings::number::{Round, decimals, difference, difference_with_unit, digits, shown};
 use crate::report::look::{Look, Role};
-use crate::report::wrap::{blanks, left, right, visible, width};
+use crate::report::wrap::{blanks, visible, width};
 use crate::report::{Account, Case, Figure, Measure};
 use crate::units::Unit;
-
-/// Condition names longer than this stand on a line of their own.
-const MOST_NAME_COLUMNS: usize = 16;
-/// Room for the longest verdict.
-const VERDICT_COLUMNS: usize = 9;
-/// A strip shorter than this says nothing.
-const LEAST_STRIP_COLUMNS: usize = 9;
-/// A strip longer than this is no easier to read.
-const MOST_STRIP_COLUMNS: usize = 32;
+use columns::Columns;
+use row::{Row, row, unknown};
 
 /// Rows that share a heading and a scale.
 struct Block<'a> {
@@ -30,18 +22,6 @@ struct Block<'a> {
     shows: Option<(&'a str, &'static Unit)>,
     rows: Vec<Row>,
     limits: (Option<f64>, Option<f64>),
-}
-
-/// One line of figures, ready but for its alignment. Empty figures are not known.
-struct Row {
-    name: String,
-    least: String,
-    mean: String,
-    greatest: String,
-    margin: String,
-    standing: Option<Standing>,
-    band: Option<(f64, f64, f64)>,
-    aside: String,
 }
 
 /// Writes the table of a spec.
@@ -122,15 +102,15 @@ fn blocks(account: &Account, extent: Extent) -> Vec<Block<'_>> {
                 .rev()
                 .find(|b| b.shows == Some((figure.quantity.as_str(), figure.unit)));
             if let Some(block) = kin {
-                block.rows.push(row(figure, None));
+                block.rows.push(row(account, figure, None));
                 continue;
             }
             match rest
                 .iter_mut()
                 .find(|(f, _)| f.quantity == figure.quantity && f.unit == figure.unit)
             {
-                Some((_, block)) => block.rows.push(row(figure, None)),
-                None => rest.push((figure, free(kind, figure))),
+                Some((_, block)) => block.rows.push(row(account, figure, None)),
+                None => rest.push((figure, free(account, kind, figure))),
             }
         }
         blocks.extend(rest.into_iter().map(|(_, block)| block));
@@ -176,7 +156,7 @@ fn required<'a>(account: &Account, kind: &'static str, cases: &[&'a Case]) -> Bl
     let rows = cases
         .iter()
         .map(|case| match case.figure.map(|f| &account.figures[f]) {
-            Some(figure) => row(figure, Some(case)),
+            Some(figure) => row(account, figure, Some(case)),
             None => unknown(case),
         })
         .collect();
@@ -191,7 +171,7 @@ fn required<'a>(account: &Account, kind: &'static str, cases: &[&'a Case]) -> Bl
     }
 }
 
-fn free<'a>(kind: &'static str, figure: &'a Figure) -> Block<'a> {
+fn free<'a>(account: &Account, kind: &'static str, figure: &'a Figure) -> Block<'a> {
     let unit = figure.unit.symbol;
     let what = what(figure.measure, &figure.quantity);
     let heading: Vec<&str> = [what.as_str(), unit].into_iter().filter(|w| !w.is_empty()).collect();
@@ -201,7 +181,7 @@ fn free<'a>(kind: &'static str, figure: &'a Figure) -> Block<'a> {
         heading: heading.join(", "),
         because: None,
         shows: None,
-        rows: vec![row(figure, None)],
+        rows: vec![row(account, figure, None)],
         limits: (None, None),
     }
 }
@@ -211,156 +191,4 @@ fn what(measure: Option<Measure>, quantity: &str) -> String {
     let quantity = if matches!(quantity, "gap" | "value") { "" } else { quantity };
     let words = [measure.map_or("", Measure::word), quantity];
     words.into_iter().filter(|word| !word.is_empty()).collect::<Vec<_>>().join(" ")
-}
-
-fn row(figure: &Figure, case: Option<&Case>) -> Row {
-    let unit = figure.unit;
-    let mut name = figure.condition.clone().unwrap_or_else(|| "any".to_string());
-    for (set, size) in &figure.members {
-        let size = digits(*size * 1e3, 3, Round::Nearest);
-        name.push_str(&format!(", {set} {size} mm"));
-    }
-    let margin = case.map(|c| c.margin).filter(|m| !m.is_nan());
-    // A row is about what decides: the proven bounds, or the spread from assembly to assembly.
-    let statistics = case.filter(|c| c.statistical).and_then(|c| c.statistics.as_ref());
-    let (least, mean, greatest) = match statistics.filter(|s| s.mean.is_finite()) {
-        Some(s) => {
-            let (low, high) =
-                (s.low.0 - s.shown_sigmas * s.low.1, s.high.0 + s.shown_sigmas * s.high.1);
-            (low, s.mean, high)
-        }
-        None => (figure.least, figure.mean, figure.greatest),
-    };
-    let aside = match statistics {
-        Some(s) => capability(s),
-        None => aside(figure),
-    };
-    Row {
-        name: visible(&name),
-        least: shown(least, unit, Round::Down),
-        mean: shown(mean, unit, Round::Nearest),
-        greatest: shown(greatest, unit, Round::Up),
-        margin: margin.map_or_else(String::new, |m| difference(m, unit, Round::Down)),
-        standing: case.map(|c| c.standing),
-        band: Some((least, mean, greatest)),
-        aside,
-    }
-}
-
-fn unknown(case: &Case) -> Row {
-    Row {
-        name: visible(case.condition.as_deref().unwrap_or("any")),
-        least: String::new(),
-        mean: String::new(),
-        greatest: String::new(),
-        margin: String::new(),
-        standing: Some(case.standing),
-        band: None,
-        aside: String::new(),
-    }
-}
-
-/// A negative clearance as the interference it is, and the reverse.
-fn aside(figure: &Figure) -> String {
-    let other = match figure.quantity.as_str() {
-        "clearance" => "interference",
-        "radial clearance" => "radial interference",
-        "interference" => "clearance",
-        _ => return String::new(),
-    };
-    // What prints as zero is no interference worth a line.
-    let least_digit = libm::pow(10.0, -(decimals(figure.unit) as f64));
-    if figure.unit.from_si(figure.least) > -least_digit {
-        return String::new();
-    }
-    let most = difference_with_unit(-figure.least, figure.unit, Round::Up);
-    if figure.greatest >= 0.0 {
-        format!("{other} up to {most}")
-    } else {
-        let fewest = difference(-figure.greatest, figure.unit, Round::Down);
-        format!("{other} {fewest} .. {most}")
-    }
-}
-
-/// How wide the columns of a spec are.
-struct Columns {
-    name: usize,
-    figure: usize,
-    margin: usize,
-    strip: usize,
-}
-
-impl Columns {
-    fn of(blocks: &[Block<'_>], look: Look) -> Columns {
-        let rows = || blocks.iter().flat_map(|b| &b.rows);
-        let most =
-            |of: fn(&Row) -> usize, least: usize| rows().map(of).max().unwrap_or(0).max(least);
-        let figure =
-            most(|r| width(&r.least).max(width(&r.mean)).max(width(&r.greatest)), "greatest".len());
-        let margin = most(|r| width(&r.margin), "margin".len());
-        let name =
-            rows().map(|r| width(&r.name)).filter(|&n| n <= MOST_NAME_COLUMNS).max().unwrap_or(0);
-        let name = name.max(8);
-        let taken = 4 + name + 3 * (figure + 2) + margin + 2 + 2 + VERDICT_COLUMNS + 2;
-        let strip = look.width.saturating_sub(taken).min(MOST_STRIP_COLUMNS);
-        let strip = if strip < LEAST_STRIP_COLUMNS { 0 } else { strip };
-        Columns { name, figure, margin, strip }
-    }
-
-    fn figures_from(&self) -> usize {
-        4 + self.name
-    }
-
-    fn heads(&self) -> String {
-        let figure = |head| format!("  {}", right(head, self.figure));
-        let margin = right("margin", self.margin);
-        format!("{}{}{}  {margin}", figure("least"), figure("mean"), figure("greatest"))
-    }
-
-    fn rows(&self, out: &mut String, block: &Block<'_>, look: Look) {
-        let (lower, upper) = block.limits;
-        let ends = block.rows.iter().filter_map(|r| r.band).flat_map(|(l, _, g)| [l, g]);
-        let scale = Scale::over(ends.chain(lower).chain(upper)).filter(|_| self.strip > 0);
-        for row in &block.rows {
-            if width(&row.name) > self.name {
-                out.push_str(&format!("    {}\n{}", row.name, blanks(4 + self.name)));
-            } else {
-                out.push_str(&format!("    {}", left(&row.name, self.name)));
-            }
-            let bad = row.standing.is_some_and(Standing::is_bad);
-            let role = if bad { Role::Bad } else { Role::Plain };
-            let mut line = String::new();
-            if row.band.is_some() {
-                for figure in [&row.least, &row.mean, &row.greatest] {
-                    line.push_str(&format!("  {}", right(figure, self.figure)));
-                }
-            } else {
-                line.push_str(&left("  not computed", 3 * (self.figure + 2)));
-            }
-            let margin = right(&row.margin, self.margin);
-            line.push_str(&format!("  {}", look.paint(role, &margin)));
-            let (role, word) = verdict(row.standing);
-            line.push_str(&format!("  {}", look.paint(role, &left(&word, VERDICT_COLUMNS))));
-            if let (Some(scale), Some((least, mean, greatest))) = (scale, row.band) {
-                let (lower, upper) = row.standing.map_or((None, None), |_| (lower, upper));
-                let band = Band { least, mean, greatest, lower, upper };
-                line.push_str(&format!("  {}", strip(band, scale, self.strip, look)));
-            }
-            out.push_str(line.trim_end());
-            out.push('\n');
-            if !row.aside.is_empty() {
-                paragraph(out, self.figures_from() + 2, &row.aside, Role::Quiet, look);
-            }
-        }
-    }
-}
-
-/// The verdict as written and its colour: what needs a reader stands in capitals.
-fn verdict(standing: Option<Standing>) -> (Role, String) {
-    match standing {
-        None => (Role::Plain, String::new()),
-        Some(standing) if standing.is_bad() => (Role::Bad, standing.word().to_uppercase()),
-        Some(Standing::Conceded) => (Role::Warn, Standing::Conceded.word().to_string()),
-        Some(standing) => (Role::Good, standing.word().to_string()),
-    }
 }

@@ -3,11 +3,11 @@
 
 use super::{
     ContributorEntry, Document, FindingEntry, LabelEntry, Map, RequirementEntry, ResultEntry,
-    SCHEMA, SpecEntry, SummaryEntry, WindowEntry, YieldEntry,
+    SCHEMA, ShopCardEntry, SpecEntry, SummaryEntry, WindowEntry, YieldEntry,
 };
 use crate::diagnostic::{Diagnostic, Label};
 use crate::report::summary::summary;
-use crate::report::{Account, Case, Contribution, Coordinate, Figure, Report, Spec};
+use crate::report::{Account, Case, Contribution, Coordinate, Figure, Report, ShopCard, Spec};
 use crate::source::Sources;
 use crate::units::{Unit, find};
 
@@ -39,12 +39,31 @@ fn spec(spec: &Spec) -> SpecEntry {
         results: account.map_or_else(Vec::new, |a| a.figures.iter().map(result).collect()),
         requirements: account
             .map_or_else(Vec::new, |a| a.cases.iter().map(|c| requirement(a, c)).collect()),
+        shop_cards: account.map_or_else(Vec::new, |a| {
+            a.shop.iter().map(|card| shop_card(card, a.temperature)).collect()
+        }),
         assembly_yield: account.and_then(|a| a.failing).map(|f| YieldEntry {
             share: number(1.0 - f.share),
             interval: [number(1.0 - f.interval.1), number(1.0 - f.interval.0)],
             draws: f.draws,
         }),
         findings: spec.findings.iter().map(|d| finding(d, &spec.sources)).collect(),
+    }
+}
+
+fn shop_card(card: &ShopCard, temperature: &'static Unit) -> ShopCardEntry {
+    let of = |kelvin: Option<f64>| kelvin.and_then(|t| value(t, temperature));
+    ShopCardEntry {
+        joint: card.joint.clone(),
+        outer: card.outer.clone(),
+        inner: card.inner.clone(),
+        unit: temperature.symbol,
+        day: card.day.clone(),
+        ambient: of(Some(card.ambient)),
+        clearance: find("mm").and_then(|mm| value(card.clearance, mm)),
+        heat_outer: of(card.heat),
+        outer_limit: of(card.limit),
+        chill_inner: of(card.chill),
     }
 }
 
