@@ -195,6 +195,11 @@ fn only_tests_import_all(complaint: &str) -> bool {
         .all(|l| matches!(l.trim(), "use super::*;" | "use proptest::prelude::*;"))
 }
 
+/// What no text of a spec provokes, but bytes, files or the call; `tests/findings_doc.rs` says where
+/// each is.
+const BY_CALL: [Code; 5] =
+    [Code::NotText, Code::FileUnreadable, Code::RecordMissing, Code::RecordStale, Code::ThinMargin];
+
 #[test]
 fn every_code_is_explained_and_provoked() {
     let explained = fs::read_to_string(root().join("docs/findings.md")).unwrap();
@@ -208,7 +213,7 @@ fn every_code_is_explained_and_provoked() {
         if !explained.contains(&format!("\n## {}\n", code.text())) {
             missing.push(format!("docs/findings.md has no section `{}`", code.text()));
         }
-        if !provoked.contains(code.text()) {
+        if !provoked.contains(code.text()) && !BY_CALL.contains(code) {
             missing.push(format!("tests/bad has no spec that provokes `{}`", code.text()));
         }
     }
