@@ -248,7 +248,13 @@ impl Run<'_> {
     fn windows(&mut self) {
         for at in 0..self.evaluation.verdicts.len() {
             let verdict = &self.evaluation.verdicts[at];
-            let wanted = self.detail == Detail::Full || verdict.outcome != Outcome::Holds;
+            // What has no bounds here has none nearby, and looking for them everywhere is slow.
+            let unbounded = |f: usize| {
+                let range = &self.evaluation.figures[f].range;
+                !range.least.bound.is_finite() || !range.greatest.bound.is_finite()
+            };
+            let wanted = (self.detail == Detail::Full || verdict.outcome != Outcome::Holds)
+                && !verdict.figure.is_some_and(unbounded);
             let Some(figure) = verdict.figure.filter(|_| wanted) else { continue };
             let members = &self.evaluation.figures[figure].members;
             let found = window::window(self.assembly, verdict, members);
