@@ -40,7 +40,11 @@ pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec
             words::name(&material.name)
         );
         let (code, help) = if beyond.extrapolated {
-            (Code::DataExtrapolated, "figures beyond the data are an extrapolation".to_string())
+            (
+                Code::DataExtrapolated,
+                "have the material measured that far, or keep the condition within its data"
+                    .to_string(),
+            )
         } else {
             (
                 Code::TemperatureOutsideData,

@@ -5,8 +5,8 @@ use super::standing::{accepted, in_force};
 use super::words;
 use crate::diagnostic::{Code, Diagnostic};
 use crate::evaluate::Evaluation;
-use crate::evaluate::outcome::Outcome;
-use crate::model::Assembly;
+use crate::evaluate::outcome::{Outcome, Verdict};
+use crate::model::{Assembly, Concession, Requirement};
 
 pub(super) fn find(
     assembly: &Assembly,
@@ -47,7 +47,7 @@ pub(super) fn find(
             .help("have it renewed, or mend the requirement")
         } else if failing.iter().all(|v| accepted(requirement, concession, evaluation, v)) {
             let approved = match &concession.approved {
-                Some(who) => format!(", approved {who}"),
+                Some(who) => format!(", approved by {who}"),
                 None => String::new(),
             };
             Diagnostic::new(
@@ -59,10 +59,30 @@ pub(super) fn find(
             Diagnostic::new(
                 Code::ConcessionExceeded,
                 concession.span,
-                format!("concession {id} accepts {value}, which is not enough"),
+                format!("concession {id} accepts {value}, and the requirement goes beyond"),
             )
-            .help("what was accepted is exceeded, so the requirement fails")
+            .here(reached(requirement, concession, evaluation, &failing))
+            .help("have the greater departure accepted, or mend the requirement")
         };
         found.push(diagnostic);
     }
+}
+
+/// The worst value on the side that the concession is about.
+fn reached(
+    requirement: &Requirement,
+    concession: &Concession,
+    evaluation: &Evaluation,
+    failing: &[&Verdict],
+) -> String {
+    let figures = failing.iter().filter_map(|v| v.figure).map(|f| &evaluation.figures[f].range);
+    let below = requirement.lower.as_ref().is_some_and(|l| concession.accepts < l.value);
+    let (word, worst, round) = if below {
+        let least = figures.map(|r| r.least.bound).fold(f64::INFINITY, f64::min);
+        ("least", least, Round::Down)
+    } else {
+        let greatest = figures.map(|r| r.greatest.bound).fold(f64::NEG_INFINITY, f64::max);
+        ("greatest", greatest, Round::Up)
+    };
+    format!("{word} {}", with_unit(worst, requirement.unit, round))
 }

@@ -16,12 +16,12 @@ pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec
         let subject = assembly.subject(id);
         let (word, cure) = match &subject.kind {
             SubjectKind::Gap(_) if !starts_a_restraint(assembly, id) => (
-                "the gap closes",
+                "parts overlap in the gap",
                 "beyond contact the parts press on each other: a `restraint` with `start gap` \
                  computes the force",
             ),
             SubjectKind::Fit(fit) if fit.joint.is_none() => (
-                "the parts interfere",
+                "parts interfere in the fit",
                 "from contact on the free sizes no longer hold: a `joint` block computes pressure \
                  and stress",
             ),
@@ -31,7 +31,10 @@ pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec
             .figures
             .iter()
             .filter(|f| {
-                f.subject == id && matches!(f.quantity, Quantity::Gap | Quantity::Clearance)
+                // Which member of a set is put in is chosen so that it does not come to this.
+                f.subject == id
+                    && f.members.is_empty()
+                    && matches!(f.quantity, Quantity::Gap | Quantity::Clearance)
             })
             .filter(|f| f.range.least.reached < -LIMIT_SLACK * assembly.defaults.length.to_si(1.0))
             .collect();
@@ -46,7 +49,7 @@ pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec
         conditions.dedup();
         let by = with_unit(-deepest.range.least.bound, assembly.defaults.length, Round::Up);
         let message = format!(
-            "{word} in {} by up to {by} at {}",
+            "{word} {} by up to {by} at {}",
             words::name(&subject.name),
             conditions.join(", ")
         );

@@ -10,9 +10,12 @@ use crate::evaluate::Evaluation;
 use crate::evaluate::outcome::{Figure, Outcome, Side, Verdict};
 use crate::model::{Assembly, Limit, Quantity, Requirement, Unknown};
 use crate::numeric::tolerance::LIMIT_SLACK;
+use crate::units::Kind;
 
 /// How many contributors a finding labels.
 const LABELLED: usize = 3;
+/// A size that moves its gap less than this share of its own change is no cure.
+const LEAST_LEVER: f64 = 0.1;
 
 pub(super) fn find(
     assembly: &Assembly,
@@ -85,6 +88,7 @@ fn finding(
         Side::Greatest => (worst.figure.range.greatest.bound, Round::Up, "above"),
     };
     let unit = requirement.unit;
+    let of_yield = share_of(requirement);
     let value = number::with_unit(end, unit, round);
     let limit = number::with_unit(worst.limit.value, unit, Round::Nearest);
     let short = number::difference_with_unit(worst.short, unit, Round::Up);
@@ -98,8 +102,14 @@ fn finding(
         Some(c) => format!(" at {}", words::name(&assembly.condition(c).name)),
         None => String::new(),
     };
-    let message = format!("{what} is {short} {beyond} its limit{at}");
-    let mut here = format!("{word} {value}{}, limit {limit}", aside(requirement, end));
+    if worst.short.is_infinite() {
+        return unbounded(requirement, &format!("{what} has no bound{at}"), &limit, side);
+    }
+    let message = format!("{what} is {short}{of_yield} {beyond} its limit{at}");
+    let mut here = format!(
+        "{word} {value}{of_yield}{}, limit {limit}{of_yield}",
+        aside(requirement, end, side)
+    );
     if broken.len() > 1 {
         let others: Vec<String> = broken[1..].iter().map(|b| at_condition(assembly, b)).collect();
         here.push_str(&format!("; also {}", others.join(", ")));
@@ -132,14 +142,30 @@ fn finding(
     }
 }
 
+/// A quantity that grows without end somewhere within the tolerances.
+fn unbounded(requirement: &Requirement, message: &str, limit: &str, side: Side) -> Diagnostic {
+    let direction = if side == Side::Least { "falls" } else { "rises" };
+    Diagnostic::new(code(requirement.quantity, side), requirement.span, message)
+        .here(format!("it {direction} without end, limit {limit}"))
+        .help("a divisor passes through zero within the tolerances: narrow them, or limit it first")
+}
+
 /// A negative clearance is also the interference it is, and the reverse.
-fn aside(requirement: &Requirement, value: f64) -> String {
+fn aside(requirement: &Requirement, value: f64, side: Side) -> String {
     let other = match requirement.quantity {
         Quantity::Clearance | Quantity::RadialClearance if value < 0.0 => "interference",
         Quantity::Interference if value < 0.0 => "clearance",
         _ => return String::new(),
     };
-    format!(" ({other} {})", number::with_unit(-value, requirement.unit, Round::Nearest))
+    // The same digits as the value itself, which was rounded the other way.
+    let round = if side == Side::Least { Round::Up } else { Round::Down };
+    format!(" ({other} {})", number::with_unit(-value, requirement.unit, round))
+}
+
+/// What a share is of.
+fn share_of(requirement: &Requirement) -> &'static str {
+    let limits = [&requirement.lower, &requirement.upper];
+    if limits.into_iter().flatten().any(|limit| limit.of_yield) { " of yield" } else { "" }
 }
 
 fn at_condition(assembly: &Assembly, broken: &Broken<'_>) -> String {
@@ -175,12 +201,10 @@ fn mend(
             room_up = room_up.min(u.value - range.greatest.bound);
         }
     }
-    // A size that hardly moves the quantity is no cure.
-    let size = worst
-        .verdict
-        .contributors
-        .iter()
-        .find(|c| matches!(c.unknown, Unknown::Size { .. }) && c.sensitivity.abs() > 0.1);
+    let size =
+        worst.verdict.contributors.iter().find(|c| {
+            matches!(c.unknown, Unknown::Size { .. }) && c.sensitivity.abs() > LEAST_LEVER
+        });
     let shift = if raise > 0.0 && room_up >= raise {
         Some(raise)
     } else if lower > 0.0 && room_down >= lower {
@@ -189,21 +213,29 @@ fn mend(
         None
     };
     let unit = requirement.unit;
+    let everywhere = if verdicts.len() > 1 { " at every condition" } else { "" };
     match (shift, size) {
-        (Some(shift), Some(size)) if unit.kind == crate::units::Kind::LENGTH => {
+        (Some(shift), Some(size)) if is_a_sum(requirement.quantity, unit.kind) => {
             let change = shift / size.sensitivity;
             Some(format!(
-                "it holds at every condition with {} {} {}",
+                "it holds{everywhere} with {} {} {}",
                 words::name(&words::unknown(assembly, size.unknown)),
                 number::difference_with_unit(change.abs(), unit, Round::Up),
                 if change > 0.0 { "larger" } else { "smaller" },
             ))
         }
-        (Some(shift), _) => Some(format!(
-            "it holds at every condition if the mean moves {} by {}",
-            if shift > 0.0 { "up" } else { "down" },
-            number::difference_with_unit(shift.abs(), unit, Round::Up),
-        )),
+        (Some(shift), _) => {
+            let direction = if shift > 0.0 { "up" } else { "down" };
+            let by = number::difference_with_unit(shift.abs(), unit, Round::Up);
+            Some(match worst.verdict.contributors.first() {
+                Some(largest) => format!(
+                    "all of it must move {direction} by {by}{everywhere}, or the range become \
+                     narrower; {} is the widest contributor",
+                    words::name(&words::unknown(assembly, largest.unknown)),
+                ),
+                None => format!("all of it must move {direction} by {by}{everywhere}"),
+            })
+        }
         (None, _) => {
             // What is left once the nominal is centred.
             let excess = -(room_down + room_up);
@@ -217,6 +249,19 @@ fn mend(
             ))
         }
     }
+}
+
+/// True for what follows its sizes in proportion, so that a change of one can be named.
+fn is_a_sum(quantity: Quantity, kind: Kind) -> bool {
+    let of_sizes = matches!(
+        quantity,
+        Quantity::Clearance
+            | Quantity::RadialClearance
+            | Quantity::Interference
+            | Quantity::Gap
+            | Quantity::Value
+    );
+    of_sizes && kind == Kind::LENGTH
 }
 
 fn code(quantity: Quantity, side: Side) -> Code {

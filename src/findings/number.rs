@@ -26,6 +26,7 @@ pub fn decimals(unit: &Unit) -> usize {
         "thou" => 2,
         "deg" => 3,
         "degC" | "degF" | "K" | "MPa" | "bar" => 1,
+        "N*m" | "lbf*in" | "lbf*ft" => 1,
         "N" | "lbf" | "psi" | "kPa" | "Pa" | "rpm" => 0,
         "kN" | "kN/mm" | "GPa" | "%" => 2,
         "ppm" => 0,

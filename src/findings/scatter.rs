@@ -37,7 +37,7 @@ pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec
                             words::name(&part.material.name)
                         ),
                     )
-                    .help("state its scatter in ppm/K"),
+                    .help("state its scatter in ppm/K, such as `±0.3 ppm/K`"),
                 );
             }
         }

@@ -20,7 +20,8 @@ pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec
             ),
         )
         .here(format!(
-            "needed from {} to {}",
+            "with its first member {} comes out from {} to {} at reference",
+            measured(assembly, &selection.requirements),
             with_unit(selection.occurs.0, unit, Round::Down),
             with_unit(selection.occurs.1, unit, Round::Up)
         ));
@@ -44,8 +45,15 @@ pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec
                 }
             })
             .collect();
-        found.push(
-            diagnostic.help(format!("add a member where they leave room: {}", covered.join("; "))),
-        );
+        found.push(diagnostic.help(format!(
+            "add a member where these leave room: counted in the same way, {}",
+            covered.join("; ")
+        )));
     }
+}
+
+/// What the assemblies are told apart by: the subject of the first requirement on the set.
+fn measured(assembly: &Assembly, requirements: &[usize]) -> String {
+    let first = requirements.first().map(|&index| &assembly.requirements[index]);
+    first.map_or_else(String::new, |r| words::name(&assembly.subject(r.subject).name))
 }

@@ -10,6 +10,14 @@ pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec
     for verdict in evaluation.verdicts.iter().filter(|v| v.outcome == Outcome::Undecided) {
         let requirement = &assembly.requirements[verdict.requirement];
         // Where nothing could be computed, the reason is a finding of its own.
+        // Where a set leaves assemblies unserved, that is the finding.
+        let of_set = evaluation
+            .selections
+            .iter()
+            .any(|s| s.outcome != Outcome::Holds && s.requirements.contains(&verdict.requirement));
+        if of_set {
+            continue;
+        }
         let Some(figure) = verdict.figure.map(|f| &evaluation.figures[f]) else { continue };
         let at = match verdict.condition {
             Some(c) => format!(" at {}", words::name(&assembly.condition(c).name)),
@@ -26,9 +34,9 @@ pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec
             )
         } else {
             (
-                format!("{name} is not defined for everything the limits allow{at}"),
-                "a division by zero, or a root, logarithm or arc function outside its range, lies \
-                 within the tolerances",
+                format!("{name} has no value for some cases within the tolerances{at}"),
+                "there a divisor is zero, or a root or arc function is out of its range: narrow the \
+                 tolerances, or write the expression without it",
             )
         };
         found.push(Diagnostic::new(Code::NotDecided, requirement.span, message).help(help));

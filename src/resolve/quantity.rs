@@ -24,8 +24,10 @@ use crate::units::{Kind, Unit};
 /// What a number is expected to be, which decides the unit of a bare one.
 #[derive(Debug, Clone, Copy, PartialEq, Eq)]
 pub(crate) enum Expect {
-    /// A length that follows the file's `lengths in`.
+    /// A length that follows the file's `lengths in`, and may be a tolerance class.
     Size,
+    /// A length as the limit of a requirement: as a size, and never a class.
+    Limit,
     /// A temperature that follows the file's `temperatures in`.
     Temperature,
     /// A difference of temperatures; bare, in the degrees of the file.
@@ -40,7 +42,7 @@ impl Expect {
     /// The kind of quantity.
     pub(crate) fn kind(self) -> Kind {
         match self {
-            Expect::Size => Kind::LENGTH,
+            Expect::Size | Expect::Limit => Kind::LENGTH,
             Expect::Temperature => Kind::TEMPERATURE,
             Expect::Difference => Kind::DIFFERENCE,
             Expect::Strain => Kind::PURE,
@@ -51,7 +53,7 @@ impl Expect {
     /// What a limit of that kind is expected to be: lengths and temperatures follow the file.
     pub(crate) fn limit(kind: Kind) -> Self {
         match kind {
-            Kind::LENGTH => Expect::Size,
+            Kind::LENGTH => Expect::Limit,
             Kind::TEMPERATURE => Expect::Temperature,
             Kind::DIFFERENCE => Expect::Difference,
             kind => Expect::Of(kind),
@@ -62,7 +64,7 @@ impl Expect {
     pub(crate) fn bare(self, cx: &Context, file: FileId) -> Option<&'static Unit> {
         let defaults = cx.head(file).defaults;
         match self {
-            Expect::Size => Some(defaults.length),
+            Expect::Size | Expect::Limit => Some(defaults.length),
             Expect::Temperature | Expect::Difference => Some(defaults.temperature),
             Expect::Strain => Some(known("")),
             Expect::Of(kind) if kind == Kind::PURE => Some(known("")),

@@ -41,7 +41,8 @@ impl<'t> Resolver<'_, '_, 't> {
             Some(stated) => self.concession(stated, written, kind, &limits),
             None => None,
         };
-        let unit = match kind == Kind::PURE {
+        let shares = kind == Kind::PURE || written.limit.of_yield.is_some();
+        let unit = match shares {
             true => limits.unit,
             false => self.cx.head(written.span.file).defaults.shown(kind),
         };

@@ -220,7 +220,7 @@ fn is_temperature(expect: Expect) -> bool {
 /// The file's own unit where bare sizes and temperatures have one.
 fn own_unit(cx: &Context, span: Span, expect: Expect) -> Option<&'static Unit> {
     match expect {
-        Expect::Size | Expect::Temperature => expect.bare(cx, span.file),
+        Expect::Size | Expect::Limit | Expect::Temperature => expect.bare(cx, span.file),
         _ => None,
     }
 }

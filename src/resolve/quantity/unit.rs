@@ -59,8 +59,14 @@ pub(crate) fn unit_for(
     if measures(unit, expect) {
         return Some(unit);
     }
+    // The grade of a class is easily forgotten, and `42 K` is then a temperature.
+    let letters = written.value.as_str();
     let finding = wrong_kind(written, unit, expect.kind());
-    cx.refuse(finding)
+    let a_class = expect == Expect::Size && letters.len() == 1 && unit.kind == Kind::TEMPERATURE;
+    cx.refuse(match a_class {
+        true => finding.help(format!("a class needs its grade, as `{letters}6`")),
+        false => finding,
+    })
 }
 
 /// True where a unit measures what is expected; temperatures and their differences share units.
@@ -84,11 +90,6 @@ pub(crate) fn wrong_kind(written: &tree::Unit, unit: &Unit, expected: Kind) -> D
             unit.kind.word()
         ),
     );
-    // The grade of a class is easily forgotten, and `42 K` is then a temperature.
-    let letters = written.value.as_str();
-    if expected == Kind::LENGTH && letters.len() == 1 && unit.kind == Kind::TEMPERATURE {
-        return finding.help(format!("a class needs its grade, as `{letters}6`"));
-    }
     let scale = if expected == Kind::DIFFERENCE { Kind::TEMPERATURE } else { expected };
     let known: Vec<String> = units::all()
         .filter(|unit| unit.kind == scale && !unit.name.is_empty())
