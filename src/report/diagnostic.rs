@@ -81,9 +81,15 @@ fn place(out: &mut String, diagnostic: &Diagnostic, sources: &Sources, look: Loo
     let (line, column) = source.position(span.start as usize);
     let place = visible(&format!("  {}:{line}:{column}", source.name()));
     let code = diagnostic.code.text();
-    let between = look.width.saturating_sub(width(&place) + code.len()).max(2);
-    let code = look.paint(Role::Quiet, code);
-    out.push_str(&format!("{}{}{code}\n", look.paint(Role::Quiet, &place), blanks(between)));
+    let used = width(&place) + 2 + code.len();
+    let shown = look.paint(Role::Quiet, code);
+    let place = look.paint(Role::Quiet, &place);
+    if used <= look.width {
+        out.push_str(&format!("{place}{}{shown}\n", blanks(look.width - used + 2)));
+    } else {
+        let lead = blanks(look.width.saturating_sub(code.len()));
+        out.push_str(&format!("{place}\n{lead}{shown}\n"));
+    }
 }
 
 /// One line of a spec and what is said on it.

@@ -145,14 +145,7 @@ fn required<'a>(account: &Account, kind: &'static str, cases: &[&'a Case]) -> Bl
         _ => format!(", {}", case.method),
     };
     let what = what(case.measure, &case.quantity);
-    let unit = case.unit.symbol;
-    // A limit that was written with a unit of its own keeps it.
-    let has_unit = case.limits.contains(|c: char| c.is_alphabetic() || c == '%' || c == '°');
-    let limits = if unit.is_empty() || has_unit {
-        case.limits.clone()
-    } else {
-        format!("{} {unit}", case.limits)
-    };
+    let limits = with_unit(&case.limits, case.unit);
     let rows = cases
         .iter()
         .map(|case| match case.figure.map(|f| &account.figures[f]) {
@@ -168,6 +161,21 @@ fn required<'a>(account: &Account, kind: &'static str, cases: &[&'a Case]) -> Bl
         shows: Some((&case.quantity, case.unit)),
         rows,
         limits: (case.lower, case.upper),
+    }
+}
+
+/// Limits as written, with the unit of the figures where that is not what they were written in.
+fn with_unit(limits: &str, unit: &'static Unit) -> String {
+    let is_own =
+        |word: &str| word == unit.name || word == unit.symbol || unit.spellings.contains(&word);
+    let mut words = limits.split(' ').map(|w| w.trim_start_matches(|c: char| !c.is_alphabetic()));
+    let has_unit = limits.contains(|c: char| c.is_alphabetic() || c == '%' || c == '°');
+    if unit.symbol.is_empty() || limits.contains('%') || words.any(is_own) {
+        limits.to_string()
+    } else if has_unit {
+        format!("{limits}, in {}", unit.symbol)
+    } else {
+        format!("{limits} {}", unit.symbol)
     }
 }
 
@@ -191,4 +199,21 @@ fn what(measure: Option<Measure>, quantity: &str) -> String {
     let quantity = if matches!(quantity, "gap" | "value") { "" } else { quantity };
     let words = [measure.map_or("", Measure::word), quantity];
     words.into_iter().filter(|word| !word.is_empty()).collect::<Vec<_>>().join(" ")
+}
+
+#[cfg(test)]
+mod tests {
+    use super::with_unit;
+    use crate::units::find;
+
+    #[test]
+    fn figures_say_their_unit_once() {
+        let shown = |limits, unit| with_unit(limits, find(unit).unwrap());
+        assert_eq!(shown("0 .. 0.030", "mm"), "0 .. 0.030 mm");
+        assert_eq!(shown(">= 6 kN", "N"), ">= 6 kN, in N");
+        assert_eq!(shown("<= 120MPa", "MPa"), "<= 120MPa");
+        assert_eq!(shown("<= 3 deg", "deg"), "<= 3 deg");
+        assert_eq!(shown("<= 85 % of yield", "%"), "<= 85 % of yield");
+        assert_eq!(shown(">= 1.2", ""), ">= 1.2");
+    }
 }
