@@ -1,5 +1,6 @@
 //! Values that others have published, one module a subject.
 
+mod ansi_b4_1;
 mod bolted;
 mod distributions;
 mod drawn_shares;
@@ -14,4 +15,5 @@ mod joining;
 mod mixed_sums;
 mod press_fits;
 mod restrained;
+mod stack_ups;
 mod statistics;
