@@ -155,7 +155,8 @@ impl<'a> Search<'a> {
         let mut bound = f64::INFINITY;
         while let Some(worst) = open.pop() {
             bound = worst.bound.max(settled);
-            if bound <= self.reached + self.allowed() || looked_at >= self.most_boxes {
+            let close = bound.is_finite() && bound <= self.reached + self.allowed();
+            if close || looked_at >= self.most_boxes {
                 break;
             }
             let Some((first, second)) = self.split(&worst.piece) else {
@@ -175,7 +176,7 @@ impl<'a> Search<'a> {
             }
             bound = settled.max(self.reached);
         }
-        let met = bound <= self.reached + self.allowed();
+        let met = bound.is_finite() && bound <= self.reached + self.allowed();
         // Whatever was dropped lay at or below the value reached.
         let bound = bound.max(self.reached);
         match self.side {
