@@ -8,7 +8,7 @@ pub const EXTREME_GAP: f64 = 1e-9;
 pub const RELATIVE_GAP: f64 = 1e-10;
 
 /// Most boxes one search for an extreme may look at before it gives up and says so.
-pub const MOST_BOXES: usize = 100_000;
+pub const MOST_BOXES: usize = 20_000;
 
 /// How far, in the unit shown, a proven bound may lie beyond its limit and still hold: a fit whose
 /// least clearance is exactly zero must hold `>= 0` whatever the last bit says.
