@@ -7,10 +7,10 @@ lengths in mm
 temperatures in K
 reference 293.15 K
 
-condition room       293 ±3
-condition soak        77 ±1 { vessel 293; straps 170 ±25 }
-condition operate     60 ±2 { vessel 288 ±6; straps 150 .. 190 }
-condition cool_down   60 .. 293 { vessel 293; straps 100 .. 293 }
+condition room     293 ±3
+condition soak      77 ±1 { vessel 293; straps 170 ±25 }
+condition operate   60 ±2 { vessel 288 ±6; straps 150 .. 190 }
+condition cool_down 60 .. 293 { vessel 293; straps 100 .. 293 }
 
 part shelf of aluminium_6061_t6 {
   span      = 420 ±0.1

@@ -10,8 +10,8 @@ general ISO 2768-m
 
 condition cold_start -40
 condition assembly    20
-condition cruise      75 ±5  { ring 10 .. 20 K above housing; shaft 15 .. 25 K above housing }
-condition hot_climb  100 ±5  { ring 15 .. 25 K above housing; shaft 20 .. 30 K above housing }
+condition cruise      75 ±5 { ring 10 .. 20 K above housing; shaft 15 .. 25 K above housing }
+condition hot_climb  100 ±5 { ring 15 .. 25 K above housing; shaft 20 .. 30 K above housing }
 
 part housing of aluminium_alsi10mg {
   drawing "GB-110" rev "B"

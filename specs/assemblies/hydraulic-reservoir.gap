@@ -3,9 +3,9 @@
 assembly "Bootstrap reservoir"
 lengths in mm
 temperatures in degC
-condition cold     -40
-condition fill_day  15
-condition hot       90 { reservoir 5 K above }
+condition cold    -40
+condition fill_day 15
+condition hot      90 { reservoir 5 K above }
 
 part body of aluminium_6061_t6 {
   bore   = dia 60 H8

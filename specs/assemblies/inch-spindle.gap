@@ -7,9 +7,9 @@ temperatures in degF
 reference 68 degF
 general { .XX ±.010; .XXX ±.005; .XXXX ±.0005; angle ±0.5 deg }
 
-condition shop      68
-condition morning   40
-condition running  150 ±10 { spindle 20 .. 35 degF above head; bearing 10 .. 20 degF above head }
+condition shop     68
+condition morning  40
+condition running 150 ±10 { spindle 20 .. 35 degF above head; bearing 10 .. 20 degF above head }
 
 part head of iron_grey_250 {
   bore  = dia 2.0472 +.0007/0

@@ -6,18 +6,18 @@ drawing "RL-20" rev "A"
 lengths in mm
 temperatures in degC
 
-condition stowed  -30
-condition lab      20 ±2
-condition field   -10 .. 50
-condition sun      70 { cell 4 K above }
+condition stowed -30
+condition lab     20 ±2
+condition field  -10 .. 50
+condition sun     70 { cell 4 K above }
 
 part lens of glass_crown {
-  rim     = dia 49.90 0/-0.02
-  edge    = 6.20 ±0.03
+  rim  = dia 49.90 0/-0.02
+  edge = 6.20 ±0.03
 }
 part cell of aluminium_6061_t6 {
-  bore  = dia 50 H7
-  seat  = 6.50 ±0.02
+  bore = dia 50 H7
+  seat = 6.50 ±0.02
 }
 part spacer of pom_c {
   thickness = 0.25 ±0.02 at 23 degC

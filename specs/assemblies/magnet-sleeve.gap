@@ -19,7 +19,7 @@ part sleeve of nickel_718 {
 fit grip = core.outside in sleeve.bore {
   joint {
     length 50
-    core   solid
+    core solid
     sleeve outside sleeve.outside
   }
   require "SM-1" pressure >= 5 MPa at cold, hot

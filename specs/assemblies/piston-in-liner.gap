@@ -7,7 +7,7 @@ temperatures in degC
 condition cold_start -20
 condition bench       20
 condition load        95 ±5 { skirt 20 .. 30 K above liner }
-condition overheat   115    { skirt 35 K above liner }
+condition overheat   115 { skirt 35 K above liner }
 
 part liner of iron_grey_250 { bore = dia 86 +0.022/0 }
 part skirt of aluminium_4032_t6 { gauge = dia 85.84 0/-0.014 }

@@ -5,9 +5,9 @@ drawing "BP-15" rev "A"
 lengths in mm
 temperatures in degC
 
-condition cold     -30
-condition assembly  20
-condition hot       80 { hub 5 .. 10 K above shaft }
+condition cold    -30
+condition assembly 20
+condition hot      80 { hub 5 .. 10 K above shaft }
 
 part hub of aluminium_7075 {
   bore    = dia 40 H7
@@ -20,12 +20,12 @@ part shaft of steel_42crmo4 {
 
 fit seat = shaft.seat in hub.bore {
   joint {
-    length   40
-    hub      outside hub.outside
-    shaft    bore shaft.bore
+    length 40
+    hub outside hub.outside
+    shaft bore shaft.bore
     friction 0.12 .. 0.18
-    hub      Rz 4 um
-    shaft    Rz 4 um
+    hub Rz 4 um
+    shaft Rz 4 um
     insertion clearance 0.04
   }
   require "BP-1" torque >= 120 N*m

@@ -4,8 +4,8 @@ assembly "Gas engine head, exhaust seat insert"
 lengths in mm
 temperatures in degC
 
-condition assembly  20
-condition idle      90 { seat 20 .. 40 K above head }
+condition assembly   20
+condition idle       90 { seat 20 .. 40 K above head }
 condition full_load 160 ±10 { seat 80 .. 120 K above head }
 condition overrun   140 { seat 5 K below head }
 
@@ -21,8 +21,8 @@ part seat of steel_x40crmov5_1 {
 fit press = seat.outside in head.pocket {
   joint {
     length 6
-    head   outside head.wall
-    seat   bore seat.throat
+    head outside head.wall
+    seat bore seat.throat
   }
   require "GE-1" interference >= 0.02
     because "a seat that moves hammers itself loose"
