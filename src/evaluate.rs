@@ -125,15 +125,21 @@ impl Run<'_> {
         for quantity in self.shown_quantities(subject) {
             for condition in self.conditions(quantity) {
                 for members in &choices {
-                    self.figure(Asked {
-                        subject,
-                        quantity,
-                        condition,
-                        of_yield: false,
-                        members: members.clone(),
-                    });
+                    let shares = if self.yields(quantity) { &[false, true][..] } else { &[false] };
+                    for &of_yield in shares {
+                        let members = members.clone();
+                        self.figure(Asked { subject, quantity, condition, of_yield, members });
+                    }
                 }
             }
+        }
+    }
+
+    /// True for a stress in a material whose yield strength is known.
+    fn yields(&self, quantity: Quantity) -> bool {
+        match quantity {
+            Quantity::Stress(part) => self.assembly.part(part).material.yield_strength.is_some(),
+            _ => false,
         }
     }
 

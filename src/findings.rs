@@ -6,6 +6,7 @@
 mod beyond_data;
 mod concession;
 mod contact;
+mod full;
 mod limit;
 mod missing;
 pub mod number;
@@ -15,6 +16,7 @@ pub mod standing;
 pub mod thin_margin;
 mod undecided;
 pub mod words;
+mod yielding;
 
 use crate::diagnostic::Diagnostic;
 use crate::evaluate::Evaluation;
@@ -32,6 +34,8 @@ pub fn findings(assembly: &Assembly, evaluation: &Evaluation, today: &str) -> Ve
     missing::find(assembly, evaluation, &mut found);
     contact::find(assembly, evaluation, &mut found);
     limit::find(assembly, evaluation, today, &mut found);
+    yielding::find(assembly, evaluation, &mut found);
+    full::find(assembly, evaluation, &mut found);
     undecided::find(assembly, evaluation, &mut found);
     selection::find(assembly, evaluation, &mut found);
     concession::find(assembly, evaluation, today, &mut found);

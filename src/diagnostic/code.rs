@@ -279,6 +279,10 @@ codes! {
     UllageBelowLimit = "ullage-below-limit", Error;
     /// A cavity with more free volume than required.
     UllageAboveLimit = "ullage-above-limit", Error;
+    /// A ring or member that yields, where elastic figures end.
+    StressPastYield = "stress-past-yield", Error;
+    /// A charge that has no room left in its cavity.
+    CavityFull = "cavity-full", Error;
     /// A requirement that could be proven neither to hold nor to fail.
     NotDecided = "not-decided", Error;
     /// A spec without a record beside it, where one is asked for.
@@ -307,19 +311,6 @@ codes! {
     ConcessionExceeded = "concession-exceeded", Error;
     /// A concession for a requirement that holds.
     ConcessionUnused = "concession-unused", Warning;
-}
-
-impl Code {
-    /// True for what is said of a requirement; every other error is a mistake in the spec itself.
-    pub fn is_about_requirement(self) -> bool {
-        let first = Code::ClearanceBelowLimit as u32;
-        let last = Code::NotDecided as u32;
-        (first..=last).contains(&(self as u32))
-            || matches!(
-                self,
-                Code::SelectionIncomplete | Code::ConcessionExpired | Code::ConcessionExceeded
-            )
-    }
 }
 
 impl std::fmt::Display for Code {

@@ -75,6 +75,10 @@ pub fn line(report: &Report) -> String {
     } else if summary.wrong == 0 {
         parts.push("nothing is required".to_string());
     }
+    if summary.wrong == 0 && summary.hold == summary.requirements && summary.errors > 0 {
+        // All that is required may hold, and something still be wrong.
+        parts.push(count(summary.errors, "error besides", "errors besides"));
+    }
     parts.extend(tightest(report).map(tightest_words));
     if summary.warnings > 0 {
         parts.push(count(summary.warnings, "warning", "warnings"));

@@ -1,7 +1,7 @@
 assembly "Pin to be pressed out"
 lengths in mm
 condition shop 20
-part lever of steel_c45 {
+part lever of steel_42crmo4 {
   eye     = dia 12 H7
   outside = dia 24 ±0.1
 }

@@ -2,7 +2,7 @@ assembly "Gear shrunk on a shaft"
 lengths in mm
 temperatures in degC
 condition shop 20
-part gear of steel_c45 {
+part gear of steel_42crmo4 {
   bore    = dia 60 H7
   outside = dia 120 ±0.1
 }
