@@ -11,10 +11,10 @@ condition overrun   140 { seat 5 K below head }
 
 part head of aluminium_a356_t6 {
   pocket = dia 36 +0.016/0
-  wall   = dia 52 exact
+  wall   = dia 58 exact
 }
 part seat of steel_x40crmov5_1 {
-  outside = dia 36 +0.110/+0.094
+  outside = dia 36 +0.106/+0.092
   throat  = dia 29 ±0.05
 }
 
