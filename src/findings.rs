@@ -13,6 +13,7 @@ pub mod number;
 mod scatter;
 mod selection;
 pub mod standing;
+mod statistical;
 pub mod thin_margin;
 mod undecided;
 pub mod words;
@@ -34,6 +35,7 @@ pub fn findings(assembly: &Assembly, evaluation: &Evaluation, today: &str) -> Ve
     missing::find(assembly, evaluation, &mut found);
     contact::find(assembly, evaluation, &mut found);
     limit::find(assembly, evaluation, today, &mut found);
+    statistical::find(assembly, evaluation, &mut found);
     yielding::find(assembly, evaluation, &mut found);
     full::find(assembly, evaluation, &mut found);
     undecided::find(assembly, evaluation, &mut found);

@@ -8,7 +8,7 @@ use super::words;
 use crate::diagnostic::{Code, Diagnostic, Severity};
 use crate::evaluate::Evaluation;
 use crate::evaluate::outcome::{Figure, Outcome, Side, Verdict};
-use crate::model::{Assembly, Limit, Quantity, Requirement, Unknown};
+use crate::model::{Assembly, Limit, Method, Quantity, Requirement, Unknown};
 use crate::numeric::tolerance::LIMIT_SLACK;
 use crate::units::Kind;
 
@@ -24,6 +24,9 @@ pub(super) fn find(
     found: &mut Vec<Diagnostic>,
 ) {
     for index in 0..assembly.requirements.len() {
+        if assembly.requirements[index].method != Method::WorstCase {
+            continue;
+        }
         let verdicts: Vec<&Verdict> =
             evaluation.verdicts.iter().filter(|v| v.requirement == index).collect();
         for side in [Side::Least, Side::Greatest] {
@@ -264,7 +267,8 @@ fn is_a_sum(quantity: Quantity, kind: Kind) -> bool {
     of_sizes && kind == Kind::LENGTH
 }
 
-fn code(quantity: Quantity, side: Side) -> Code {
+/// The code of a limit passed on that side.
+pub(super) fn code(quantity: Quantity, side: Side) -> Code {
     let (below, above) = match quantity {
         Quantity::Clearance | Quantity::RadialClearance => {
             (Code::ClearanceBelowLimit, Code::ClearanceAboveLimit)
