@@ -12,6 +12,7 @@ mod missing;
 pub mod number;
 mod scatter;
 mod selection;
+mod speed;
 pub mod standing;
 mod statistical;
 pub mod thin_margin;
@@ -36,6 +37,7 @@ pub fn findings(assembly: &Assembly, evaluation: &Evaluation, today: &str) -> Ve
     contact::find(assembly, evaluation, &mut found);
     limit::find(assembly, evaluation, today, &mut found);
     statistical::find(assembly, evaluation, &mut found);
+    speed::find(assembly, &mut found);
     yielding::find(assembly, evaluation, &mut found);
     full::find(assembly, evaluation, &mut found);
     undecided::find(assembly, evaluation, &mut found);

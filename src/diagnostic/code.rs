@@ -281,6 +281,8 @@ codes! {
     UllageAboveLimit = "ullage-above-limit", Error;
     /// A ring or member that yields, where elastic figures end.
     StressPastYield = "stress-past-yield", Error;
+    /// A part that turns, whose growth by rotation is not computed.
+    SpeedWithoutEffect = "speed-without-effect", Warning;
     /// A charge that has no room left in its cavity.
     CavityFull = "cavity-full", Error;
     /// A requirement that could be proven neither to hold nor to fail.

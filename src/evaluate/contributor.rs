@@ -6,20 +6,7 @@
 
 use super::outcome::{Contributor, Range};
 use super::scene::Response;
-
-/// Nodes and weights of six-point Gauss–Legendre quadrature on 0 … 1 (Abramowitz and Stegun, table
-/// 25.4, halved).
-const GAUSS: [(f64, f64); 6] = [
-    (0.033_765_242_898_423_99, 0.085_662_246_189_585_17),
-    (0.169_395_306_766_867_74, 0.180_380_786_524_069_3),
-    (0.380_690_406_958_401_55, 0.233_956_967_286_345_52),
-    (0.619_309_593_041_598_4, 0.233_956_967_286_345_52),
-    (0.830_604_693_233_132_3, 0.180_380_786_524_069_3),
-    (0.966_234_757_101_576, 0.085_662_246_189_585_17),
-];
-
-/// Pieces of the line that are integrated one by one, so that a kink spoils only one of them.
-const PIECES: usize = 2;
+use crate::numeric::quadrature::gauss_legendre_16;
 
 /// The contributors to a range, largest first.
 pub(crate) fn contributors(response: &Response, range: &Range) -> Vec<Contributor> {
@@ -27,16 +14,13 @@ pub(crate) fn contributors(response: &Response, range: &Range) -> Vec<Contributo
     let to: Vec<f64> = range.greatest.corner.iter().map(|c| c.1).collect();
     let mut parts = vec![0.0; response.unknowns.len()];
     let mut point = from.clone();
-    for piece in 0..PIECES {
-        for (node, weight) in GAUSS {
-            let t = (piece as f64 + node) / PIECES as f64;
-            for ((x, a), b) in point.iter_mut().zip(&from).zip(&to) {
-                *x = a + t * (b - a);
-            }
-            let (_, slopes) = response.tape.gradient(&point);
-            for ((part, slope), (a, b)) in parts.iter_mut().zip(&slopes).zip(from.iter().zip(&to)) {
-                *part += slope * (b - a) * weight / PIECES as f64;
-            }
+    for (t, weight) in gauss_legendre_16().points(0.0, 1.0) {
+        for ((x, a), b) in point.iter_mut().zip(&from).zip(&to) {
+            *x = a + t * (b - a);
+        }
+        let (_, slopes) = response.tape.gradient(&point);
+        for ((part, slope), (a, b)) in parts.iter_mut().zip(&slopes).zip(from.iter().zip(&to)) {
+            *part += slope * (b - a) * weight;
         }
     }
     let (_, sensitivities) = response.tape.gradient(&response.middle);

@@ -33,6 +33,12 @@ impl GaussLegendre {
         GaussLegendre { nodes }
     }
 
+    /// Nodes and weights of the rule on `a … b`.
+    pub fn points(&self, a: f64, b: f64) -> impl Iterator<Item = (f64, f64)> + '_ {
+        let (centre, half) = (0.5 * (a + b), 0.5 * (b - a));
+        self.nodes.iter().map(move |&(x, w)| (centre + half * x, half * w))
+    }
+
     /// Integrates `f` from `a` to `b`.
     pub fn integrate(&self, a: f64, b: f64, mut f: impl FnMut(f64) -> f64) -> f64 {
         let (centre, half) = (0.5 * (a + b), 0.5 * (b - a));

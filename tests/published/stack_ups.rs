@@ -2,7 +2,7 @@
 
 use crate::support::{Run, assert_range, run};
 use gapkeep::evaluate::respond;
-use gapkeep::model::{ConditionId, Quantity};
+use gapkeep::model::{ConditionId, Quantity, Unknown};
 
 fn spec(unit: &str, body: &str) -> Run {
     run(&format!(
@@ -104,24 +104,26 @@ fn contact_angle_of_an_overrunning_clutch() {
 #[test]
 fn an_end_gauge_and_its_sensitivities() {
     // JCGM 100:2008, annex H.1: l = l_S + d − l_S(δα·θ + α_S·δθ). To first order the coefficient of
-    // expansion of the standard does not enter; the difference of temperatures enters with
-    // l_S·α_S = 575 nm/K.
-    let run =
-        run("assembly \"gauge\"\nlengths in nm\ntemperatures in degC\ncondition bench 19.9\n\
-         material gauge_steel { cte 11.5 ±2 ppm/K; source \"JCGM 100, H.1\" }\n\
-         part standard of gauge_steel lot \"one\" { length = 50000623 ±75 }\n\
-         part block of gauge_steel lot \"one\" { length = 50000838 ±75 }\n\
+    // the standard does not enter; a difference of temperature enters with l_S·α_S = 575 nm/K (u of
+    // 16.6 nm for 0.029 K), one of coefficients with l_S·θ = 5 nm for 1e-6/K at 0.1 K.
+    let run = run("assembly \"gauge\"\nlengths in nm\ntemperatures in degC\n\
+         condition bench 19.9 { block 0 ±0.05 K above }\n\
+         material gauge_steel { cte 11.5 ±1 ppm/K; source \"JCGM 100, H.1\" }\n\
+         part standard of gauge_steel { length = 50000623 ±75 }\n\
+         part block of gauge_steel { length = 50000838 ±75 }\n\
          gap difference = block.length - standard.length\n");
     let figure = run.figure("difference", Quantity::Gap, Some("bench"));
     let response =
         respond(&run.assembly, figure.subject, Quantity::Gap, Some(ConditionId(0))).unwrap();
     let (value, slopes) = response.tape.gradient(&response.middle);
     assert!((value * 1e9 - 215.0).abs() < 1e-2, "{value}");
-    // Both expand with the same scatter: a lot at its limit moves 50 mm by 10 nm, the difference by
-    // next to nothing.
-    let at = response
-        .unknowns
-        .iter()
-        .position(|u| matches!(u, gapkeep::model::Unknown::ExpansionScatter(_)));
-    assert!((slopes[at.unwrap()] * 1e9).abs() < 1e-4);
+    let slope = |wanted: fn(&Unknown) -> bool| {
+        let found = response.unknowns.iter().zip(&slopes).filter(|(u, _)| wanted(u));
+        found.map(|(_, s)| s * 1e9).collect::<Vec<f64>>()
+    };
+    let temperature = slope(|u| matches!(u, Unknown::OwnTemperature { .. }));
+    assert!((temperature[0] - 575.0).abs() < 0.1, "{temperature:?}");
+    let scatter = slope(|u| matches!(u, Unknown::ExpansionScatter(_)));
+    assert_eq!(scatter.len(), 2);
+    assert!((scatter[0].abs() - 5.0).abs() < 1e-3 && (scatter[0] + scatter[1]).abs() < 1e-3);
 }
