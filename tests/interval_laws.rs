@@ -40,6 +40,16 @@ fn run(name: &str, x: Interval, y: Option<Interval>) -> Interval {
 }
 
 #[test]
+fn the_middle_is_finite_whatever_the_ends() {
+    let (inf, max) = (f64::INFINITY, f64::MAX);
+    for (lo, hi) in [(inf, inf), (max, inf), (-inf, -inf), (-inf, 3.0), (3.0, inf), (-max, max)] {
+        let mid = Interval::new(lo, hi).mid();
+        assert!(mid.is_finite(), "{lo} {hi}: {mid}");
+        assert!(lo <= mid && mid <= hi || lo.is_infinite() && lo == hi, "{lo} {hi}: {mid}");
+    }
+}
+
+#[test]
 fn interval_results_hold_the_exact_ones() {
     let cases: Vec<Case> = serde_json::from_str(include_str!("data/interval_laws.json")).unwrap();
     assert!(cases.len() > 2000);

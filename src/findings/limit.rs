@@ -106,7 +106,7 @@ fn finding(
         None => String::new(),
     };
     if worst.short.is_infinite() {
-        return unbounded(requirement, &format!("{what} has no bound{at}"), &limit, side);
+        return unbounded(requirement, &what, &at, &limit, side);
     }
     let message = format!("{what} is {short}{of_yield} {beyond} its limit{at}");
     let mut here = format!(
@@ -146,11 +146,35 @@ fn finding(
 }
 
 /// A quantity that grows without end somewhere within the tolerances.
-fn unbounded(requirement: &Requirement, message: &str, limit: &str, side: Side) -> Diagnostic {
+fn unbounded(
+    requirement: &Requirement,
+    what: &str,
+    at: &str,
+    limit: &str,
+    side: Side,
+) -> Diagnostic {
     let direction = if side == Side::Least { "falls" } else { "rises" };
+    let word =
+        if requirement.quantity.is_unconditional() { "is not reached" } else { "has no bound" };
+    let (here, help) = match requirement.quantity {
+        Quantity::JoiningTemperature => (
+            format!("no heat within the data of the outer part is enough, limit {limit}"),
+            "take less interference or `insertion clearance`, chill the inner part besides, or \
+             press it in and leave this out",
+        ),
+        Quantity::LooseningTemperature => (
+            format!("it holds as far as the data of its parts go, limit {limit}"),
+            "take less interference, or leave this limit out",
+        ),
+        _ => (
+            format!("it {direction} without end, limit {limit}"),
+            "a divisor passes through zero within the tolerances: narrow them, or limit it first",
+        ),
+    };
+    let message = format!("{what} {word}{at}");
     Diagnostic::new(code(requirement.quantity, side), requirement.span, message)
-        .here(format!("it {direction} without end, limit {limit}"))
-        .help("a divisor passes through zero within the tolerances: narrow them, or limit it first")
+        .here(here)
+        .help(help)
 }
 
 /// A negative clearance is also the interference it is, and the reverse.

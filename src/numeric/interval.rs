@@ -68,13 +68,13 @@ impl Interval {
         self.hi
     }
 
-    /// A number near the middle, always a member.
+    /// A number near the middle, always a member where the interval has a finite one, and finite.
     pub fn mid(self) -> f64 {
         if self == Interval::ENTIRE {
             return 0.0;
         }
         let m = 0.5 * self.lo + 0.5 * self.hi;
-        m.clamp(self.lo.max(f64::MIN), self.hi.min(f64::MAX))
+        m.max(self.lo).min(self.hi).clamp(f64::MIN, f64::MAX)
     }
 
     /// Upper end less lower end, rounded up.
