@@ -7,6 +7,7 @@ mod beyond_data;
 mod concession;
 mod contact;
 mod full;
+mod joining;
 mod limit;
 mod missing;
 pub mod number;
@@ -40,6 +41,7 @@ pub fn findings(assembly: &Assembly, evaluation: &Evaluation, today: &str) -> Ve
     speed::find(assembly, &mut found);
     yielding::find(assembly, evaluation, &mut found);
     full::find(assembly, evaluation, &mut found);
+    joining::find(assembly, evaluation, &mut found);
     undecided::find(assembly, evaluation, &mut found);
     selection::find(assembly, evaluation, &mut found);
     concession::find(assembly, evaluation, today, &mut found);

@@ -64,6 +64,66 @@ fn the_hub_joins_at_a_temperature_that_every_pair_allows() {
     assert!((celsius - 143.931_624).abs() < 1e-5, "{celsius}");
 }
 
+/// The same joint of a hub that may not be hot, with or without an `insertion clearance`.
+fn hub_that_stays_below(limit: &str, seat: &str, line: &str) -> Run {
+    spec(&format!(
+        r#"
+condition day 20
+material tempered like light {{ limit {limit} degC }}
+material bar like steel {{ over -60 .. 300 degC }}
+part hub of tempered {{ bore = dia 40 +0.025/0 }}
+part shaft of bar {{ seat = dia 40 {seat} }}
+fit seat = shaft.seat in hub.bore {{
+  joint {{
+    length 30
+    hub    outside 80
+    shaft  solid
+    {line}
+  }}
+}}
+"#
+    ))
+}
+
+#[test]
+fn a_hub_at_its_limit_leaves_the_rest_to_the_shaft() {
+    let run = hub_that_stays_below("115", "+0.076/+0.060", "insertion clearance 0.04");
+    let card = run.evaluation.shop_cards[0];
+    assert!(card.heat_outer.is_some_and(|t| t > 388.15) && card.chill_inner.is_none());
+    let together = card.together.unwrap();
+    // (40(1 + 23.4e-6·95) − 0.04)/40.076 = 1 + 11.7e-6·ΔT, from 20 °C.
+    let celsius = together.chill_inner.unwrap() - 273.15;
+    let bore = 40.0 * (1.0 + 23.4e-6 * 95.0);
+    let by_hand = 20.0 + ((bore - 0.04) / 40.076 - 1.0) / 11.7e-6;
+    assert!((celsius - by_hand).abs() < 1e-5, "{celsius} {by_hand}");
+    assert_eq!(together.heat_outer, 388.15);
+    assert_eq!(run.words().len(), 1, "{:?}", run.words());
+    assert!(run.words()[0].starts_with("joining-out-of-reach"));
+}
+
+#[test]
+fn what_is_missing_with_both_at_once_is_said() {
+    let run = hub_that_stays_below("60", "+0.076/+0.060", "insertion clearance 0.04");
+    let together = run.evaluation.shop_cards[0].together.unwrap();
+    assert_eq!(together.chill_inner, None);
+    let bore = 40.0 * (1.0 + 23.4e-6 * 40.0);
+    let shaft = 40.076 * (1.0 - 11.7e-6 * 80.0);
+    assert!((together.short * 1e3 - (0.04 - bore + shaft)).abs() < 1e-9, "{together:?}");
+}
+
+#[test]
+fn only_a_shrink_joint_that_needs_heat_is_out_of_reach() {
+    // Pressed in; or with so little interference that the hub goes on below its limit.
+    for (seat, line) in [
+        ("+0.076/+0.060", ""),
+        ("+0.010/+0.002", "insertion clearance 0.02"),
+        ("-0.030/-0.040", "insertion clearance 0.02"),
+    ] {
+        let run = hub_that_stays_below("100", seat, line);
+        assert_eq!(run.words(), Vec::<String>::new(), "{seat} {line}");
+    }
+}
+
 fn three_rings(sleeve_bore: &str, case_bore: &str, condition: &str) -> Run {
     spec(&format!(
         r#"

@@ -1,5 +1,6 @@
 # A light-alloy hub shrunk on a hollow steel shaft. The hub grows away from the shaft when it is hot:
-# it must still carry its torque there, and must not yield where the interference is greatest.
+# it must still carry its torque there, and must not yield where the interference is greatest. More
+# heat than its temper stands would be needed to slip it on, so the shaft comes out of dry ice.
 assembly "Belt pulley, shrink-fitted hub"
 drawing "BP-15" rev "A"
 lengths in mm
@@ -14,7 +15,7 @@ part hub of aluminium_7075 {
   outside = dia 80 ±0.1
 }
 part shaft of steel_42crmo4 {
-  seat = dia 40 +0.130/+0.114
+  seat = dia 40 y6
   bore = dia 15 ±0.1
 }
 
@@ -26,7 +27,7 @@ fit seat = shaft.seat in hub.bore {
     friction 0.12 .. 0.18
     hub Rz 4 um
     shaft Rz 4 um
-    insertion clearance 0.04
+    insertion clearance 0.02
   }
   require "BP-1" torque >= 120 N*m
     because "belt pull at start"

@@ -281,6 +281,8 @@ codes! {
     UllageAboveLimit = "ullage-above-limit", Error;
     /// A ring or member that yields, where elastic figures end.
     StressPastYield = "stress-past-yield", Error;
+    /// A joint that neither heat nor cold makes within what the materials allow.
+    JoiningOutOfReach = "joining-out-of-reach", Warning;
     /// A part that turns, whose growth by rotation is not computed.
     SpeedWithoutEffect = "speed-without-effect", Warning;
     /// A charge that has no room left in its cavity.

@@ -308,4 +308,24 @@ pub struct ShopCard {
     pub chill_inner: Option<f64>,
     /// Where the inner part's data end.
     pub inner_data: f64,
+    /// Both at once; where the outer part may not be heated as far as it alone would have to be.
+    pub together: Option<Together>,
+}
+
+/// An outer part heated as far as it may be, and an inner one chilled for the rest. K.
+#[derive(Debug, Clone, Copy, PartialEq)]
+pub struct Together {
+    /// Heat the outer part to this: its limit, or where its data end.
+    pub heat_outer: f64,
+    /// And chill the inner part to this; `None` where its data end first.
+    pub chill_inner: Option<f64>,
+    /// Clearance still missing with the inner part where its data end, m; at most 0 where none is.
+    pub short: f64,
+}
+
+impl ShopCard {
+    /// True where heating alone joins and stays within what the material allows.
+    pub fn may_be_heated(&self) -> bool {
+        self.heat_outer.is_some_and(|heat| self.outer_limit.is_none_or(|limit| heat <= limit))
+    }
 }

@@ -182,6 +182,8 @@ pub(super) fn report() -> Report {
                     outer_data: 423.15,
                     chill: None,
                     inner_data: 173.15,
+                    may_be_heated: true,
+                    together: None,
                 }],
                 grounds: grounds(),
             }),

@@ -29,13 +29,11 @@ pub struct ShopCard {
     pub chill: Option<f64>,
     /// Where the inner part's data end.
     pub inner_data: f64,
-}
-
-impl ShopCard {
-    /// True where heating stays within what the material allows.
-    pub fn may_be_heated(&self) -> bool {
-        self.heat.is_some_and(|heat| self.limit.is_none_or(|limit| heat <= limit))
-    }
+    /// True where heating alone joins and stays within what the material allows.
+    pub may_be_heated: bool,
+    /// Where it does not: heat the outer part to the first and chill the inner one to the second;
+    /// that is `None` where its data end first.
+    pub together: Option<(f64, Option<f64>)>,
 }
 
 /// The cards of all joints.
@@ -54,6 +52,8 @@ pub(super) fn cards(assembly: &Assembly, evaluation: &Evaluation) -> Vec<ShopCar
             outer_data: card.outer_data,
             chill: card.chill_inner,
             inner_data: card.inner_data,
+            may_be_heated: card.may_be_heated(),
+            together: card.together.map(|t| (t.heat_outer, t.chill_inner)),
         })
     };
     evaluation.shop_cards.iter().filter_map(card).collect()

@@ -77,6 +77,19 @@ pub struct ShopCardEntry {
     pub outer_limit: Option<f64>,
     /// Or chill the inner part to this; `null` where its data end first.
     pub chill_inner: Option<f64>,
+    /// Both at once, where the outer part may not be heated as far as it alone would have to be.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub together: Option<TogetherEntry>,
+}
+
+/// Heat and cold at once.
+#[derive(Debug, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
+pub struct TogetherEntry {
+    /// Heat the outer part to this.
+    pub heat_outer: Option<f64>,
+    /// And chill the inner part to this; `null` where its data end first.
+    pub chill_inner: Option<f64>,
 }
 
 /// A share of assemblies that hold, with what it is known to lie between.

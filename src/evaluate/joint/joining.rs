@@ -4,7 +4,7 @@
 //! least shaft in the greatest bore to come loose, each lot at its worst.
 
 use super::stack::{nominal, smoothing};
-use crate::evaluate::outcome::{End, Range, ShopCard};
+use crate::evaluate::outcome::{End, Range, ShopCard, Together};
 use crate::evaluate::scene::{At, Response, Scene};
 use crate::evaluate::size::expansion_in;
 use crate::evaluate::{expression, temperature};
@@ -12,6 +12,7 @@ use crate::mechanics::joining::{self, Expanding, Loosening};
 use crate::model::{
     Assembly, ConditionId, Direction, Expr, ExprKind, Fit, Joint, Owner, PartId, SubjectId,
 };
+use crate::numeric::Interval;
 use crate::numeric::extremes::extremes;
 use crate::numeric::root::Crossing;
 
@@ -83,7 +84,7 @@ pub(crate) fn shop_card(assembly: &Assembly, subject: SubjectId) -> Option<ShopC
     let heated = joining::hub_heated(&hub, bore, shaft_today, wanted, from).at();
     let chilled =
         joining::shaft_chilled(&inner, shaft, bore_today, wanted, ambient(joint.inner.part)).at();
-    Some(ShopCard {
+    let mut card = ShopCard {
         subject,
         ambient: from,
         day,
@@ -93,7 +94,36 @@ pub(crate) fn shop_card(assembly: &Assembly, subject: SubjectId) -> Option<ShopC
         outer_data: hub.hottest(),
         chill_inner: chilled,
         inner_data: inner.coldest(),
-    })
+        together: None,
+    };
+    if !card.may_be_heated() {
+        let hot = card.outer_limit.map_or(hub.hottest(), |limit| limit.min(hub.hottest()));
+        let cold = ambient(joint.inner.part);
+        card.together =
+            (hot > from).then(|| together((&hub, bore, hot), (&inner, shaft, cold), wanted));
+    }
+    Some(card)
+}
+
+/// The hub at a temperature that it may have, and what is left for the shaft to do.
+///
+/// `hub`: how it expands, its least bore at reference, its temperature; `shaft`: how it expands, its
+/// greatest size at reference, the temperature it is chilled from.
+fn together(
+    (hub, bore, hot): (&Expanding, f64, f64),
+    (inner, shaft, from): (&Expanding, f64, f64),
+    wanted: f64,
+) -> Together {
+    let (hub_strain, nothing) = (hub.least(Interval::point(hot)), Interval::ZERO);
+    let warm = joining::free_clearance(Interval::point(bore), hub_strain, nothing, nothing);
+    let chilled = joining::shaft_chilled(inner, shaft, warm.lo(), wanted, from).at();
+    let at_most = joining::free_clearance(
+        warm,
+        nothing,
+        Interval::point(shaft),
+        inner.greatest(Interval::point(inner.coldest())),
+    );
+    Together { heat_outer: hot, chill_inner: chilled, short: wanted - at_most.lo() }
 }
 
 /// The joining temperature as a figure: one number, or unbounded where no heat within the data is

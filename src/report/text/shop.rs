@@ -28,7 +28,7 @@ fn one(out: &mut String, account: &Account, card: &ShopCard, look: Look) {
                 .limit
                 .map_or_else(String::new, |limit| format!(", at most {} allowed", colder(limit)));
             let text = format!("heat {} to {}{limit}", card.outer, hotter(heat));
-            if card.may_be_heated() {
+            if card.may_be_heated {
                 paragraph(out, 2, &text, Role::Plain, look);
             } else {
                 paragraph(out, 2, &format!("{text}: NOT ALLOWED"), Role::Bad, look);
@@ -55,6 +55,19 @@ fn one(out: &mut String, account: &Account, card: &ShopCard, look: Look) {
             let end = hotter(card.inner_data);
             let text =
                 format!("chilling {} does not reach down to {end}, where its data end", card.inner);
+            paragraph(out, 2, &text, Role::Warn, look);
+        }
+    }
+    let Some((heat, chill)) = card.together else { return };
+    // A limit is not to be passed: the other way round than a temperature to reach.
+    let (outer, inner, heat) = (&card.outer, &card.inner, colder(heat));
+    match chill {
+        Some(chill) => {
+            let text = format!("or heat {outer} to {heat} and chill {inner} to {}", colder(chill));
+            paragraph(out, 2, &text, Role::Plain, look);
+        }
+        None => {
+            let text = format!("{outer} at {heat} and {inner} chilled at once do not reach either");
             paragraph(out, 2, &text, Role::Warn, look);
         }
     }

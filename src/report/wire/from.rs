@@ -3,7 +3,7 @@
 
 use super::{
     ContributorEntry, Document, FindingEntry, LabelEntry, Map, RequirementEntry, ResultEntry,
-    SCHEMA, ShopCardEntry, SpecEntry, SummaryEntry, WindowEntry, YieldEntry,
+    SCHEMA, ShopCardEntry, SpecEntry, SummaryEntry, TogetherEntry, WindowEntry, YieldEntry,
 };
 use crate::diagnostic::{Diagnostic, Label};
 use crate::report::summary::summary;
@@ -64,6 +64,10 @@ fn shop_card(card: &ShopCard, temperature: &'static Unit) -> ShopCardEntry {
         heat_outer: of(card.heat),
         outer_limit: of(card.limit),
         chill_inner: of(card.chill),
+        together: card.together.map(|(heat, chill)| TogetherEntry {
+            heat_outer: of(Some(heat)),
+            chill_inner: of(chill),
+        }),
     }
 }
 
