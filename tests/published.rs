@@ -1,6 +1,7 @@
 //! Values that others have published, one module a subject.
 
 mod ansi_b4_1;
+mod bearing;
 mod bolted;
 mod distributions;
 mod drawn_shares;

@@ -2,7 +2,8 @@
 
 use gapkeep::diagnostic::Diagnostic;
 use gapkeep::evaluate::outcome::{Figure, Verdict};
-use gapkeep::evaluate::{Detail, Evaluation, Options, evaluate};
+use gapkeep::evaluate::scene::Response;
+use gapkeep::evaluate::{Detail, Evaluation, Options, evaluate, respond};
 use gapkeep::findings::findings;
 use gapkeep::model::{Assembly, Quantity};
 use gapkeep::resolve::{FileError, Files, resolve};
@@ -33,6 +34,19 @@ pub(crate) fn run(text: &str) -> Run {
 
 /// Evaluates a spec with files.
 pub(crate) fn run_with(text: &str, files: &Folder) -> Run {
+    let (assembly, mut diagnostics) = resolved(text, files);
+    let options = Options { detail: Detail::Full, ..Options::default() };
+    let evaluation = evaluate(&assembly, &options);
+    diagnostics.extend(findings(&assembly, &evaluation, "2026-01-01"));
+    Run { assembly, evaluation, diagnostics }
+}
+
+/// Resolves a spec without files, and evaluates nothing of it.
+pub(crate) fn assembly(text: &str) -> Assembly {
+    resolved(text, &Folder::default()).0
+}
+
+fn resolved(text: &str, files: &Folder) -> (Assembly, Vec<Diagnostic>) {
     let mut sources = Sources::default();
     let file = sources.add(Source::new("test.gap", text));
     let resolved = resolve(file, &mut sources, files);
@@ -46,12 +60,22 @@ pub(crate) fn run_with(text: &str, files: &Folder) -> Run {
         })
         .collect();
     assert!(wrong.is_empty(), "the spec has mistakes:\n{}", wrong.join("\n"));
-    let assembly = resolved.assembly.expect("an assembly");
-    let options = Options { detail: Detail::Full, ..Options::default() };
-    let evaluation = evaluate(&assembly, &options);
-    let mut diagnostics = resolved.diagnostics;
-    diagnostics.extend(findings(&assembly, &evaluation, "2026-01-01"));
-    Run { assembly, evaluation, diagnostics }
+    (resolved.assembly.expect("an assembly"), resolved.diagnostics)
+}
+
+/// Records one quantity of a subject at a condition (none for what has none).
+pub(crate) fn response(
+    assembly: &Assembly,
+    subject: &str,
+    quantity: Quantity,
+    condition: Option<&str>,
+) -> Response {
+    let subject =
+        assembly.subject_ids().find(|&s| assembly.subject(s).name == subject).expect("a subject");
+    let condition = condition.map(|name| {
+        assembly.condition_ids().find(|&c| assembly.condition(c).name == name).expect("a condition")
+    });
+    respond(assembly, subject, quantity, condition).expect("a quantity that can be computed")
 }
 
 impl Run {
