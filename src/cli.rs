@@ -14,6 +14,7 @@ mod glob;
 mod limits;
 mod materials;
 mod pipeline;
+mod progress;
 mod record;
 mod refusal;
 mod select;

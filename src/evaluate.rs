@@ -21,6 +21,7 @@ pub mod select;
 mod selection;
 mod size;
 mod statistics;
+pub mod tally;
 mod temperature;
 mod verdict;
 mod window;
@@ -30,6 +31,7 @@ use figure::Asked;
 pub use outcome::Evaluation;
 use outcome::{Chosen, Outcome, Side, Verdict};
 use scene::{Response, Unable};
+use tally::Tally;
 
 /// How much is wanted besides figures and verdicts.
 #[derive(Debug, Clone, Copy, PartialEq, Eq)]
@@ -47,18 +49,26 @@ pub struct Options {
     pub detail: Detail,
     /// Seed of all draws.
     pub seed: u64,
-    /// Number of assemblies drawn where draws are needed.
+    /// Number of assemblies drawn where draws are needed; where a width is asked for, the most of
+    /// them.
     pub draws: u64,
+    /// Draw until the confidence interval of each share is no wider than this, 0 … 1.
+    pub to_width: Option<f64>,
 }
 
 impl Default for Options {
     fn default() -> Self {
-        Options { detail: Detail::Brief, seed: 1, draws: 1_000_000 }
+        Options { detail: Detail::Brief, seed: 1, draws: 1_000_000, to_width: None }
     }
 }
 
 /// Evaluates every quantity of an assembly at every condition, and every requirement.
 pub fn evaluate(assembly: &Assembly, options: &Options) -> Evaluation {
+    evaluate_counted(assembly, options, &Tally::default())
+}
+
+/// The same, counting its draws where someone may watch them.
+pub fn evaluate_counted(assembly: &Assembly, options: &Options, tally: &Tally) -> Evaluation {
     let detail = options.detail;
     let mut run =
         Run { assembly, detail, responses: Vec::new(), evaluation: Evaluation::default() };
@@ -72,7 +82,8 @@ pub fn evaluate(assembly: &Assembly, options: &Options) -> Evaluation {
     for index in 0..assembly.requirements.len() {
         run.requirement(index);
     }
-    statistics::settle(assembly, &run.responses, &mut run.evaluation, options);
+    let drawing = statistics::Drawing { options, tally };
+    statistics::settle(assembly, &run.responses, &mut run.evaluation, drawing);
     selection::settle(assembly, &mut run.evaluation);
     run.windows();
     run.evaluation.missing.sort();
@@ -90,7 +101,8 @@ fn verdicts(assembly: &Assembly, options: &Options) -> Evaluation {
     for index in 0..assembly.requirements.len() {
         run.requirement(index);
     }
-    statistics::settle(assembly, &run.responses, &mut run.evaluation, options);
+    let drawing = statistics::Drawing { options, tally: &Tally::default() };
+    statistics::settle(assembly, &run.responses, &mut run.evaluation, drawing);
     selection::settle(assembly, &mut run.evaluation);
     run.evaluation
 }

@@ -24,6 +24,7 @@ pub mod wire;
 pub(crate) mod wrap;
 
 use crate::diagnostic::Diagnostic;
+use crate::evaluate::outcome::Drawn;
 use crate::findings::Standing;
 use crate::source::Sources;
 use crate::span::Span;
@@ -234,8 +235,8 @@ pub struct FailingShare {
     pub share: f64,
     /// What it is known to lie between.
     pub interval: (f64, f64),
-    /// Number of draws, where it was drawn.
-    pub draws: Option<u64>,
+    /// How it was drawn, where it was.
+    pub drawn: Option<Drawn>,
 }
 
 /// What one unknown does to a quantity.

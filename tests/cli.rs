@@ -2,6 +2,7 @@
 
 mod binary;
 mod check;
+mod draws;
 mod record;
 mod select;
 mod tools;
@@ -74,6 +75,7 @@ impl Bench {
         Environment {
             folder: self.path().to_path_buf(),
             columns: None,
+            watched: false,
             no_color: false,
             force_color: false,
             capable: true,

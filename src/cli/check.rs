@@ -1,19 +1,22 @@
 //! `check`: findings and a summary of specs, in any of the formats.
 
+mod draws;
 mod output;
 mod selection;
 
 use super::console::Console;
 use super::files::{MOST_BYTES, Place, Rooted, specs};
-use super::pipeline::{Wish, check};
+use super::pipeline::{Wish, check_counted};
+use super::progress::{Progress, watch};
 use super::refusal::{Outcome, Refusal};
 use super::{day, glob, record};
-use crate::evaluate::{Detail, Options};
+use crate::evaluate::Detail;
 use crate::report::text::Extent;
 use crate::report::{Report, Spec, summary};
 use clap::{ArgMatches, Args};
+use draws::Draws;
 use output::Format;
-use rayon::iter::{IntoParallelRefIterator, ParallelIterator};
+use rayon::iter::{IntoParallelIterator, ParallelIterator};
 use selection::Selection;
 use std::path::PathBuf;
 
@@ -25,6 +28,8 @@ use std::path::PathBuf;
     gapkeep check specs/ --only 'R-1*' --at hot\n  \
     gapkeep check specs/ --recorded             exit 1 where a record is stale\n  \
     gapkeep check specs/ --warn-below 10%       exit 1 where a margin is thin\n  \
+    gapkeep check spindle.gap --seed 2          draw other assemblies\n  \
+    gapkeep check spindle.gap --to-width 0.01%  draw until shares are that sure\n  \
     gapkeep check specs/ --as text --out report.txt --as json --out report.json\n  \
     gapkeep check - < draft.gap")]
 pub(super) struct CheckArguments {
@@ -55,8 +60,10 @@ pub(super) struct CheckArguments {
     #[arg(long, value_name = "SHARE", value_parser = share)]
     warn_below: Option<f64>,
     /// Fail where the record beside a spec is missing or differs, and show the difference.
-    #[arg(long, conflicts_with_all = ["only", "at"])]
+    #[arg(long, conflicts_with_all = ["only", "at", "seed", "samples", "to_width"])]
     recorded: bool,
+    #[command(flatten)]
+    draws: Draws,
     /// The day that concessions are judged at, in UTC; today unless stated.
     #[arg(long, value_name = "DATE", value_parser = day::parse)]
     today: Option<String>,
@@ -92,10 +99,7 @@ pub(super) fn run(
     }
     let full = arguments.detail || outputs.iter().any(|o| o.format != Format::Text);
     let wish = Wish {
-        options: Options {
-            detail: if full { Detail::Full } else { Detail::Brief },
-            ..Options::default()
-        },
+        options: arguments.draws.options(if full { Detail::Full } else { Detail::Brief }),
         today: arguments.today.clone().unwrap_or_else(|| console.environment().today.clone()),
     };
     let selection = Selection {
@@ -104,7 +108,7 @@ pub(super) fn run(
         warn_below: arguments.warn_below,
     };
     let mut outcome = if wrong.is_empty() { Outcome::Holds } else { Outcome::Wrong };
-    let (mut report, refusals) = report(&places, &wish, &selection, console);
+    let (mut report, refusals) = report(&places, &wish, &selection, arguments.quiet, console);
     for refusal in &refusals {
         console.complain(&refusal.message, refusal.help.as_deref());
         outcome = Outcome::Wrong;
@@ -129,33 +133,39 @@ pub(super) fn run(
     Ok(outcome.max(verdict(&report)))
 }
 
-/// Checks every place, side by side where there are several; no thread is started for one.
+/// What was read of standard input; `None` where a file is to be read.
+type Input = Option<Result<Vec<u8>, Refusal>>;
+
+/// Checks every place, side by side where there are several; no thread is started for one that
+/// nobody watches.
 fn report(
     places: &[Place],
     wish: &Wish,
     selection: &Selection,
+    quiet: bool,
     console: &mut Console<'_>,
 ) -> (Report, Vec<Refusal>) {
-    let one = |place: &Place, bytes: Result<Vec<u8>, Refusal>| {
-        bytes.map(|bytes| check(place, &bytes, wish, selection))
+    // Standard input is read first: the console stays here, the work may go to another thread.
+    let mut input = |place: &Place| place.name.is_none().then(|| console.read_input(MOST_BYTES));
+    let given: Vec<(&Place, Input)> = places.iter().map(|p| (p, input(p))).collect();
+    let progress = Progress::default();
+    let one = |(place, input): (&Place, Input)| {
+        let bytes = match input {
+            Some(bytes) => bytes,
+            None => Rooted { root: place.root.clone() }.bytes(place.shown()),
+        };
+        let spec =
+            bytes.map(|bytes| check_counted(place, &bytes, wish, selection, &progress.tally));
+        progress.count_spec();
+        spec
     };
-    let of_file = |place: &Place| {
-        let files = Rooted { root: place.root.clone() };
-        one(place, files.bytes(place.shown()))
-    };
-    let checked: Vec<Result<Spec, Refusal>> = match places {
-        [place] if place.name.is_some() => vec![of_file(place)],
-        places if places.iter().all(|p| p.name.is_some()) => {
-            places.par_iter().map(of_file).collect()
+    let all = || -> Vec<Result<Spec, Refusal>> {
+        match given.len() {
+            1 => given.into_iter().map(one).collect(),
+            _ => given.into_par_iter().map(one).collect(),
         }
-        places => places
-            .iter()
-            .map(|place| match place.name {
-                Some(_) => of_file(place),
-                None => one(place, console.read_input(MOST_BYTES)),
-            })
-            .collect(),
     };
+    let checked = if quiet { all() } else { watch(console, &progress, places.len(), all) };
     let (mut report, mut refusals) = (Report::default(), Vec::new());
     for spec in checked {
         match spec {

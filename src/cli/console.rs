@@ -31,6 +31,8 @@ pub struct Environment {
     pub folder: PathBuf,
     /// Columns of the terminal behind standard output; `None` where there is none.
     pub columns: Option<usize>,
+    /// True where standard error is a terminal, so that someone may watch it.
+    pub watched: bool,
     /// True where `NO_COLOR` is set and not empty.
     pub no_color: bool,
     /// True where `CLICOLOR_FORCE` is set to anything but `0`.
@@ -58,6 +60,7 @@ impl Environment {
         Environment {
             folder: std::env::current_dir().unwrap_or_else(|_| PathBuf::from(".")),
             columns,
+            watched: std::io::stderr().is_terminal(),
             no_color: !variable("NO_COLOR").is_empty(),
             force_color: !matches!(variable("CLICOLOR_FORCE").as_str(), "" | "0"),
             capable: (utf8 && !dumb) || cfg!(windows),

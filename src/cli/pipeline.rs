@@ -2,7 +2,8 @@
 
 use super::files::{Place, Rooted};
 use crate::diagnostic::{Code, Diagnostic, Severity};
-use crate::evaluate::{Evaluation, Options, evaluate};
+use crate::evaluate::tally::Tally;
+use crate::evaluate::{Evaluation, Options, evaluate_counted};
 use crate::findings::findings;
 use crate::model::Assembly;
 use crate::report::{Spec, account};
@@ -43,6 +44,17 @@ impl Lens for Everything {
 
 /// Checks a spec of these bytes.
 pub(crate) fn check(place: &Place, bytes: &[u8], wish: &Wish, lens: &dyn Lens) -> Spec {
+    check_counted(place, bytes, wish, lens, &Tally::default())
+}
+
+/// The same, counting its draws where someone may watch them.
+pub(crate) fn check_counted(
+    place: &Place,
+    bytes: &[u8],
+    wish: &Wish,
+    lens: &dyn Lens,
+    tally: &Tally,
+) -> Spec {
     let mut sources = Sources::default();
     let file = place.shown().to_string();
     let text = match text_of(bytes, place, &mut sources) {
@@ -61,7 +73,7 @@ pub(crate) fn check(place: &Place, bytes: &[u8], wish: &Wish, lens: &dyn Lens) -
     let sound = found.iter().all(|d| d.severity != Severity::Error);
     if let Some(mut assembly) = resolved.assembly.filter(|_| sound) {
         lens.assembly(&mut assembly);
-        let mut evaluation = evaluate(&assembly, &wish.options);
+        let mut evaluation = evaluate_counted(&assembly, &wish.options, tally);
         lens.evaluation(&assembly, &mut evaluation);
         found.extend(findings(&assembly, &evaluation, &wish.today));
         found.extend(lens.findings(&assembly, &evaluation));

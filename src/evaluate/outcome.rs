@@ -231,8 +231,8 @@ pub struct Statistics {
     /// What that share is known to lie between: bounds of the method, or 99 % confidence limits
     /// where it was drawn.
     pub share_interval: (f64, f64),
-    /// Number of draws, where it was drawn.
-    pub draws: Option<u64>,
+    /// How it was drawn, where it was.
+    pub drawn: Option<Drawn>,
     /// Capability index to the nearer limit.
     pub cpk: Option<f64>,
     /// True where the share is that of the formula to its printed digits, without draws.
@@ -256,7 +256,7 @@ impl Statistics {
             high: (f64::NAN, f64::NAN),
             share_failing: 1.0,
             share_interval: (0.0, 1.0),
-            draws: None,
+            drawn: None,
             cpk: None,
             exact: false,
             random: 0,
@@ -282,8 +282,20 @@ pub struct AssemblyYield {
     pub share_failing: f64,
     /// What it is known to lie between.
     pub share_interval: (f64, f64),
-    /// Number of draws, where it was drawn.
-    pub draws: Option<u64>,
+    /// How it was drawn, where it was.
+    pub drawn: Option<Drawn>,
+}
+
+/// How a share was drawn.
+#[derive(Debug, Clone, Copy, PartialEq)]
+pub struct Drawn {
+    /// Number of assemblies drawn.
+    pub draws: u64,
+    /// Seed of their streams.
+    pub seed: u64,
+    /// The width that was asked for of its confidence interval, where the most draws allowed did
+    /// not reach it.
+    pub missed: Option<f64>,
 }
 
 /// What a shop needs to join an outer part and an inner one without force. Temperatures in K; they

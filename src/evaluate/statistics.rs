@@ -15,9 +15,17 @@ mod together;
 use super::Options;
 use super::outcome::{Evaluation, Statistics};
 use super::scene::Response;
+use super::tally::Tally;
 use crate::model::{Assembly, Method};
 use corners::Corners;
 use draw::Check;
+
+/// How draws are made, and where they are counted for whoever watches.
+#[derive(Clone, Copy)]
+pub(crate) struct Drawing<'a> {
+    pub(crate) options: &'a Options,
+    pub(crate) tally: &'a Tally,
+}
 
 /// A requirement at a condition with what its statistics need.
 struct Case<'a> {
@@ -35,7 +43,7 @@ pub(crate) fn settle(
     assembly: &Assembly,
     responses: &[Response],
     evaluation: &mut Evaluation,
-    options: &Options,
+    drawing: Drawing<'_>,
 ) {
     let asked = |v: &super::outcome::Verdict| {
         assembly.requirements[v.requirement].method != Method::WorstCase
@@ -65,12 +73,12 @@ pub(crate) fn settle(
     let bent: Vec<usize> = (0..cases.len()).filter(|&i| !statistics[i].exact).collect();
     if !bent.is_empty() {
         let checks: Vec<Check<'_>> = bent.iter().map(|&i| Check::of(&cases[i])).collect();
-        let counts = draw::run(assembly, &checks, options);
-        for (&i, count) in bent.iter().zip(&counts.single) {
-            draw::take(&mut statistics[i], count, counts.draws);
+        let counts = draw::run(assembly, &checks, drawing, draw::Counts::widest);
+        for (&i, &count) in bent.iter().zip(&counts.single) {
+            draw::take(&mut statistics[i], count, counts.draws, drawing.options);
         }
     }
-    evaluation.assembly_yield = Some(together::assembly(assembly, &cases, &statistics, options));
+    evaluation.assembly_yield = Some(together::assembly(assembly, &cases, &statistics, drawing));
     let judged: Vec<(usize, Statistics)> =
         cases.iter().map(|c| c.verdict).zip(statistics).collect();
     for (verdict, statistics) in judged {

@@ -10,6 +10,6 @@ mod run;
 mod stream;
 mod vectors;
 
-pub use run::{BLOCK, Merge, Moments, monte_carlo};
+pub use run::{BLOCK, Merge, Moments, monte_carlo, monte_carlo_of};
 pub use stream::Stream;
 pub use vectors::vectorized;

@@ -33,7 +33,7 @@ pub fn account(assembly: &Assembly, evaluation: &Evaluation, today: &str) -> Acc
         failing: evaluation.assembly_yield.map(|y| FailingShare {
             share: y.share_failing,
             interval: y.share_interval,
-            draws: y.draws,
+            drawn: y.drawn,
         }),
         shop: cards(assembly, evaluation),
         grounds: grounds(assembly, evaluation),
@@ -277,7 +277,7 @@ fn statistics(s: &outcome::Statistics, method: Method) -> Statistics {
         failing: FailingShare {
             share: s.share_failing,
             interval: s.share_interval,
-            draws: s.draws,
+            drawn: s.drawn,
         },
         low: s.low,
         high: s.high,

@@ -102,6 +102,12 @@ pub struct YieldEntry {
     pub interval: [Option<f64>; 2],
     /// Number of draws; `null` where it was computed without.
     pub draws: Option<u64>,
+    /// Seed of the draws, where it was drawn.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub seed: Option<u64>,
+    /// The width that was asked for of its interval, where the most draws allowed did not reach it.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub width_missed: Option<f64>,
 }
 
 /// One quantity at a condition.
@@ -179,6 +185,12 @@ pub struct RequirementEntry {
     /// Number of draws, where it was drawn.
     #[serde(skip_serializing_if = "Option::is_none")]
     pub draws: Option<u64>,
+    /// Seed of the draws, where it was drawn.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub seed: Option<u64>,
+    /// The width that was asked for of its interval, where the most draws allowed did not reach it.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub width_missed: Option<f64>,
     /// Capability index to the nearer limit.
     #[serde(skip_serializing_if = "Option::is_none")]
     pub cpk: Option<f64>,
@@ -190,7 +202,7 @@ pub struct RequirementEntry {
     /// The concession, if one is stated.
     #[serde(skip_serializing_if = "Option::is_none")]
     pub concession: Option<String>,
-    /// Temperatures at which it would hold.
+    /// Temperatures at which it would hold in the worst case.
     #[serde(skip_serializing_if = "Option::is_none")]
     pub window: Option<WindowEntry>,
     /// What the range is made of, largest share first.

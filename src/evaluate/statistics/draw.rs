@@ -3,20 +3,22 @@
 //! Each random unknown has a stream of its own, keyed by its name, so that the digits are the same
 //! on every machine, with any number of threads, and whatever else the spec says.
 
-use super::Case;
 use super::corners::Corners;
+use super::{Case, Drawing};
 use crate::evaluate::Options;
-use crate::evaluate::outcome::Statistics;
+use crate::evaluate::outcome::{Drawn, Statistics};
 use crate::evaluate::scene::Response;
 use crate::model::{Assembly, Unknown};
 use crate::numeric::distribution::Distribution;
-use crate::numeric::probability::clopper_pearson;
-use crate::numeric::random::{Merge, Stream, monte_carlo};
+use crate::numeric::probability::{ShareInterval, clopper_pearson};
+use crate::numeric::random::{Merge, Stream, monte_carlo_of};
 use crate::numeric::tape::{Column, Scratch};
 use std::collections::BTreeMap;
 
 /// Confidence of the limits that are given with a drawn share.
 const CONFIDENCE: f64 = 0.99;
+/// Where a width is asked for it is looked at after multiples of so many draws.
+const STEP: u64 = 100_000;
 
 /// What is looked at for each draw: one quantity at all corners of its scenarios.
 pub(super) struct Check<'a> {
@@ -44,6 +46,17 @@ pub(super) struct Counts {
     pub(super) single: Vec<u64>,
     /// Draws that break any.
     pub(super) any: u64,
+}
+
+impl Counts {
+    /// Width of the widest confidence interval of a single check.
+    pub(super) fn widest(&self) -> f64 {
+        let width = |&count: &u64| {
+            let interval = confidence(count, self.draws);
+            interval.high - interval.low
+        };
+        self.single.iter().map(width).fold(0.0, f64::max)
+    }
 }
 
 #[derive(Debug, Clone, PartialEq)]
@@ -77,7 +90,17 @@ enum Input {
 }
 
 /// Draws assemblies and counts those that break each check, and any.
-pub(super) fn run(assembly: &Assembly, checks: &[Check<'_>], options: &Options) -> Counts {
+///
+/// Where a width is asked for, draws go on until `width` of what was counted is no greater, or the
+/// most draws are made. When to look depends on what was counted alone, so that the digits are the
+/// same on any number of threads.
+pub(super) fn run(
+    assembly: &Assembly,
+    checks: &[Check<'_>],
+    drawing: Drawing<'_>,
+    width: impl Fn(&Counts) -> f64,
+) -> Counts {
+    let Drawing { options, tally } = drawing;
     let mut drawn: BTreeMap<Unknown, (usize, Distribution)> = BTreeMap::new();
     let mut plans = Vec::new();
     for (index, check) in checks.iter().enumerate() {
@@ -119,13 +142,39 @@ pub(super) fn run(assembly: &Assembly, checks: &[Check<'_>], options: &Options) 
         streams[place] = Some((stream, chance));
     }
     let streams: Vec<(Stream, Distribution)> = streams.into_iter().flatten().collect();
-    let sum = monte_carlo(options.draws, |first, count| {
-        block(&plans, &streams, checks.len(), first, count)
-    });
-    match sum {
-        Some(sum) => Counts { draws: options.draws, single: sum.single, any: sum.any },
-        None => Counts { draws: 0, single: vec![0; checks.len()], any: 0 },
+    let mut counts = Counts { draws: 0, single: vec![0; checks.len()], any: 0 };
+    let mut end = match options.to_width {
+        Some(_) => STEP.min(options.draws),
+        None => options.draws,
+    };
+    while counts.draws < end {
+        tally.want(end - counts.draws);
+        let sum = monte_carlo_of(counts.draws..end, |first, count| {
+            let sum = block(&plans, &streams, checks.len(), first, count);
+            tally.count(count as u64);
+            sum
+        });
+        if let Some(sum) = sum {
+            counts.single.iter_mut().zip(sum.single).for_each(|(a, b)| *a += b);
+            counts.any += sum.any;
+        }
+        counts.draws = end;
+        if let Some(wanted) = options.to_width {
+            end = next_look(end, width(&counts), wanted).min(options.draws);
+        }
     }
+    counts
+}
+
+/// The number of draws at which to look again, `draws` where the width is reached: what the width so
+/// far lets expect, as widths shrink with the square root of the draws, but at most twice as many.
+fn next_look(draws: u64, width: f64, wanted: f64) -> u64 {
+    if width <= wanted {
+        return draws;
+    }
+    let ratio = (1.05 * (width / wanted) * (width / wanted)).clamp(1.1, 2.0);
+    let next = (draws as f64 * ratio) as u64;
+    next.div_ceil(STEP) * STEP
 }
 
 fn block(
@@ -189,10 +238,35 @@ fn key(assembly: &Assembly, unknown: Unknown) -> String {
     }
 }
 
+/// What a share of which `count` in `draws` were seen lies between.
+pub(super) fn confidence(count: u64, draws: u64) -> ShareInterval {
+    clopper_pearson(count, draws, CONFIDENCE)
+}
+
+/// How a share was drawn that lies between `least` and `most`.
+pub(super) fn drawn(draws: u64, (least, most): (f64, f64), options: &Options) -> Drawn {
+    let missed = options.to_width.filter(|&width| most - least > width);
+    Drawn { draws, seed: options.seed, missed }
+}
+
 /// Puts a counted share in the place of a computed one.
-pub(super) fn take(statistics: &mut Statistics, count: &u64, draws: u64) {
-    let interval = clopper_pearson(*count, draws, CONFIDENCE);
-    statistics.share_failing = *count as f64 / draws.max(1) as f64;
+pub(super) fn take(statistics: &mut Statistics, count: u64, draws: u64, options: &Options) {
+    let interval = confidence(count, draws);
+    statistics.share_failing = count as f64 / draws.max(1) as f64;
     statistics.share_interval = (interval.low, interval.high);
-    statistics.draws = Some(draws);
+    statistics.drawn = Some(drawn(draws, statistics.share_interval, options));
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    #[test]
+    fn a_width_is_looked_at_again_where_it_may_be_reached() {
+        assert_eq!(next_look(10 * STEP, 0.01, 0.01), 10 * STEP);
+        // Far off: twice as many; near: as many as expected; never no step at all.
+        assert_eq!(next_look(10 * STEP, 0.05, 0.01), 20 * STEP);
+        assert_eq!(next_look(10 * STEP, 0.012, 0.01), 16 * STEP);
+        assert_eq!(next_look(10 * STEP, 0.010_001, 0.01), 11 * STEP);
+    }
 }

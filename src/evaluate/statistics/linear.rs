@@ -80,7 +80,7 @@ pub(super) fn statistics(assembly: &Assembly, case: &Case<'_>) -> Statistics {
         high: (highest.mean, deviation(highest)),
         share_failing: shares.iter().sum::<f64>().min(1.0),
         share_interval: (bounds.0.min(1.0), bounds.1.min(1.0)),
-        draws: None,
+        drawn: None,
         cpk,
         exact,
         random: shown.parts.len(),

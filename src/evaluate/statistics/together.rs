@@ -1,11 +1,10 @@
 //! The yield of the whole assembly: every requirement at every condition, on the same pieces.
 
-use super::Case;
-use super::draw::{self, Check};
-use crate::evaluate::Options;
+use super::draw::{self, Check, Counts};
+use super::{Case, Drawing};
 use crate::evaluate::outcome::{AssemblyYield, Statistics};
 use crate::model::{Assembly, Unknown};
-use crate::numeric::probability::{ShareInterval, any_of_groups, clopper_pearson};
+use crate::numeric::probability::{ShareInterval, any_of_groups};
 use std::collections::BTreeSet;
 
 /// Shares below this are left to their bounds: a million draws say less.
@@ -21,22 +20,31 @@ pub(super) fn assembly(
     assembly: &Assembly,
     cases: &[Case<'_>],
     statistics: &[Statistics],
-    options: &Options,
+    drawing: Drawing<'_>,
 ) -> AssemblyYield {
     let bounds = any_of_groups(&groups(cases, statistics));
     let (low, high) = (bounds.low, bounds.high.min(1.0));
-    if high <= WORTH_DRAWING || high <= CLOSE * low {
-        return AssemblyYield { share_failing: high, share_interval: (low, high), draws: None };
+    let known = match drawing.options.to_width {
+        Some(width) => high - low <= width,
+        None => high <= WORTH_DRAWING || high <= CLOSE * low,
+    };
+    if known {
+        return AssemblyYield { share_failing: high, share_interval: (low, high), drawn: None };
     }
+    // What was counted, inside of the bounds.
+    let inside = |counts: &Counts| {
+        let counted = draw::confidence(counts.any, counts.draws);
+        let share = (counts.any as f64 / counts.draws.max(1) as f64).clamp(low, high);
+        (share, (counted.low.max(low).min(share), counted.high.min(high).max(share)))
+    };
     let checks: Vec<Check<'_>> = cases.iter().map(Check::of).collect();
-    let counts = draw::run(assembly, &checks, options);
-    let counted = clopper_pearson(counts.any, counts.draws, 0.99);
-    let share = (counts.any as f64 / counts.draws.max(1) as f64).clamp(low, high);
-    AssemblyYield {
-        share_failing: share,
-        share_interval: (counted.low.max(low).min(share), counted.high.min(high).max(share)),
-        draws: Some(counts.draws),
-    }
+    let counts = draw::run(assembly, &checks, drawing, |counts| {
+        let (_, (least, most)) = inside(counts);
+        most - least
+    });
+    let (share_failing, share_interval) = inside(&counts);
+    let drawn = draw::drawn(counts.draws, share_interval, drawing.options);
+    AssemblyYield { share_failing, share_interval, drawn: Some(drawn) }
 }
 
 /// Bounds of each group of requirements that share some random unknown.

@@ -2,6 +2,7 @@
 
 use super::vectors::vectorized;
 use rayon::prelude::{IntoParallelIterator, ParallelIterator};
+use std::ops::Range;
 
 /// Draws in a block. Blocks are the unit of work and of summing, so their size is part of the
 /// result's digits and never depends on the machine. A few columns of a block fit the first cache.
@@ -39,7 +40,15 @@ impl<A: Merge, B: Merge> Merge for (A, B) {
 /// compiled for the widest vectors that the machine has. The result is the same for any number of
 /// threads. `None` for no draws.
 pub fn monte_carlo<T: Merge>(draws: u64, block: impl Fn(u64, usize) -> T + Sync) -> Option<T> {
-    let blocks = draws.div_ceil(BLOCK as u64);
+    monte_carlo_of(0..draws, block)
+}
+
+/// The same for the draws of a range, so that draws already summed up need not be drawn again.
+pub fn monte_carlo_of<T: Merge>(
+    draws: Range<u64>,
+    block: impl Fn(u64, usize) -> T + Sync,
+) -> Option<T> {
+    let blocks = draws.end.saturating_sub(draws.start).div_ceil(BLOCK as u64);
     // Sums of a batch are merged before the next one starts: memory does not grow with the draws.
     const BATCH: u64 = 4096;
     let mut total: Option<T> = None;
@@ -48,8 +57,8 @@ pub fn monte_carlo<T: Merge>(draws: u64, block: impl Fn(u64, usize) -> T + Sync)
         let sums: Vec<T> = range
             .into_par_iter()
             .map(|index| {
-                let first = index * BLOCK as u64;
-                let count = (draws - first).min(BLOCK as u64) as usize;
+                let first = draws.start + index * BLOCK as u64;
+                let count = (draws.end - first).min(BLOCK as u64) as usize;
                 vectorized(
                     #[inline(always)]
                     || block(first, count),
@@ -140,6 +149,23 @@ mod tests {
         assert_eq!(one, on(2).install(run));
         assert_eq!(one, on(7).install(run));
         assert_eq!(one.map(|m| m.count()), Some(100_003));
+    }
+
+    #[test]
+    fn draws_in_two_runs_are_those_of_one() {
+        let stream = Stream::new(3, b"runs");
+        let of = |draws: Range<u64>| {
+            monte_carlo_of(draws, |first, count| {
+                let mut values = [0.0; BLOCK];
+                stream.fill_normal(first, 0.0, 1.0, &mut values[..count]);
+                values[..count].iter().map(|x| x.to_bits()).collect::<Vec<u64>>()
+            })
+            .unwrap_or_default()
+        };
+        let mut parts = of(0..3000);
+        parts.extend(of(3000..5000));
+        assert_eq!(parts, of(0..5000));
+        assert!(of(7..7).is_empty());
     }
 
     #[test]

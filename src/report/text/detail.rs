@@ -152,8 +152,10 @@ fn window_words(account: &Account, case: &Case, window: &[(f64, f64)]) -> String
         })
         .collect();
     let of = if case.window_scaled { " times the condition's distance from reference" } else { "" };
+    // Windows are proven for every piece, also where statistics decide.
+    let by = if case.statistical { "in the worst case " } else { "" };
     match intervals.is_empty() {
-        true => "holds at no temperature".to_string(),
-        false => format!("holds at {}{of}", intervals.join(", ")),
+        true => format!("{by}holds at no temperature"),
+        false => format!("{by}holds at {}{of}", intervals.join(", ")),
     }
 }

@@ -45,7 +45,9 @@ fn spec(spec: &Spec) -> SpecEntry {
         assembly_yield: account.and_then(|a| a.failing).map(|f| YieldEntry {
             share: number(1.0 - f.share),
             interval: [number(1.0 - f.interval.1), number(1.0 - f.interval.0)],
-            draws: f.draws,
+            draws: f.drawn.map(|d| d.draws),
+            seed: f.drawn.map(|d| d.seed),
+            width_missed: f.drawn.and_then(|d| d.missed),
         }),
         findings: spec.findings.iter().map(|d| finding(d, &spec.sources)).collect(),
     }
@@ -121,6 +123,7 @@ fn requirement(account: &Account, case: &Case) -> RequirementEntry {
     let figure = case.figure.map(|f| &account.figures[f]);
     let of = |si: Option<f64>| si.and_then(|si| value(si, case.unit));
     let statistics = case.statistics.as_ref();
+    let drawn = statistics.and_then(|s| s.failing.drawn);
     let window = case.window.as_ref().map(|intervals| {
         let end = |t: f64| {
             if case.window_scaled { number(t) } else { value(t, account.temperature) }
@@ -146,7 +149,9 @@ fn requirement(account: &Account, case: &Case) -> RequirementEntry {
         sigma: statistics.and_then(|s| number(case.unit.difference_from_si(s.sigma))),
         share_failing: statistics.and_then(|s| number(s.failing.share)),
         share_failing_interval: statistics.map(|s| [s.failing.interval.0, s.failing.interval.1]),
-        draws: statistics.and_then(|s| s.failing.draws),
+        draws: drawn.map(|d| d.draws),
+        seed: drawn.map(|d| d.seed),
+        width_missed: drawn.and_then(|d| d.missed),
         cpk: statistics.and_then(|s| s.cpk).and_then(number),
         verdict: case.standing.word(),
         because: case.because.clone(),

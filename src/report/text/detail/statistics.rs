@@ -1,5 +1,6 @@
 //! What statistics say of a requirement, and of all of them together.
 
+use crate::evaluate::outcome::Drawn;
 use crate::findings::number::{Round, difference_with_unit, digits, share, with_unit};
 use crate::report::look::{Look, Role};
 use crate::report::text::paragraph;
@@ -44,30 +45,87 @@ pub(in crate::report::text) fn capability(s: &Statistics) -> String {
     format!("{cpk}{} fail", failing(&s.failing))
 }
 
+/// Both in so few words that they fit below a row of figures.
+pub(in crate::report::text) fn brief(s: &Statistics) -> String {
+    let Some(drawn) = s.failing.drawn else { return capability(s) };
+    let cpk = s.cpk.map_or_else(String::new, |c| format!("Cpk {}, ", digits(c, 2, Round::Down)));
+    let (least, greatest) = s.failing.interval;
+    let missed = match drawn.missed {
+        Some(width) => format!(", wider than {}", asked(width)),
+        None => String::new(),
+    };
+    format!(
+        "{cpk}{} of assemblies fail ({} .. {}{missed})",
+        share_of_assemblies(s.failing.share, Round::Nearest),
+        share_of_assemblies(least, Round::Down),
+        share_of_assemblies(greatest, Round::Up),
+    )
+}
+
 /// A share of assemblies with what it is known to lie between.
 pub(in crate::report::text) fn failing(f: &FailingShare) -> String {
     let of = share_of_assemblies;
-    let (least, greatest) = (of(f.interval.0), of(f.interval.1));
-    match f.draws {
-        Some(draws) => format!(
-            "{} of assemblies ({least} .. {greatest} at 99 % confidence, {draws} draws)",
-            of(f.share)
+    let greatest = of(f.interval.1, Round::Up);
+    let least = match of(f.interval.0, Round::Up) == greatest {
+        true => greatest.clone(),
+        false => of(f.interval.0, Round::Down),
+    };
+    match f.drawn {
+        Some(drawn) => format!(
+            "{} of assemblies ({least} .. {greatest} at 99 % confidence, {})",
+            of(f.share, Round::Nearest),
+            draws(&drawn)
         ),
         None if f.share > 0.0 && f.share < LEAST_SHARE => {
             "fewer than 1e-18 of assemblies".to_string()
         }
         None if f.share == 0.0 => "no assemblies".to_string(),
         None if least != greatest => format!("{least} .. {greatest} of assemblies"),
-        None => format!("{} of assemblies", of(f.share)),
+        None => format!("{greatest} of assemblies"),
+    }
+}
+
+/// How many assemblies were drawn, of which seed, and whether that was enough.
+fn draws(drawn: &Drawn) -> String {
+    let made = format!("{} of seed {}", number_of_draws(drawn.draws), drawn.seed);
+    match drawn.missed {
+        Some(width) => {
+            format!("{made}, the most allowed; wider than the {} asked for", asked(width))
+        }
+        None => made,
+    }
+}
+
+/// A width as it was asked for.
+fn asked(width: f64) -> String {
+    // Per cent to twelve digits, so that 0.0007 is 0.07 and not 0.06999999999999999.
+    format!("{} %", libm::round(width * 1e14) / 1e12)
+}
+
+/// Millions in a word where nothing is lost.
+fn number_of_draws(draws: u64) -> String {
+    const TENTH: u64 = 100_000;
+    match draws {
+        _ if draws >= 10 * TENTH && draws.is_multiple_of(10 * TENTH) => {
+            format!("{} million draws", draws / (10 * TENTH))
+        }
+        _ if draws >= 10 * TENTH && draws.is_multiple_of(TENTH) => {
+            format!("{}.{} million draws", draws / (10 * TENTH), draws / TENTH % 10)
+        }
+        _ => format!("{draws} draws"),
     }
 }
 
 /// A small share as people say it: in per cent, in parts per million, else as a power of ten.
-/// Rounded up, so that no share looks smaller than it is.
-fn share_of_assemblies(x: f64) -> String {
+fn share_of_assemblies(x: f64, round: Round) -> String {
     match x {
-        _ if x >= 1e-3 => format!("{} %", digits(x * 1e2, 3, Round::Up)),
-        _ if x >= 1e-9 => format!("{} ppm", digits(x * 1e6, 4, Round::Up)),
+        _ if x >= 1e-3 => format!("{} %", digits(x * 1e2, 3, round)),
+        _ if x >= 1e-8 => {
+            // Four digits that count.
+            let ppm = x * 1e6;
+            let decimals = (0..6).find(|&d| ppm * libm::pow(10.0, d as f64) >= 1000.0);
+            format!("{} ppm", digits(ppm, decimals.unwrap_or(6), round))
+        }
         _ if x == 0.0 => "0".to_string(),
         _ => format!("{x:.2e}"),
     }
@@ -79,15 +137,33 @@ mod tests {
 
     #[test]
     fn shares_read_as_people_say_them() {
-        let exact = |share| FailingShare { share, interval: (share, share), draws: None };
+        let exact = |share| FailingShare { share, interval: (share, share), drawn: None };
         assert_eq!(failing(&exact(0.023_194)), "2.320 % of assemblies");
-        assert_eq!(failing(&exact(3.24e-5)), "32.4000 ppm of assemblies");
+        assert_eq!(failing(&exact(3.24e-5)), "32.40 ppm of assemblies");
         assert_eq!(failing(&exact(0.0)), "no assemblies");
         assert_eq!(failing(&exact(1e-20)), "fewer than 1e-18 of assemblies");
-        let drawn = FailingShare { share: 0.25, interval: (0.24, 0.26), draws: Some(1000) };
+        let drawn = |draws, missed| FailingShare {
+            share: 0.25,
+            interval: (0.24, 0.260_000_1),
+            drawn: Some(Drawn { draws, seed: 7, missed }),
+        };
         assert_eq!(
-            failing(&drawn),
-            "25.000 % of assemblies (24.000 % .. 26.000 % at 99 % confidence, 1000 draws)"
+            failing(&drawn(1000, None)),
+            "25.000 % of assemblies (24.000 % .. 26.001 % at 99 % confidence, 1000 draws of seed 7)"
         );
+        assert_eq!(
+            failing(&drawn(1_500_000, Some(1e-4))),
+            "25.000 % of assemblies (24.000 % .. 26.001 % at 99 % confidence, 1.5 million draws of \
+             seed 7, the most allowed; wider than the 0.01 % asked for)"
+        );
+    }
+
+    #[test]
+    fn few_digits_are_kept_of_a_small_share() {
+        let of = |share| share_of_assemblies(share, Round::Up);
+        assert_eq!(of(9.999e-4), "999.9 ppm");
+        assert_eq!(of(1.234_56e-6), "1.235 ppm");
+        assert_eq!(of(1.2e-8), "0.01200 ppm");
+        assert_eq!(of(1.2e-9), "1.20e-9");
     }
 }

@@ -2,7 +2,7 @@
 
 use crate::findings::Standing;
 use crate::findings::number::{Round, decimals, difference, difference_with_unit, digits};
-use crate::report::text::detail::statistics::capability;
+use crate::report::text::detail::statistics::brief;
 use crate::report::wrap::visible;
 use crate::report::{Account, Case, Figure};
 use crate::units::Kind;
@@ -44,7 +44,7 @@ pub(super) fn row(account: &Account, figure: &Figure, case: Option<&Case>) -> Ro
         None => (figure.least, figure.mean, figure.greatest),
     };
     let aside = match statistics {
-        Some(s) => capability(s),
+        Some(s) => brief(s),
         None => aside(figure),
     };
     Row {
