@@ -85,6 +85,8 @@ pub fn evaluate_counted(assembly: &Assembly, options: &Options, tally: &Tally) -
     let drawing = statistics::Drawing { options, tally };
     statistics::settle(assembly, &run.responses, &mut run.evaluation, drawing);
     selection::settle(assembly, &mut run.evaluation);
+    run.evaluation.friction_bands = joint::band::bands(assembly, &run.evaluation.beyond_data);
+    run.evaluation.turned_over = joint::band::turned_over(assembly, &run.evaluation);
     run.windows();
     run.evaluation.missing.sort();
     run.evaluation.missing.dedup();

@@ -6,6 +6,7 @@
 mod beyond_data;
 mod concession;
 mod contact;
+mod friction;
 mod full;
 mod joining;
 mod limit;
@@ -42,6 +43,7 @@ pub fn findings(assembly: &Assembly, evaluation: &Evaluation, today: &str) -> Ve
     yielding::find(assembly, evaluation, &mut found);
     full::find(assembly, evaluation, &mut found);
     joining::find(assembly, evaluation, &mut found);
+    friction::find(assembly, evaluation, &mut found);
     undecided::find(assembly, evaluation, &mut found);
     selection::find(assembly, evaluation, &mut found);
     concession::find(assembly, evaluation, today, &mut found);

@@ -85,8 +85,27 @@ pub struct Account {
     pub failing: Option<FailingShare>,
     /// What a shop needs to make each joint.
     pub shop: Vec<ShopCard>,
+    /// How far friction along each joint may shift its pressure.
+    pub bands: Vec<FrictionBand>,
     /// What the figures rest on.
     pub grounds: Grounds,
+}
+
+/// The pressures that friction along a joint leaves possible at a condition. SI.
+#[derive(Debug, Clone)]
+pub struct FrictionBand {
+    /// The name of the joint.
+    pub joint: String,
+    /// The condition.
+    pub condition: String,
+    /// The unit its pressure is shown in.
+    pub unit: &'static Unit,
+    /// The greatest share by which the pressure is shifted.
+    pub coupling: f64,
+    /// No pressure lies below.
+    pub least: f64,
+    /// No pressure lies above.
+    pub greatest: f64,
 }
 
 /// The range of one quantity of a subject at a condition. Values are SI.

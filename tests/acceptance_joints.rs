@@ -124,6 +124,62 @@ fn only_a_shrink_joint_that_needs_heat_is_out_of_reach() {
     }
 }
 
+/// A long joint of a solid shaft with an exact interference of 0.02 mm.
+fn long_joint(lines: &str, requirement: &str) -> Run {
+    spec(&format!(
+        r#"
+condition day 20
+part hub of light {{ bore = dia 40 exact }}
+part shaft of steel {{ seat = dia 40 +0.020000000001/+0.02 }}
+fit seat = shaft.seat in hub.bore {{
+  joint {{
+    hub    outside 80
+    shaft  solid
+    {lines}
+  }}
+  {requirement}
+}}
+"#
+    ))
+}
+
+#[test]
+fn friction_along_a_long_joint_leaves_a_band_of_pressure() {
+    let run = long_joint("length 60; friction 0.18", "");
+    let [band] = run.evaluation.friction_bands[..] else { panic!("one band") };
+    let kappa = 0.050_231_744_45;
+    assert!((band.coupling / kappa - 1.0).abs() < 1e-9, "{}", band.coupling);
+    let p = run.range("seat", Quantity::Pressure, "day").0 * 1e6;
+    assert_range((band.least, band.greatest), (p / (1.0 + kappa), p / (1.0 - kappa)), 1e-8);
+    // In proportion to friction and length; nothing where friction is not stated.
+    let run = long_joint("length 20; friction 0.09", "");
+    let sixth = run.evaluation.friction_bands[0].coupling * 6.0;
+    assert!((sixth / kappa - 1.0).abs() < 1e-9, "{sixth}");
+    assert!(long_joint("length 60", "").evaluation.friction_bands.is_empty());
+}
+
+#[test]
+fn a_requirement_that_friction_turns_over_is_warned_of() {
+    let p = long_joint("length 60", "").range("seat", Quantity::Pressure, "day").0;
+    let said = |share: f64, sign: &str| {
+        let limit = p * share;
+        let requirement = format!("require \"LJ\" pressure {sign} {limit:.6} MPa");
+        let run = long_joint("length 60; friction 0.18", &requirement);
+        assert!(run.verdict("LJ", "day").margin > 0.0);
+        run.words().iter().any(|w| w.starts_with("friction-along-seat"))
+    };
+    // The band: p/1.0502 … p/0.9498.
+    assert!(said(1.04, "<=") && said(1.052, "<=") && !said(1.054, "<="));
+    assert!(said(0.96, ">=") && said(0.953, ">=") && !said(0.951, ">="));
+}
+
+#[test]
+fn friction_that_may_hold_all_leaves_no_upper_bound() {
+    let run = long_joint("length 1300; friction 0.18", "require \"LJ\" pressure <= 1000 MPa");
+    assert_eq!(run.evaluation.friction_bands[0].greatest, f64::INFINITY);
+    assert!(run.words().iter().any(|w| w.starts_with("friction-along-seat")));
+}
+
 fn three_rings(sleeve_bore: &str, case_bore: &str, condition: &str) -> Run {
     spec(&format!(
         r#"

@@ -283,6 +283,8 @@ codes! {
     StressPastYield = "stress-past-yield", Error;
     /// A joint that neither heat nor cold makes within what the materials allow.
     JoiningOutOfReach = "joining-out-of-reach", Warning;
+    /// A requirement that holds unless friction along the joint is counted.
+    FrictionAlongSeat = "friction-along-seat", Warning;
     /// A part that turns, whose growth by rotation is not computed.
     SpeedWithoutEffect = "speed-without-effect", Warning;
     /// A charge that has no room left in its cavity.

@@ -4,6 +4,7 @@
 //! together. Stiffness is taken on nominal sizes at the reference temperature, interference on free
 //! sizes at the parts' own temperatures.
 
+pub(crate) mod band;
 pub(crate) mod joining;
 mod stack;
 
@@ -47,11 +48,23 @@ pub(crate) fn quantity(
     let Some(joint) = &fit.joint else { return super::expression::clearance(scene, at, fit) };
     let stack = Stack::of(scene.assembly, subject);
     let pressures = stack.pressures(scene, at)?;
+    carried(scene, at, subject, joint, (&stack, &pressures), (quantity, of_yield))
+}
+
+/// What follows from the pressures in a stack.
+fn carried(
+    scene: &Scene<'_>,
+    at: At,
+    subject: SubjectId,
+    joint: &Joint,
+    (stack, pressures): (&Stack, &[Recorded]),
+    (quantity, of_yield): (Quantity, bool),
+) -> Result<Recorded, Unable> {
     let place = stack.contact_of(subject);
     let pressure = pressures[place].clone();
     Ok(match quantity {
         Quantity::Stress(part) => {
-            let stress = stress(scene, at, &stack, &pressures, part)?;
+            let stress = stress(scene, at, stack, pressures, part)?;
             if of_yield { stress / yield_strength(scene, at, part)? } else { stress }
         }
         Quantity::Torque | Quantity::AxialForce => {

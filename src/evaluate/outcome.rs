@@ -20,6 +20,10 @@ pub struct Evaluation {
     pub selections: Vec<Selection>,
     /// What a shop needs to make each joint.
     pub shop_cards: Vec<ShopCard>,
+    /// How far friction along each joint may shift its pressure.
+    pub friction_bands: Vec<FrictionBand>,
+    /// Requirements that hold unless friction along a joint is counted.
+    pub turned_over: Vec<TurnedOver>,
     /// The share of assemblies that break some requirement somewhere, where the spec asks for
     /// statistics.
     pub assembly_yield: Option<AssemblyYield>,
@@ -296,6 +300,37 @@ pub struct Drawn {
     /// The width that was asked for of its confidence interval, where the most draws allowed did
     /// not reach it.
     pub missed: Option<f64>,
+}
+
+/// The pressures that friction along a joint of two rings leaves possible. Pa.
+#[derive(Debug, Clone, Copy, PartialEq)]
+pub struct FrictionBand {
+    /// Which joint.
+    pub subject: SubjectId,
+    /// Where.
+    pub condition: ConditionId,
+    /// The greatest share by which it shifts the pressure: κ of
+    /// [`crate::mechanics::joint::axial_coupling`], at its upper bound.
+    pub coupling: f64,
+    /// No pressure lies below.
+    pub least: f64,
+    /// No pressure lies above; infinite where κ may reach 1.
+    pub greatest: f64,
+}
+
+/// A requirement that holds, and would not with friction along the joint counted.
+#[derive(Debug, Clone, Copy, PartialEq)]
+pub struct TurnedOver {
+    /// Index of its verdict in the evaluation.
+    pub verdict: usize,
+    /// The side on which it passes its limit, or further from holding.
+    pub governing: Side,
+    /// Least value within the band, in the quantity's SI unit.
+    pub least: f64,
+    /// Greatest value within the band.
+    pub greatest: f64,
+    /// The greatest share by which the pressure is shifted.
+    pub coupling: f64,
 }
 
 /// What a shop needs to join an outer part and an inner one without force. Temperatures in K; they

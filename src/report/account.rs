@@ -4,7 +4,7 @@ use super::basis::grounds;
 use super::cause::Cause;
 use super::coordinate::{coordinates, scale};
 use super::shop::cards;
-use super::{Account, Case, Contribution, FailingShare, Figure, Measure, Statistics};
+use super::{Account, Case, Contribution, FailingShare, Figure, FrictionBand, Measure, Statistics};
 use crate::evaluate::Evaluation;
 use crate::evaluate::outcome::{self, Verdict};
 use crate::findings::{standing, thin_margin, words};
@@ -36,6 +36,7 @@ pub fn account(assembly: &Assembly, evaluation: &Evaluation, today: &str) -> Acc
             drawn: y.drawn,
         }),
         shop: cards(assembly, evaluation),
+        bands: bands(assembly, evaluation),
         grounds: grounds(assembly, evaluation),
     }
 }
@@ -75,6 +76,18 @@ fn figure(assembly: &Assembly, figure: &outcome::Figure) -> Figure {
     }
 }
 
+fn bands(assembly: &Assembly, evaluation: &Evaluation) -> Vec<FrictionBand> {
+    let band = |band: &outcome::FrictionBand| FrictionBand {
+        joint: assembly.subject(band.subject).name.clone(),
+        condition: assembly.condition(band.condition).name.clone(),
+        unit: unit_of(assembly, band.subject, Quantity::Pressure, false),
+        coupling: band.coupling,
+        least: band.least,
+        greatest: band.greatest,
+    };
+    evaluation.friction_bands.iter().map(band).collect()
+}
+
 /// The word a subject is declared with.
 fn kind_word(subject: &Subject) -> &'static str {
     match subject.kind {
@@ -88,18 +101,26 @@ fn kind_word(subject: &Subject) -> &'static str {
 
 /// The unit of a figure: that of a requirement on it, else the one its kind is shown in.
 fn unit(assembly: &Assembly, figure: &outcome::Figure) -> &'static Unit {
+    unit_of(assembly, figure.subject, figure.quantity, figure.of_yield)
+}
+
+fn unit_of(
+    assembly: &Assembly,
+    subject: SubjectId,
+    quantity: Quantity,
+    share_of_yield: bool,
+) -> &'static Unit {
     let required = assembly
         .requirements
         .iter()
-        .find(|r| r.subject == figure.subject && r.quantity == figure.quantity)
-        .filter(|r| of_yield(r) == figure.of_yield);
+        .find(|r| r.subject == subject && r.quantity == quantity)
+        .filter(|r| of_yield(r) == share_of_yield);
     if let Some(requirement) = required {
         return shown_unit(requirement);
     }
-    let share = figure.of_yield || figure.quantity == Quantity::Ullage;
     match find("%") {
-        Some(percent) if share => percent,
-        _ => assembly.defaults.shown(kind(assembly, figure.subject, figure.quantity)),
+        Some(percent) if share_of_yield || quantity == Quantity::Ullage => percent,
+        _ => assembly.defaults.shown(kind(assembly, subject, quantity)),
     }
 }
 

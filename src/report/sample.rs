@@ -1,6 +1,8 @@
 //! A report made by hand, which the tests of every rendering share.
 
-use super::{Account, Case, Cause, Contribution, Coordinate, Figure, Grounds, Measure};
+use super::{
+    Account, Case, Cause, Contribution, Coordinate, Figure, FrictionBand, Grounds, Measure,
+};
 use super::{Assumption, MaterialNote, PartTemperature, Report, ShopCard, Spec};
 use crate::diagnostic::{Code, Diagnostic};
 use crate::findings::Standing;
@@ -184,6 +186,14 @@ pub(super) fn report() -> Report {
                     inner_data: 173.15,
                     may_be_heated: true,
                     together: None,
+                }],
+                bands: vec![FrictionBand {
+                    joint: "outer_race".into(),
+                    condition: "cold".into(),
+                    unit: unit("MPa"),
+                    coupling: 0.0412,
+                    least: 11.52e6,
+                    greatest: 14.07e6,
                 }],
                 grounds: grounds(),
             }),

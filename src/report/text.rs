@@ -4,6 +4,7 @@
 //! word, and the range drawn to scale between its limits. What holds is said briefly; the rest is
 //! given on demand. Bounds and margins are rounded outward.
 
+mod band;
 mod detail;
 mod grounds;
 mod shop;
@@ -115,6 +116,7 @@ fn whole(out: &mut String, spec: &Spec, account: &Account, extent: Extent, look:
     }
     if extent == Extent::Detail {
         detail::render(out, account, look);
+        band::render(out, account, look);
         shop::render(out, account, look);
         grounds::render(out, account, look);
     }
@@ -153,6 +155,17 @@ fn section(out: &mut String, title: &str, look: Look) {
 fn paragraph(out: &mut String, indent: usize, text: &str, role: Role, look: Look) {
     for line in wrap(&visible(text), look.width.saturating_sub(indent)) {
         out.push_str(&format!("{}{}\n", blanks(indent), look.paint(role, &line)));
+    }
+}
+
+/// A line as it is, wrapped only where it is too long.
+fn paragraph_kept(out: &mut String, indent: usize, text: &str, look: Look) {
+    let line = format!("{}{}", " ".repeat(indent), visible(text));
+    if width(&line) <= look.width {
+        out.push_str(line.trim_end());
+        out.push('\n');
+    } else {
+        paragraph(out, indent, text, Role::Plain, look);
     }
 }
 

@@ -45,12 +45,33 @@ pub struct SpecEntry {
     pub requirements: Vec<RequirementEntry>,
     /// What a shop needs to make each joint; temperatures in the file's unit, clearance in mm.
     pub shop_cards: Vec<ShopCardEntry>,
+    /// How far friction along each joint may shift its pressure, where friction is stated.
+    #[serde(skip_serializing_if = "Vec::is_empty")]
+    pub friction_bands: Vec<FrictionBandEntry>,
     /// The share of assemblies that meet every requirement at every condition, where statistics
     /// were asked for.
     #[serde(skip_serializing_if = "Option::is_none")]
     pub assembly_yield: Option<YieldEntry>,
     /// What is wrong or worth knowing.
     pub findings: Vec<FindingEntry>,
+}
+
+/// The pressures that friction along a joint leaves possible at a condition.
+#[derive(Debug, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
+pub struct FrictionBandEntry {
+    /// The joint.
+    pub joint: String,
+    /// The condition.
+    pub condition: String,
+    /// The greatest share by which the pressure is shifted.
+    pub coupling: Option<f64>,
+    /// Unit of the pressures.
+    pub unit: &'static str,
+    /// No pressure lies below.
+    pub least: Option<f64>,
+    /// No pressure lies above; `null` where there is no bound.
+    pub greatest: Option<f64>,
 }
 
 /// What a shop needs to join two parts without force, for every pair within the tolerances.

@@ -61,6 +61,11 @@ impl Stack {
         stack
     }
 
+    /// True for two rings with one contact.
+    pub(super) fn is_pair(&self) -> bool {
+        self.parts.len() == 2
+    }
+
     /// Which contact a fit is.
     pub(super) fn contact_of(&self, fit: SubjectId) -> usize {
         self.fits.iter().position(|&f| f == fit).unwrap_or(0)

@@ -1,7 +1,7 @@
 //! What the figures of a spec rest on: temperatures, materials, numbers no drawing states, signs,
 //! cautions. Guesses and values from memory stand out by a word.
 
-use super::{paragraph, section};
+use super::{paragraph, paragraph_kept, section};
 use crate::findings::number::{Round, with_unit};
 use crate::findings::words::count;
 use crate::report::look::{Look, Role};
@@ -60,17 +60,6 @@ fn range(least: f64, greatest: f64, unit: &'static Unit) -> String {
     let from = with_unit(least, unit, Round::Nearest);
     let to = with_unit(greatest, unit, Round::Nearest);
     if from == to { from } else { format!("{from} .. {to}") }
-}
-
-/// A line as it is, wrapped only where it is too long.
-fn paragraph_kept(out: &mut String, indent: usize, text: &str, look: Look) {
-    let line = format!("{}{}", " ".repeat(indent), visible(text));
-    if width(&line) <= look.width {
-        out.push_str(line.trim_end());
-        out.push('\n');
-    } else {
-        paragraph(out, indent, text, Role::Plain, look);
-    }
 }
 
 fn materials(out: &mut String, account: &Account, look: Look) {

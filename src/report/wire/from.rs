@@ -2,12 +2,15 @@
 //! columns, what is not a number into `null`.
 
 use super::{
-    ContributorEntry, Document, FindingEntry, LabelEntry, Map, RequirementEntry, ResultEntry,
-    SCHEMA, ShopCardEntry, SpecEntry, SummaryEntry, TogetherEntry, WindowEntry, YieldEntry,
+    ContributorEntry, Document, FindingEntry, FrictionBandEntry, LabelEntry, Map, RequirementEntry,
+    ResultEntry, SCHEMA, ShopCardEntry, SpecEntry, SummaryEntry, TogetherEntry, WindowEntry,
+    YieldEntry,
 };
 use crate::diagnostic::{Diagnostic, Label};
 use crate::report::summary::summary;
-use crate::report::{Account, Case, Contribution, Coordinate, Figure, Report, ShopCard, Spec};
+use crate::report::{
+    Account, Case, Contribution, Coordinate, Figure, FrictionBand, Report, ShopCard, Spec,
+};
 use crate::source::Sources;
 use crate::units::{Unit, find};
 
@@ -42,6 +45,8 @@ fn spec(spec: &Spec) -> SpecEntry {
         shop_cards: account.map_or_else(Vec::new, |a| {
             a.shop.iter().map(|card| shop_card(card, a.temperature)).collect()
         }),
+        friction_bands: account
+            .map_or_else(Vec::new, |a| a.bands.iter().map(friction_band).collect()),
         assembly_yield: account.and_then(|a| a.failing).map(|f| YieldEntry {
             share: number(1.0 - f.share),
             interval: [number(1.0 - f.interval.1), number(1.0 - f.interval.0)],
@@ -50,6 +55,17 @@ fn spec(spec: &Spec) -> SpecEntry {
             width_missed: f.drawn.and_then(|d| d.missed),
         }),
         findings: spec.findings.iter().map(|d| finding(d, &spec.sources)).collect(),
+    }
+}
+
+fn friction_band(band: &FrictionBand) -> FrictionBandEntry {
+    FrictionBandEntry {
+        joint: band.joint.clone(),
+        condition: band.condition.clone(),
+        coupling: number(band.coupling),
+        unit: band.unit.symbol,
+        least: value(band.least, band.unit),
+        greatest: value(band.greatest, band.unit),
     }
 }
 
