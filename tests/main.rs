@@ -13,6 +13,7 @@ mod laws;
 mod materials;
 mod mechanics;
 mod published;
+mod samples;
 mod select;
 mod standards_laws;
 mod statistics_laws;
