@@ -1,7 +1,7 @@
 //! From figures and verdicts to findings: what fails, where, by how much, and what would mend it.
 //!
 //! One file a kind of finding, with its rule and its words. Knows no format and no colour; numbers
-//! are put into words in [`number`] only, names in [`words`] only.
+//! are put into words in [`number`] only, names in [`words`] only, temperatures in [`window`].
 
 mod beyond_data;
 mod concession;
@@ -19,6 +19,7 @@ pub mod standing;
 mod statistical;
 pub mod thin_margin;
 mod undecided;
+pub mod window;
 pub mod words;
 mod yielding;
 

@@ -215,11 +215,22 @@ pub struct Case {
     pub statistics: Option<Statistics>,
     /// The mean here minus the mean at reference.
     pub thermal_shift: Option<f64>,
-    /// Temperatures at which it would hold, K, open ends infinite; multiples of the condition's
-    /// distance from reference where `window_scaled`.
-    pub window: Option<Vec<(f64, f64)>>,
+    /// Temperatures at which it would hold.
+    pub window: Option<Window>,
+}
+
+/// The temperatures at which a requirement would hold.
+#[derive(Debug, Clone)]
+pub struct Window {
+    /// In words.
+    pub words: String,
+    /// The intervals, K, an end that only the data set infinite; multiples of the condition's
+    /// departure from reference where `scaled`.
+    pub intervals: Vec<(f64, f64)>,
+    /// As far as was looked: as the data go.
+    pub looked_at: (f64, f64),
     /// True where parts have unequal temperatures.
-    pub window_scaled: bool,
+    pub scaled: bool,
 }
 
 /// How a quantity varies from assembly to assembly, scenarios at their worst. Values are SI.

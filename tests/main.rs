@@ -20,3 +20,4 @@ mod statistics_laws;
 mod support;
 mod syntax;
 mod tidy;
+mod windows;

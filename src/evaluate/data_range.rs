@@ -7,7 +7,7 @@ use crate::model::{Assembly, Owner, PartId, SubjectId, SubjectKind};
 use crate::numeric::Interval;
 
 /// A temperature may lie this far beyond the data, K: 293 K and 20 °C are the same to every table.
-const SLACK: f64 = 0.2;
+pub(crate) const SLACK: f64 = 0.2;
 
 /// The temperature of every part and fill at every condition.
 pub(crate) fn temperatures(assembly: &Assembly) -> Vec<PartTemperature> {

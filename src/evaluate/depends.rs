@@ -1,6 +1,6 @@
 //! What a subject depends on, directly or through other subjects.
 
-use crate::model::{Assembly, DimensionId, Expr, ExprKind, PartId, SubjectId, SubjectKind};
+use crate::model::{Assembly, DimensionId, Expr, ExprKind, Owner, PartId, SubjectId, SubjectKind};
 use std::collections::BTreeSet;
 
 /// The dimensions that a subject contains.
@@ -17,6 +17,13 @@ pub(crate) fn parts(assembly: &Assembly, subject: SubjectId) -> BTreeSet<PartId>
     let mut parts = found.parts;
     parts.extend(found.dimensions.iter().map(|&d| assembly.dimension(d).part));
     parts
+}
+
+/// Everyone whose temperature a subject feels: its parts, and the charges of fills.
+pub(crate) fn owners(assembly: &Assembly, subject: SubjectId) -> Vec<Owner> {
+    let parts = parts(assembly, subject).into_iter().map(Owner::Part);
+    let fill = matches!(assembly.subject(subject).kind, SubjectKind::Fill(_));
+    parts.chain(fill.then_some(Owner::Fill(subject))).collect()
 }
 
 #[derive(Default)]

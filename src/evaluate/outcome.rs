@@ -137,14 +137,20 @@ pub struct Contributor {
     pub share_of_range: f64,
 }
 
-/// The temperatures at which a requirement holds, as proven intervals of the scale λ, in
-/// `T = Tref + λ·(T − Tref)` of every part. Issued with the temperature unit by the report.
+/// The temperatures at which a requirement holds, as proven intervals of one temperature that all
+/// parts share, K, or else of a factor λ: `T = Tref + λ·(T_stated − Tref)` for every part.
 #[derive(Debug, Clone, PartialEq)]
 pub struct Window {
-    /// The intervals in K where all parts share one temperature; open ends are infinite.
+    /// The intervals; the one that holds the condition comes first. An end that only the data of the
+    /// materials set is infinite.
     pub intervals: Vec<(f64, f64)>,
-    /// True where parts have unequal temperatures, so that the numbers are λ and not K.
+    /// As far as was looked: as the data go. Infinite where they have no end.
+    pub looked_at: (f64, f64),
+    /// True where the numbers are λ and not K.
     pub scaled: bool,
+    /// Where they are λ: how far each part or charge with one temperature is from reference at
+    /// λ = 1, K.
+    pub departures: Vec<(Owner, f64)>,
 }
 
 /// The temperature of a part or fill at a condition.

@@ -1,7 +1,10 @@
 //! Temperatures of parts and fills, K.
 
+use super::ranges;
 use super::scene::{At, Scene, Way};
-use crate::model::{Assembly, Condition, ConditionId, OwnTemperature, Owner, Thermal, Unknown};
+use crate::model::{
+    Assembly, Condition, ConditionId, History, OwnTemperature, Owner, Thermal, Unknown,
+};
 use crate::numeric::{Number, Recorded};
 
 /// The temperature of a part or fill in a state of the world.
@@ -11,21 +14,52 @@ use crate::numeric::{Number, Recorded};
 pub(crate) fn of(scene: &Scene<'_>, at: At, owner: Owner) -> Recorded {
     let reference = Recorded::exact(scene.assembly.reference);
     let At::Condition(id) = at else { return reference };
-    let real = in_condition(scene, id, owner);
     match scene.shift(id) {
-        None => real,
-        // A range is not a tolerance about its middle: it is asked point by point.
-        Some(Way::Common(temperature)) if scene.assembly.condition(id).is_range() => {
-            temperature.clone()
-        }
-        Some(Way::Common(temperature)) => {
-            temperature.clone() + (real - at_middle(scene.assembly, id, owner))
-        }
+        None => in_condition(scene, id, owner),
+        Some(Way::Common(temperature)) => temperature.clone() + stated(scene, id, owner).tolerance,
         Some(Way::Scaled(factor)) => {
-            let middle = at_middle(scene.assembly, id, owner);
-            let departure = factor.clone() * (middle - scene.assembly.reference);
-            reference + departure + (real - middle)
+            let Stated { nominal, tolerance } = stated(scene, id, owner);
+            factor.clone() * (nominal - scene.assembly.reference) + reference + tolerance
         }
+    }
+}
+
+/// A temperature in two parts: what the spec asks for, and how far it may be off. K.
+pub(crate) struct Stated {
+    /// A point; every temperature of a range; that of every time of a history.
+    pub(crate) nominal: Recorded,
+    /// About zero.
+    pub(crate) tolerance: Recorded,
+}
+
+/// The temperature of a part or fill in a condition, what is asked for apart from its tolerance.
+pub(crate) fn stated(scene: &Scene<'_>, id: ConditionId, owner: Owner) -> Stated {
+    let condition = scene.assembly.condition(id);
+    let about = |unknown: Unknown| {
+        let middle = ranges::middle(scene.assembly, unknown);
+        Stated { nominal: Recorded::exact(middle), tolerance: scene.unknown(unknown) - middle }
+    };
+    let shared = |owner: Option<Owner>| match &condition.thermal {
+        Thermal::Uniform(_) if !condition.is_range() => about(Unknown::Temperature(id)),
+        Thermal::Uniform(_) => Stated {
+            nominal: scene.unknown(Unknown::Temperature(id)),
+            tolerance: Recorded::exact(0.0),
+        },
+        Thermal::History(history) => Stated {
+            nominal: in_history(scene, id, history, owner),
+            tolerance: scene.unknown(Unknown::Temperature(id)),
+        },
+    };
+    let own = || about(Unknown::OwnTemperature { condition: id, owner });
+    let above = |base: Stated| {
+        let own = own();
+        Stated { nominal: base.nominal + own.nominal, tolerance: base.tolerance + own.tolerance }
+    };
+    match condition.state(owner).and_then(|s| s.temperature.as_ref()) {
+        None => shared(Some(owner)),
+        Some(OwnTemperature::Absolute(_)) => own(),
+        Some(OwnTemperature::Above { base: Some(base), .. }) => above(stated(scene, id, *base)),
+        Some(OwnTemperature::Above { base: None, .. }) => above(shared(None)),
     }
 }
 
@@ -60,13 +94,21 @@ fn common(
     let shared = scene.unknown(Unknown::Temperature(id));
     match &condition.thermal {
         Thermal::Uniform(_) => shared,
-        Thermal::History(history) => {
-            let column = history.parts.iter().find(|(o, _)| Some(*o) == owner).map(|(_, c)| c);
-            match column.or(history.ambient.as_ref()) {
-                Some(curve) => scene.unknown(Unknown::Time(id)).apply(curve) + shared,
-                // The resolver refuses a part without a column; nothing else asks.
-                None => Recorded::exact(scene.assembly.reference) + shared,
-            }
-        }
+        Thermal::History(history) => in_history(scene, id, history, owner) + shared,
+    }
+}
+
+/// The temperature that a history has for someone, without its tolerance.
+fn in_history(
+    scene: &Scene<'_>,
+    id: ConditionId,
+    history: &History,
+    owner: Option<Owner>,
+) -> Recorded {
+    let column = history.parts.iter().find(|(o, _)| Some(*o) == owner).map(|(_, c)| c);
+    match column.or(history.ambient.as_ref()) {
+        Some(curve) => scene.unknown(Unknown::Time(id)).apply(curve),
+        // The resolver refuses a part without a column; nothing else asks.
+        None => Recorded::exact(scene.assembly.reference),
     }
 }

@@ -1,18 +1,18 @@
 //! The temperatures at which a requirement holds, as proven intervals.
 //!
 //! Where all parts of a subject share one temperature, that temperature is moved; else the
-//! departures of all parts from the reference are scaled by one factor λ. Tolerances are kept. The
-//! axis is bisected: a piece is settled when the requirement is proven to hold on all of it, or to
+//! departures of all parts from the reference, at every time of a history, are scaled by one factor
+//! λ. Tolerances are kept; a range is not a tolerance about its middle. The axis is bisected: a piece is settled when the requirement is proven to hold on all of it, or to
 //! fail on all of it; slivers that are neither count as failing. Only temperatures within the data
 //! of every material are looked at.
 
 use super::outcome::{Chosen, Outcome, Verdict, Window};
 use super::scene::{At, Response, Scene, Shift, Way};
-use super::{depends, quantity, temperature};
+use super::{data_range, depends, quantity, temperature};
 use crate::model::{Assembly, ConditionId, Owner, Requirement, Thermal};
-use crate::numeric::Interval;
 use crate::numeric::extremes::extremes_within;
 use crate::numeric::tolerance::{EXTREME_GAP, WINDOW_SLACK, WINDOW_SLIVER};
+use crate::numeric::{Interval, Recorded};
 
 /// Farthest factor that is looked at where temperatures are scaled.
 const MOST_SCALE: f64 = 10.0;
@@ -22,6 +22,8 @@ const MOST_BOXES: usize = 16;
 const MOST_PIECES: usize = 800;
 /// Temperatures that are looked at where a material's data are unbounded, K.
 const WIDEST: (f64, f64) = (1.0, 2000.0);
+/// Temperatures this near are one, K.
+const SAME: f64 = 1e-9;
 
 /// The window of a verdict; `None` where there is nothing to move.
 pub(crate) fn window(assembly: &Assembly, verdict: &Verdict, members: &[Chosen]) -> Option<Window> {
@@ -51,65 +53,127 @@ pub(crate) fn window(assembly: &Assembly, verdict: &Verdict, members: &[Chosen])
     let start = axis.start.clamp(from, to);
     search.look(from, start, axis.sliver);
     search.look(start, to, axis.sliver);
-    Some(Window { intervals: joined(search.held, axis.range, axis.start), scaled: axis.scaled })
+    let ends = axis.endless;
+    Some(Window {
+        intervals: joined(search.held, axis.range, axis.start),
+        looked_at: (
+            if ends.0 { f64::NEG_INFINITY } else { from },
+            if ends.1 { f64::INFINITY } else { to },
+        ),
+        scaled: axis.scaled,
+        departures: axis.departures,
+    })
 }
 
 /// What is moved, and how far it may go.
 struct Axis {
     scaled: bool,
     range: (f64, f64),
+    /// The ends that are not those of some material's data.
+    endless: (bool, bool),
     start: f64,
     sliver: f64,
+    departures: Vec<(Owner, f64)>,
+}
+
+/// A temperature with its tolerance, and what its material's data cover. K.
+struct Felt {
+    owner: Owner,
+    nominal: Interval,
+    tolerance: Interval,
+    valid: Interval,
+}
+
+impl Felt {
+    fn read(assembly: &Assembly, condition: ConditionId, owner: Owner) -> Option<Self> {
+        let hull = |part: fn(temperature::Stated) -> Recorded| {
+            let record = |scene: &Scene<'_>| Ok(part(temperature::stated(scene, condition, owner)));
+            // Each unknown occurs once, so the natural enclosure is the hull.
+            let response = Scene::record(assembly, &[], &[], record).ok()?;
+            Some(response.tape.value(&response.ranges))
+        };
+        Some(Felt {
+            owner,
+            nominal: hull(|t| t.nominal)?,
+            tolerance: hull(|t| t.tolerance)?,
+            valid: assembly.material_of(owner).map_or(Interval::ENTIRE, |m| m.valid()),
+        })
+    }
 }
 
 impl Axis {
     fn of(assembly: &Assembly, requirement: &Requirement, condition: ConditionId) -> Option<Self> {
-        let state = assembly.condition(condition);
-        if matches!(state.thermal, Thermal::History(_)) {
-            // A history is not one temperature, nor one departure, that could be moved.
-            return None;
-        }
-        let parts: Vec<_> = depends::parts(assembly, requirement.subject).into_iter().collect();
-        let middles: Vec<f64> = parts
+        let felt: Vec<Felt> = depends::owners(assembly, requirement.subject)
+            .into_iter()
+            .map(|owner| Felt::read(assembly, condition, owner))
+            .collect::<Option<_>>()?;
+        let first = felt.first()?.nominal;
+        let near = |a: f64, b: f64| (a - b).abs() < SAME;
+        let alike = felt
             .iter()
-            .map(|&p| temperature::at_middle(assembly, condition, Owner::Part(p)))
-            .collect();
-        let first = *middles.first()?;
-        let alike = middles.iter().all(|&t| (t - first).abs() < 1e-9)
-            && matches!(state.thermal, Thermal::Uniform(_));
-        let valid = |p: &crate::model::PartId| {
-            let valid = assembly.part(*p).material.valid();
-            (valid.lo().max(WIDEST.0), valid.hi().min(WIDEST.1))
-        };
-        if alike {
-            let range = parts.iter().map(valid).fold(WIDEST, |(a, b), (c, d)| (a.max(c), b.min(d)));
-            return (range.0 < range.1).then_some(Axis {
-                scaled: false,
-                range,
-                start: first,
-                sliver: WINDOW_SLIVER,
-            });
+            .all(|f| near(f.nominal.lo(), first.lo()) && near(f.nominal.hi(), first.hi()));
+        match assembly.condition(condition).thermal {
+            Thermal::Uniform(_) if alike => Axis::common(&felt, first.mid()),
+            Thermal::Uniform(_) | Thermal::History(_) => Axis::scaled(assembly.reference, &felt),
         }
-        // λ ≥ 0, as far as every part stays within its data.
-        let mut most = MOST_SCALE;
-        let mut widest: f64 = 0.0;
-        for (part, middle) in parts.iter().zip(&middles) {
-            let departure = middle - assembly.reference;
-            let (low, high) = valid(part);
-            let room =
-                if departure > 0.0 { high - assembly.reference } else { assembly.reference - low };
-            if departure != 0.0 {
-                most = most.min((room / departure.abs()).max(0.0));
-                widest = widest.max(departure.abs());
-            }
-        }
-        (widest > 0.0).then_some(Axis {
-            scaled: true,
-            range: (0.0, most),
-            start: 1.0,
-            sliver: WINDOW_SLIVER / widest,
+    }
+
+    /// One temperature for all, as far as all have data.
+    fn common(felt: &[Felt], start: f64) -> Option<Self> {
+        let from = felt.iter().map(|f| f.valid.lo() - f.tolerance.lo()).fold(WIDEST.0, f64::max);
+        let to = felt.iter().map(|f| f.valid.hi() - f.tolerance.hi()).fold(WIDEST.1, f64::min);
+        // The spec's own temperature counts as within the data by a hair; see `data_range`.
+        let from = if near_data(start, from) { from.min(start) } else { from };
+        let to = if near_data(start, to) { to.max(start) } else { to };
+        (from < to).then_some(Axis {
+            scaled: false,
+            range: (from, to),
+            endless: (from == WIDEST.0, to == WIDEST.1),
+            start,
+            sliver: WINDOW_SLIVER,
+            departures: Vec::new(),
         })
     }
+
+    /// λ ≥ 0, as far as everyone stays within the data.
+    fn scaled(reference: f64, felt: &[Felt]) -> Option<Self> {
+        let mut most = MOST_SCALE;
+        let mut widest: f64 = 0.0;
+        for f in felt {
+            let departs = (f.nominal.lo() - reference, f.nominal.hi() - reference);
+            if departs.0 < 0.0 {
+                let room = reference + f.tolerance.lo() - f.valid.lo();
+                most = most.min((room / -departs.0).max(0.0));
+            }
+            if departs.1 > 0.0 {
+                let room = f.valid.hi() - f.tolerance.hi() - reference;
+                most = most.min((room / departs.1).max(0.0));
+            }
+            widest = widest.max(-departs.0).max(departs.1);
+        }
+        let one_temperature = |f: &Felt| (f.nominal.width() < SAME).then_some(f.nominal.mid());
+        let departures =
+            felt.iter().filter_map(|f| Some((f.owner, one_temperature(f)? - reference))).collect();
+        if widest < SAME {
+            return None;
+        }
+        if near_data(widest, most * widest) {
+            most = most.max(1.0);
+        }
+        Some(Axis {
+            scaled: true,
+            range: (0.0, most),
+            endless: (false, false),
+            start: 1.0,
+            sliver: WINDOW_SLIVER / widest,
+            departures,
+        })
+    }
+}
+
+/// Whether a temperature of the spec lies so little beyond the end of data that it counts as within.
+fn near_data(temperature: f64, end: f64) -> bool {
+    (temperature - end).abs() <= data_range::SLACK
 }
 
 struct Search<'a> {

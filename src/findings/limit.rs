@@ -118,7 +118,7 @@ fn finding(
         here.push_str(&format!("; also {}", others.join(", ")));
     }
     if let Some(window) = &worst.verdict.window {
-        here.push_str(&format!("; {}", words::window(assembly, window)));
+        here.push_str(&format!("; {}", super::window::sentence(assembly, window)));
     }
     let mut diagnostic =
         Diagnostic::new(code(requirement.quantity, side), requirement.span, message).here(here);

@@ -1,7 +1,5 @@
 //! The names of things in sentences.
 
-use super::number::{Round, with_unit};
-use crate::evaluate::outcome::Window;
 use crate::model::{Assembly, Owner, Quantity, Requirement, Unknown};
 use crate::span::Span;
 
@@ -159,31 +157,4 @@ pub fn place(assembly: &Assembly, unknown: Unknown) -> Span {
         | Unknown::Stiffness { restraint: s, .. }
         | Unknown::Area { restraint: s, .. } => assembly.subject(s).span,
     }
-}
-
-/// Where a requirement holds, such as `holds up to 71.3 °C`; rounded inward.
-pub fn window(assembly: &Assembly, window: &Window) -> String {
-    let Some(first) = window.intervals.first() else {
-        return "holds at no temperature its materials are known for".to_string();
-    };
-    let unit = assembly.defaults.temperature;
-    let number = |x: f64, round| {
-        if window.scaled {
-            let digits = super::number::digits(x, 2, round);
-            format!("{digits} times the departure from reference")
-        } else {
-            with_unit(x, unit, round)
-        }
-    };
-    let one = |&(from, to): &(f64, f64)| match (from.is_finite(), to.is_finite()) {
-        (true, true) => format!("from {} to {}", number(from, Round::Up), number(to, Round::Down)),
-        (true, false) => format!("from {} on", number(from, Round::Up)),
-        (false, true) => format!("up to {}", number(to, Round::Down)),
-        (false, false) => "wherever its materials are known".to_string(),
-    };
-    let mut words = format!("holds {}", one(first));
-    if let Some(second) = window.intervals.get(1) {
-        words.push_str(&format!(" and {}", one(second)));
-    }
-    words
 }

@@ -4,10 +4,12 @@ use super::basis::grounds;
 use super::cause::Cause;
 use super::coordinate::{coordinates, scale};
 use super::shop::cards;
-use super::{Account, Case, Contribution, FailingShare, Figure, FrictionBand, Measure, Statistics};
+use super::{
+    Account, Case, Contribution, FailingShare, Figure, FrictionBand, Measure, Statistics, Window,
+};
 use crate::evaluate::Evaluation;
 use crate::evaluate::outcome::{self, Verdict};
-use crate::findings::{standing, thin_margin, words};
+use crate::findings::{standing, thin_margin, window as words_of_window, words};
 use crate::model::{
     Assembly, Basis, Condition, Expr, ExprKind, Form, Method, Quantity, Requirement, Subject,
     SubjectId, SubjectKind, Unknown,
@@ -227,8 +229,20 @@ fn case(assembly: &Assembly, evaluation: &Evaluation, verdict: &Verdict, today: 
             .collect(),
         statistics: verdict.statistics.as_ref().map(|s| statistics(s, requirement.method)),
         thermal_shift: thermal_shift(assembly, evaluation, verdict),
-        window: verdict.window.as_ref().map(|w| w.intervals.clone()),
-        window_scaled: verdict.window.as_ref().is_some_and(|w| w.scaled),
+        window: verdict.window.as_ref().map(|w| window(assembly, requirement, w)),
+    }
+}
+
+fn window(assembly: &Assembly, requirement: &Requirement, found: &outcome::Window) -> Window {
+    // Windows are proven for every piece, also where statistics decide.
+    let by = if requirement.method == Method::WorstCase { "" } else { "in the worst case " };
+    let data =
+        words_of_window::data(assembly, found).map_or_else(String::new, |d| format!("; {d}"));
+    Window {
+        words: format!("{by}{}{data}", words_of_window::sentence(assembly, found)),
+        intervals: found.intervals.clone(),
+        looked_at: found.looked_at,
+        scaled: found.scaled,
     }
 }
 

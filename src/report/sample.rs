@@ -1,7 +1,7 @@
 //! A report made by hand, which the tests of every rendering share.
 
 use super::{
-    Account, Case, Cause, Contribution, Coordinate, Figure, FrictionBand, Grounds, Measure,
+    Account, Case, Cause, Contribution, Coordinate, Figure, FrictionBand, Grounds, Measure, Window,
 };
 use super::{Assumption, MaterialNote, PartTemperature, Report, ShopCard, Spec};
 use crate::diagnostic::{Code, Diagnostic};
@@ -78,8 +78,12 @@ fn case(figures: &[Figure], at: usize, requirement: usize, limits: &str) -> Case
         ],
         statistics: None,
         thermal_shift: Some(figure.unit.to_si(0.0041)),
-        window: Some(vec![(273.15, 331.25), (350.15, f64::INFINITY)]),
-        window_scaled: false,
+        window: Some(Window {
+            words: "holds from 0.0 °C to 58.1 °C and from 77.0 °C on".into(),
+            intervals: vec![(273.15, 331.25), (350.15, f64::INFINITY)],
+            looked_at: (173.15, 573.15),
+            scaled: false,
+        }),
     }
 }
 

@@ -235,10 +235,12 @@ pub struct RequirementEntry {
 #[cfg_attr(test, derive(schemars::JsonSchema))]
 pub struct WindowEntry {
     /// The file's temperature unit, or empty where the ends are multiples of the condition's
-    /// distance from reference.
+    /// departure from reference.
     pub unit: &'static str,
     /// `[from, to]`, an open end `null`.
     pub intervals: Vec<[Option<f64>; 2]>,
+    /// As far as was looked, which is as far as the data of the materials go.
+    pub looked_at: [Option<f64>; 2],
 }
 
 /// What one unknown does to a quantity.

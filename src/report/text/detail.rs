@@ -73,7 +73,7 @@ fn one(
         statistics::render(out, case, statistics, look);
     }
     if let Some(window) = &case.window {
-        paragraph(out, 2, &window_words(account, case, window), Role::Plain, look);
+        paragraph(out, 2, &window.words, Role::Plain, look);
     }
     if let Some(concession) = &case.concession {
         paragraph(out, 2, &format!("concession {concession}"), Role::Warn, look);
@@ -130,32 +130,4 @@ fn corner(out: &mut String, case: &Case, end: &str, value: &str, at: &[Coordinat
         format!("{end} {value} with {}", places.join(", "))
     };
     paragraph(out, 2, &text, Role::Plain, look);
-}
-
-/// The temperatures at which a requirement would hold. Rounded inward: a window never looks wider
-/// than was proven.
-fn window_words(account: &Account, case: &Case, window: &[(f64, f64)]) -> String {
-    let end = |value: f64, round| {
-        if case.window_scaled {
-            digits(value, 3, round)
-        } else {
-            with_unit(value, account.temperature, round)
-        }
-    };
-    let intervals: Vec<String> = window
-        .iter()
-        .map(|&(from, to)| match (from.is_finite(), to.is_finite()) {
-            (true, true) => format!("{} .. {}", end(from, Round::Up), end(to, Round::Down)),
-            (true, false) => format!("{} and above", end(from, Round::Up)),
-            (false, true) => format!("{} and below", end(to, Round::Down)),
-            (false, false) => "any temperature".to_string(),
-        })
-        .collect();
-    let of = if case.window_scaled { " times the condition's distance from reference" } else { "" };
-    // Windows are proven for every piece, also where statistics decide.
-    let by = if case.statistical { "in the worst case " } else { "" };
-    match intervals.is_empty() {
-        true => format!("{by}holds at no temperature"),
-        false => format!("{by}holds at {}{of}", intervals.join(", ")),
-    }
 }

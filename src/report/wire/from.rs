@@ -140,13 +140,15 @@ fn requirement(account: &Account, case: &Case) -> RequirementEntry {
     let of = |si: Option<f64>| si.and_then(|si| value(si, case.unit));
     let statistics = case.statistics.as_ref();
     let drawn = statistics.and_then(|s| s.failing.drawn);
-    let window = case.window.as_ref().map(|intervals| {
+    let window = case.window.as_ref().map(|window| {
         let end = |t: f64| {
-            if case.window_scaled { number(t) } else { value(t, account.temperature) }
+            if window.scaled { number(t) } else { value(t, account.temperature) }
         };
+        let ends = |&(from, to): &(f64, f64)| [end(from), end(to)];
         WindowEntry {
-            unit: if case.window_scaled { "" } else { account.temperature.symbol },
-            intervals: intervals.iter().map(|&(from, to)| [end(from), end(to)]).collect(),
+            unit: if window.scaled { "" } else { account.temperature.symbol },
+            intervals: window.intervals.iter().map(ends).collect(),
+            looked_at: ends(&window.looked_at),
         }
     });
     RequirementEntry {
