@@ -31,7 +31,7 @@ use crate::span::Span;
 use crate::units::Unit;
 pub use account::account;
 pub use basis::{Assumption, Grounds, MaterialNote, PartTemperature};
-pub use cause::Cause;
+pub use cause::{Cause, CauseSum};
 pub use coordinate::Coordinate;
 pub use shop::ShopCard;
 
@@ -240,8 +240,9 @@ pub struct Statistics {
     pub mean: f64,
     /// Its standard deviation to first order.
     pub sigma: f64,
-    /// Mean and standard deviation to second order.
-    pub second_order: (f64, f64),
+    /// Mean and standard deviation to second order, where they are 1 % of sigma or more from those
+    /// to first order.
+    pub second_order: Option<(f64, f64)>,
     /// The share of assemblies that break a limit.
     pub failing: FailingShare,
     /// Mean and standard deviation where the scenarios make it least.

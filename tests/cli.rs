@@ -5,6 +5,7 @@ mod check;
 mod draws;
 mod record;
 mod select;
+mod statistics;
 mod tools;
 
 use gapkeep::cli::{Console, Environment, run};

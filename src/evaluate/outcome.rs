@@ -255,7 +255,19 @@ pub struct Statistics {
     pub variance_shares: Vec<VarianceShare>,
 }
 
+/// Second order is worth saying from this share of sigma on.
+const WORTH_SAYING: f64 = 0.01;
+
 impl Statistics {
+    /// Mean and standard deviation to second order, where they differ from those to first order by
+    /// 1 % of sigma or more.
+    pub fn second_order_where_it_counts(&self) -> Option<(f64, f64)> {
+        let (mean, sigma) = self.second_order;
+        let apart = (mean - self.mean).abs().max((sigma - self.sigma).abs());
+        (apart.is_finite() && apart > 0.0 && apart >= WORTH_SAYING * self.sigma)
+            .then_some((mean, sigma))
+    }
+
     /// Nothing is known.
     pub(crate) fn unknown() -> Self {
         Statistics {

@@ -235,7 +235,7 @@ fn case(assembly: &Assembly, evaluation: &Evaluation, verdict: &Verdict, today: 
 
 fn window(assembly: &Assembly, requirement: &Requirement, found: &outcome::Window) -> Window {
     // Windows are proven for every piece, also where statistics decide.
-    let by = if requirement.method == Method::WorstCase { "" } else { "in the worst case " };
+    let by = if requirement.method == Method::WorstCase { "" } else { "by worst case it " };
     let data =
         words_of_window::data(assembly, found).map_or_else(String::new, |d| format!("; {d}"));
     Window {
@@ -308,7 +308,7 @@ fn statistics(s: &outcome::Statistics, method: Method) -> Statistics {
     Statistics {
         mean: s.mean,
         sigma: s.sigma,
-        second_order: s.second_order,
+        second_order: s.second_order_where_it_counts(),
         failing: FailingShare {
             share: s.share_failing,
             interval: s.share_interval,

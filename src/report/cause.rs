@@ -1,5 +1,6 @@
 //! Why a quantity varies: the causes that a range is split by.
 
+use super::Contribution;
 use crate::model::{Assembly, Unknown};
 
 /// A cause of variation.
@@ -86,4 +87,37 @@ impl Cause {
             | Unknown::Area { .. } => Cause::Load,
         }
     }
+}
+
+/// What all contributors of one cause make together.
+#[derive(Debug, Clone, Copy, PartialEq)]
+pub struct CauseSum {
+    /// The cause.
+    pub cause: Cause,
+    /// Part of the range, SI.
+    pub part: f64,
+    /// The same as a share of the range.
+    pub share_of_range: f64,
+    /// Share of the variance, where statistics were asked for.
+    pub share_of_variance: Option<f64>,
+}
+
+/// Contributors summed by cause, largest share of the range first.
+pub(super) fn by_cause(list: &[Contribution]) -> Vec<CauseSum> {
+    let mut sums: Vec<CauseSum> = Vec::new();
+    for cause in Cause::ALL {
+        let of = || list.iter().filter(|c| c.cause == cause);
+        if of().next().is_some() {
+            // Scenarios make no variance: a cause of nothing else has no share of it.
+            let shares: Vec<f64> = of().filter_map(|c| c.share_of_variance).collect();
+            sums.push(CauseSum {
+                cause,
+                part: of().map(|c| c.part).sum(),
+                share_of_range: of().map(|c| c.share_of_range).sum(),
+                share_of_variance: (!shares.is_empty()).then(|| shares.iter().sum()),
+            });
+        }
+    }
+    sums.sort_by(|a, b| b.share_of_range.total_cmp(&a.share_of_range));
+    sums
 }

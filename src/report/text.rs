@@ -107,12 +107,8 @@ fn whole(out: &mut String, spec: &Spec, account: &Account, extent: Extent, look:
     heading(out, spec, account, look);
     table::render(out, account, extent, look);
     if let Some(failing) = &account.failing {
-        let text = format!(
-            "{} break some requirement at some condition",
-            detail::statistics::failing(failing)
-        );
         out.push('\n');
-        paragraph(out, 0, &text, Role::Plain, look);
+        paragraph(out, 0, &detail::statistics::first_pass(failing), Role::Plain, look);
     }
     if extent == Extent::Detail {
         detail::render(out, account, look);

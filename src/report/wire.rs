@@ -121,6 +121,8 @@ pub struct YieldEntry {
     pub share: Option<f64>,
     /// What it lies between.
     pub interval: [Option<f64>; 2],
+    /// The share that breaks some requirement at some condition, 0 … 1, with all its digits.
+    pub share_failing: Option<f64>,
     /// Number of draws; `null` where it was computed without.
     pub draws: Option<u64>,
     /// Seed of the draws, where it was drawn.
@@ -197,6 +199,10 @@ pub struct RequirementEntry {
     /// Standard deviation to first order, where statistics were asked for.
     #[serde(skip_serializing_if = "Option::is_none")]
     pub sigma: Option<f64>,
+    /// Mean and standard deviation to second order, where they are 1 % of sigma or more from those
+    /// to first order.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub second_order: Option<SecondOrderEntry>,
     /// Share of assemblies that break a limit, 0 … 1.
     #[serde(skip_serializing_if = "Option::is_none")]
     pub share_failing: Option<f64>,
@@ -228,6 +234,22 @@ pub struct RequirementEntry {
     pub window: Option<WindowEntry>,
     /// What the range is made of, largest share first.
     pub contributors: Vec<ContributorEntry>,
+    /// The same summed by cause, largest share first.
+    pub causes: Vec<CauseEntry>,
+    /// Share of the variance that no contributor brings alone, where there is some; with those of
+    /// the contributors it sums to 1.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub interaction: Option<f64>,
+}
+
+/// Mean and standard deviation to second order.
+#[derive(Debug, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
+pub struct SecondOrderEntry {
+    /// The mean, in the requirement's unit.
+    pub mean: Option<f64>,
+    /// The standard deviation, in the requirement's unit.
+    pub sigma: Option<f64>,
 }
 
 /// The temperatures at which a requirement would hold.
@@ -262,6 +284,21 @@ pub struct ContributorEntry {
     /// The same as a share, 0 … 1.
     pub share_of_range: Option<f64>,
     /// Share of the variance, where statistics were asked for.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub share_of_variance: Option<f64>,
+}
+
+/// What all contributors of one cause make together.
+#[derive(Debug, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
+pub struct CauseEntry {
+    /// The cause.
+    pub cause: &'static str,
+    /// Part of the range, in the requirement's unit.
+    pub part: Option<f64>,
+    /// The same as a share, 0 … 1.
+    pub share_of_range: Option<f64>,
+    /// Share of the variance, where statistics were asked for; left out for scenarios.
     #[serde(skip_serializing_if = "Option::is_none")]
     pub share_of_variance: Option<f64>,
 }

@@ -54,10 +54,17 @@ pub(super) fn judge(verdict: &mut Verdict, requirement: &Requirement, statistics
                 Outcome::Undecided
             };
             // In standard deviations of a normal quantity, so that it is a length like any other.
-            let reached = sigmas(statistics.share_failing);
+            // Where no draw fails, the share is no more than its confidence limit says.
+            let unseen = statistics.drawn.is_some() && statistics.share_failing == 0.0;
+            let reached = sigmas(if unseen { most } else { statistics.share_failing });
             let margin = (reached - sigmas(allowed)) * statistics.sigma;
-            let margin = if outcome == Outcome::Holds { margin.max(0.0) } else { margin };
-            (outcome, room(0.0).0, margin)
+            let (side, to_limit) = room(0.0);
+            let margin = match outcome {
+                // No limit is farther than from the mean, also where nothing at all fails.
+                Outcome::Holds => margin.min(to_limit).max(0.0),
+                _ => margin,
+            };
+            (outcome, side, margin)
         }
     };
     verdict.outcome = outcome;

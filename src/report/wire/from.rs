@@ -2,11 +2,12 @@
 //! columns, what is not a number into `null`.
 
 use super::{
-    ContributorEntry, Document, FindingEntry, FrictionBandEntry, LabelEntry, Map, RequirementEntry,
-    ResultEntry, SCHEMA, ShopCardEntry, SpecEntry, SummaryEntry, TogetherEntry, WindowEntry,
-    YieldEntry,
+    CauseEntry, ContributorEntry, Document, FindingEntry, FrictionBandEntry, LabelEntry, Map,
+    RequirementEntry, ResultEntry, SCHEMA, SecondOrderEntry, ShopCardEntry, SpecEntry,
+    SummaryEntry, TogetherEntry, WindowEntry, YieldEntry,
 };
 use crate::diagnostic::{Diagnostic, Label};
+use crate::report::cause::by_cause;
 use crate::report::summary::summary;
 use crate::report::{
     Account, Case, Contribution, Coordinate, Figure, FrictionBand, Report, ShopCard, Spec,
@@ -50,6 +51,7 @@ fn spec(spec: &Spec) -> SpecEntry {
         assembly_yield: account.and_then(|a| a.failing).map(|f| YieldEntry {
             share: number(1.0 - f.share),
             interval: [number(1.0 - f.interval.1), number(1.0 - f.interval.0)],
+            share_failing: number(f.share),
             draws: f.drawn.map(|d| d.draws),
             seed: f.drawn.map(|d| d.seed),
             width_missed: f.drawn.and_then(|d| d.missed),
@@ -165,6 +167,12 @@ fn requirement(account: &Account, case: &Case) -> RequirementEntry {
         greatest: of(figure.map(|f| f.greatest)),
         margin: number(case.unit.difference_from_si(case.margin)),
         sigma: statistics.and_then(|s| number(case.unit.difference_from_si(s.sigma))),
+        second_order: statistics.and_then(|s| s.second_order).map(|(mean, sigma)| {
+            SecondOrderEntry {
+                mean: value(mean, case.unit),
+                sigma: number(case.unit.difference_from_si(sigma)),
+            }
+        }),
         share_failing: statistics.and_then(|s| number(s.failing.share)),
         share_failing_interval: statistics.map(|s| [s.failing.interval.0, s.failing.interval.1]),
         draws: drawn.map(|d| d.draws),
@@ -176,6 +184,16 @@ fn requirement(account: &Account, case: &Case) -> RequirementEntry {
         concession: case.concession.clone(),
         window,
         contributors: case.contributors.iter().map(|c| contributor(case, c)).collect(),
+        causes: by_cause(&case.contributors)
+            .into_iter()
+            .map(|sum| CauseEntry {
+                cause: sum.cause.word(),
+                part: number(case.unit.difference_from_si(sum.part)),
+                share_of_range: number(sum.share_of_range),
+                share_of_variance: sum.share_of_variance,
+            })
+            .collect(),
+        interaction: statistics.and_then(|s| s.interaction).and_then(number),
     }
 }
 

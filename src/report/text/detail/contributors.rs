@@ -3,9 +3,10 @@
 use super::LEAST_SHARE;
 use crate::findings::number::{Round, difference, digits, share};
 use crate::findings::words::count;
+use crate::report::cause::by_cause;
 use crate::report::look::{Look, Role};
 use crate::report::wrap::{blanks, left, right, visible, width};
-use crate::report::{Case, Cause, Contribution};
+use crate::report::{Case, CauseSum, Contribution};
 
 /// Columns of the longest bar.
 const MOST_BAR_COLUMNS: usize = 16;
@@ -39,9 +40,9 @@ pub(super) fn render(out: &mut String, case: &Case, look: Look) {
         look,
     };
     columns.heads(out, &head);
-    for (cause, part, share) in causes(list) {
-        columns.cause(out, cause, &figure(case, part), share);
-        let of = || list.iter().filter(|c| c.cause == cause);
+    for sum in by_cause(list) {
+        columns.cause(out, case, &sum);
+        let of = || list.iter().filter(|c| c.cause == sum.cause);
         for contribution in of().filter(|c| c.share_of_range.abs() >= LEAST_SHARE) {
             columns.contribution(out, case, contribution);
         }
@@ -51,20 +52,10 @@ pub(super) fn render(out: &mut String, case: &Case, look: Look) {
             out.push_str(&format!("{}\n", look.paint(Role::Quiet, &text)));
         }
     }
-}
-
-/// Each cause with the sum of its parts and shares, largest first.
-fn causes(list: &[Contribution]) -> Vec<(Cause, f64, f64)> {
-    let mut causes: Vec<(Cause, f64, f64)> = Cause::ALL
-        .into_iter()
-        .filter(|cause| list.iter().any(|c| c.cause == *cause))
-        .map(|cause| {
-            let of = || list.iter().filter(|c| c.cause == cause);
-            (cause, of().map(|c| c.part).sum(), of().map(|c| c.share_of_range).sum())
-        })
-        .collect();
-    causes.sort_by(|a, b| b.2.total_cmp(&a.2));
-    causes
+    let interaction = case.statistics.as_ref().and_then(|s| s.interaction);
+    if let Some(interaction) = interaction.filter(|i| i.abs() >= LEAST_SHARE) {
+        columns.interaction(out, interaction);
+    }
 }
 
 /// The name without what the cause above it says already.
@@ -110,20 +101,32 @@ impl Columns {
         out.push_str(&format!("{}\n", self.look.paint(Role::Quiet, &line)));
     }
 
-    fn cause(&self, out: &mut String, cause: Cause, part: &str, of_range: f64) {
-        let line = format!(
-            "  {}  {}{}{}  ",
-            left(cause.word(), self.name + SENSITIVITY_COLUMNS),
-            right(part, self.part),
-            right(&share(of_range), SHARE_COLUMNS + 2),
-            blanks(if self.variance { SHARE_COLUMNS } else { 0 }),
+    fn cause(&self, out: &mut String, case: &Case, sum: &CauseSum) {
+        let mut line = format!(
+            "  {}  {}{}",
+            left(sum.cause.word(), self.name + SENSITIVITY_COLUMNS),
+            right(&figure(case, sum.part), self.part),
+            right(&share(sum.share_of_range), SHARE_COLUMNS + 2),
         );
+        if self.variance {
+            let of = sum.share_of_variance.map_or_else(String::new, share);
+            line.push_str(&right(&of, SHARE_COLUMNS));
+        }
+        line.push_str("  ");
         let room = self.look.width.saturating_sub(width(&line)).min(MOST_BAR_COLUMNS);
-        let bar = libm::round(of_range.clamp(0.0, 1.0) * room as f64) as usize;
+        let bar = libm::round(sum.share_of_range.clamp(0.0, 1.0) * room as f64) as usize;
         let bar = self.look.pick("\u{2588}", "#").repeat(bar);
         let line = format!("{line}{}", self.look.paint(Role::Cure, &bar));
         out.push_str(line.trim_end());
         out.push('\n');
+    }
+
+    /// What several contributors bring to the variance that none brings alone.
+    fn interaction(&self, out: &mut String, of_variance: f64) {
+        let word = left("interaction", self.name + SENSITIVITY_COLUMNS);
+        let before = blanks(self.part + SHARE_COLUMNS + 2);
+        let share = right(&share(of_variance), SHARE_COLUMNS);
+        out.push_str(&format!("  {word}  {before}{share}\n"));
     }
 
     fn contribution(&self, out: &mut String, case: &Case, c: &Contribution) {

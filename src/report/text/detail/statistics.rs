@@ -1,17 +1,11 @@
 //! What statistics say of a requirement, and of all of them together.
 
 use crate::evaluate::outcome::Drawn;
-use crate::findings::number::{Round, difference_with_unit, digits, share, with_unit};
+use crate::findings::number::{Round, difference_with_unit, digits, with_unit};
 use crate::report::look::{Look, Role};
 use crate::report::text::paragraph;
 use crate::report::{Case, FailingShare, Statistics};
 
-/// Second order is worth a line where it moves the mean, or changes sigma, by more than this share
-/// of sigma.
-const WORTH_SAYING: f64 = 0.01;
-
-/// Interaction is worth a line from this share of the variance on.
-const LEAST_INTERACTION: f64 = 0.0005;
 /// Shares below this are not told apart.
 const LEAST_SHARE: f64 = 1e-18;
 
@@ -21,16 +15,12 @@ pub(super) fn render(out: &mut String, case: &Case, s: &Statistics, look: Look) 
     let sigma = difference_with_unit(s.sigma, case.unit, Round::Up);
     let text = format!("in statistics mean {mean}, sigma {sigma}; {}", capability(s));
     paragraph(out, 2, &text, Role::Plain, look);
-    let (mean, sigma) = s.second_order;
-    let differs = (sigma - s.sigma).abs().max((mean - s.mean).abs()) > WORTH_SAYING * s.sigma;
-    if mean.is_finite() && differs {
+    if let Some((mean, sigma)) = s.second_order {
         let mean = with_unit(mean, case.unit, Round::Nearest);
         let sigma = difference_with_unit(sigma, case.unit, Round::Up);
-        let text = format!("to second order mean {mean}, sigma {sigma}");
-        paragraph(out, 2, &text, Role::Plain, look);
-    }
-    if let Some(interaction) = s.interaction.filter(|i| i.abs() >= LEAST_INTERACTION) {
-        let text = format!("interaction makes {} of the variance", share(interaction));
+        let text = format!(
+            "to second order mean {mean}, sigma {sigma}: the response bends within its tolerances"
+        );
         paragraph(out, 2, &text, Role::Plain, look);
     }
     if s.assumed {
@@ -50,16 +40,19 @@ pub(in crate::report::text) fn brief(s: &Statistics) -> String {
     let Some(drawn) = s.failing.drawn else { return capability(s) };
     let cpk = s.cpk.map_or_else(String::new, |c| format!("Cpk {}, ", digits(c, 2, Round::Down)));
     let (least, greatest) = s.failing.interval;
+    let (least, greatest) =
+        (share_of_assemblies(least, Round::Down), share_of_assemblies(greatest, Round::Up));
     let missed = match drawn.missed {
         Some(width) => format!(", wider than {}", asked(width)),
         None => String::new(),
     };
-    format!(
-        "{cpk}{} of assemblies fail ({} .. {}{missed})",
-        share_of_assemblies(s.failing.share, Round::Nearest),
-        share_of_assemblies(least, Round::Down),
-        share_of_assemblies(greatest, Round::Up),
-    )
+    match s.failing.share {
+        0.0 => format!("{cpk}none of the assemblies drawn fail (at most {greatest}{missed})"),
+        share => format!(
+            "{cpk}{} of assemblies fail ({least} .. {greatest}{missed})",
+            share_of_assemblies(share, Round::Nearest)
+        ),
+    }
 }
 
 /// A share of assemblies with what it is known to lie between.
@@ -71,6 +64,10 @@ pub(in crate::report::text) fn failing(f: &FailingShare) -> String {
         false => of(f.interval.0, Round::Down),
     };
     match f.drawn {
+        Some(drawn) if f.share == 0.0 => format!(
+            "none of the assemblies drawn (at most {greatest} at 99 % confidence, {})",
+            draws(&drawn)
+        ),
         Some(drawn) => format!(
             "{} of assemblies ({least} .. {greatest} at 99 % confidence, {})",
             of(f.share, Round::Nearest),
@@ -83,6 +80,20 @@ pub(in crate::report::text) fn failing(f: &FailingShare) -> String {
         None if least != greatest => format!("{least} .. {greatest} of assemblies"),
         None => format!("{greatest} of assemblies"),
     }
+}
+
+/// The share of assemblies that meet everything everywhere, and the share that do not.
+pub(in crate::report::text) fn first_pass(f: &FailingShare) -> String {
+    // The yield is 1 minus a share that is rounded up.
+    let yields = match f.share {
+        // None seen in so many draws says no more than this.
+        0.0 if f.drawn.is_some() => {
+            format!("at least {} %", digits((1.0 - f.interval.1) * 100.0, 4, Round::Down))
+        }
+        share if share < 1e-6 => "above 99.9999 %".to_string(),
+        share => format!("{} %", digits((1.0 - share) * 100.0, 4, Round::Down)),
+    };
+    format!("first-pass yield {yields}: {} break some requirement at some condition", failing(f))
 }
 
 /// How many assemblies were drawn, of which seed, and whether that was enough.
@@ -155,6 +166,30 @@ mod tests {
             failing(&drawn(1_500_000, Some(1e-4))),
             "25.000 % of assemblies (24.000 % .. 26.001 % at 99 % confidence, 1.5 million draws of \
              seed 7, the most allowed; wider than the 0.01 % asked for)"
+        );
+    }
+
+    #[test]
+    fn a_yield_says_no_more_than_is_known() {
+        let of = |share, interval, drawn: Option<u64>| {
+            let drawn = drawn.map(|draws| Drawn { draws, seed: 1, missed: None });
+            first_pass(&FailingShare { share, interval, drawn })
+        };
+        let behind = " break some requirement at some condition";
+        assert_eq!(
+            of(0.0, (0.0, 5.3e-5), Some(100_000)).strip_suffix(behind),
+            Some(
+                "first-pass yield at least 99.9947 %: none of the assemblies drawn (at most 53.00 \
+                 ppm at 99 % confidence, 100000 draws of seed 1)"
+            )
+        );
+        assert_eq!(
+            of(3e-9, (3e-9, 3e-9), None).strip_suffix(behind),
+            Some("first-pass yield above 99.9999 %: 3.00e-9 of assemblies")
+        );
+        assert_eq!(
+            of(0.012_345_67, (0.012, 0.0125), None).strip_suffix(behind),
+            Some("first-pass yield 98.7654 %: 1.200 % .. 1.250 % of assemblies")
         );
     }
 
