@@ -19,10 +19,10 @@ pub use dimension::{
     Basis, Coating, Dimension, Direction, Feature, Form, Geometric, Load, Origin, Spread, Strain,
 };
 pub use expression::{Binary, Expr, ExprKind, Function};
-pub use joint::{Charge, Fill, Hold, Joint, Member, Restraint, Ring, Start};
+pub use joint::{Charge, Fill, Hold, Joint, Member, Restraint, Ring, Start, Wall};
 pub use requirement::{Concession, Limit, Method, Quantity, Requirement};
 use std::sync::Arc;
-pub use unknown::{Scenario, Unknown};
+pub use unknown::{Datum, Scenario, Unknown};
 
 macro_rules! ids {
     ($($(#[$doc:meta])* $name:ident,)*) => {$(

@@ -4,6 +4,7 @@
 #![allow(clippy::unwrap_used, clippy::expect_used)]
 
 mod acceptance;
+mod acceptance_fills;
 mod acceptance_joints;
 mod bad;
 mod cli;

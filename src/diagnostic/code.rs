@@ -207,6 +207,8 @@ codes! {
     NotOfThatJoint = "not-of-that-joint", Error;
     /// A surface that the ring does not have besides its contact.
     WrongSurface = "wrong-surface", Error;
+    /// A ring or wall whose outside is not larger than its bore.
+    RingWithoutWall = "ring-without-wall", Error;
     /// A tolerance of a size that belongs to no part.
     ToleranceNotOfAPart = "tolerance-not-of-a-part", Error;
     /// A restraint that does not state what it needs.
@@ -289,6 +291,8 @@ codes! {
     SpeedWithoutEffect = "speed-without-effect", Warning;
     /// A charge that has no room left in its cavity.
     CavityFull = "cavity-full", Error;
+    /// A pressure at which a charge is stiffer than it was at filling.
+    BulkModulusGrows = "bulk-modulus-grows", Warning;
     /// A requirement that could be proven neither to hold nor to fail.
     NotDecided = "not-decided", Error;
     /// A spec without a record beside it, where one is asked for.

@@ -61,6 +61,10 @@ impl Found {
             SubjectKind::Fill(fill) => {
                 self.parts.insert(fill.cavity_of);
                 fill.volume.iter().for_each(|e| self.expr(assembly, e));
+                if let Some(wall) = &fill.wall {
+                    self.expr(assembly, &wall.bore);
+                    self.expr(assembly, &wall.outside);
+                }
             }
         }
     }

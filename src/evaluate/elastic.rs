@@ -3,7 +3,7 @@
 use super::outcome::Property as Named;
 use super::scene::{Scene, Unable};
 use crate::materials::{Material, Property};
-use crate::model::{PartId, Unknown};
+use crate::model::{Datum, PartId, Unknown};
 use crate::numeric::{Number, Recorded};
 
 /// Young's modulus at a temperature, with the scatter of the part's lot.
@@ -13,13 +13,8 @@ pub(crate) fn modulus(
     temperature: Recorded,
 ) -> Result<Recorded, Unable> {
     let property = stated(scene, part, Named::Modulus)?;
-    let value = temperature.apply(&property.curve);
-    if property.scatter == 0.0 {
-        return Ok(value);
-    }
     let lot = scene.assembly.part(part).lot;
-    let w = scene.unknown(Unknown::ModulusScatter(lot));
-    Ok(value * (w * property.scatter + 1.0))
+    Ok(scattered(scene, property, Unknown::ModulusScatter(lot), temperature))
 }
 
 fn stated<'a>(scene: &Scene<'a>, part: PartId, which: Named) -> Result<&'a Property, Unable> {
@@ -37,12 +32,33 @@ pub(crate) fn of_material(material: &Material, which: Named) -> Option<&Property
     }
 }
 
-/// A property without scatter of its own at a temperature.
+/// Another property than the modulus at a temperature, with the scatter of the part's lot.
 pub(crate) fn property(
     scene: &Scene<'_>,
     part: PartId,
-    which: Named,
+    which: Datum,
     temperature: Recorded,
 ) -> Result<Recorded, Unable> {
-    Ok(temperature.apply(&stated(scene, part, which)?.curve))
+    let named = match which {
+        Datum::Poisson => Named::Poisson,
+        Datum::Yield => Named::Yield,
+        Datum::Density => Named::Density,
+    };
+    let property = stated(scene, part, named)?;
+    let lot = scene.assembly.part(part).lot;
+    Ok(scattered(scene, property, Unknown::DataScatter(lot, which), temperature))
+}
+
+/// A property at a temperature, with a scatter of its own.
+pub(crate) fn scattered(
+    scene: &Scene<'_>,
+    property: &Property,
+    scatter: Unknown,
+    temperature: Recorded,
+) -> Recorded {
+    let value = temperature.apply(&property.curve);
+    if property.scatter == 0.0 {
+        return value;
+    }
+    value * (scene.unknown(scatter) * property.scatter + 1.0)
 }

@@ -10,11 +10,12 @@ mod stack;
 
 use super::elastic;
 use super::expression::value;
-use super::outcome::Property;
 use super::scene::{At, Scene, Unable};
 use super::temperature;
 use crate::mechanics::{contact, joint as formulas};
-use crate::model::{DimensionId, Fit, Form, Joint, Owner, PartId, Quantity, SubjectId, Unknown};
+use crate::model::{
+    Datum, DimensionId, Fit, Form, Joint, Owner, PartId, Quantity, SubjectId, Unknown,
+};
 use crate::numeric::{Number, Recorded};
 use stack::Stack;
 pub(crate) use stack::nominal;
@@ -84,7 +85,7 @@ fn carried(
 /// Yield strength of a part at its temperature, Pa.
 pub(crate) fn yield_strength(scene: &Scene<'_>, at: At, part: PartId) -> Result<Recorded, Unable> {
     let t = temperature::of(scene, at, Owner::Part(part));
-    elastic::property(scene, part, Property::Yield, t)
+    elastic::property(scene, part, Datum::Yield, t)
 }
 
 /// Greatest von Mises stress in a ring of the stack, Pa.

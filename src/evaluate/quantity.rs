@@ -23,6 +23,6 @@ pub(crate) fn record(
         (SubjectKind::Restraint(r), _) => {
             restraint::quantity(scene, at, subject, r, quantity, of_yield)
         }
-        (SubjectKind::Fill(f), _) => filling::quantity(scene, at, subject, f, quantity),
+        (SubjectKind::Fill(f), _) => filling::quantity(scene, at, subject, f, quantity, of_yield),
     }
 }

@@ -33,6 +33,8 @@ pub(crate) fn read(assembly: &Assembly, unknown: Unknown) -> Scenario {
         },
         Unknown::ExpansionScatter(_)
         | Unknown::ModulusScatter(_)
+        | Unknown::DataScatter(..)
+        | Unknown::BulkScatter(_)
         | Unknown::SwellScatter(_)
         | Unknown::FillScatter(_)
         | Unknown::Seat { .. } => scatter(),

@@ -1,6 +1,6 @@
 //! The names of things in sentences.
 
-use crate::model::{Assembly, Owner, Quantity, Requirement, Unknown};
+use crate::model::{Assembly, Datum, Owner, Quantity, Requirement, Unknown};
 use crate::span::Span;
 
 /// A name in backticks.
@@ -64,6 +64,14 @@ pub fn unknown(assembly: &Assembly, unknown: Unknown) -> String {
         Unknown::ModulusScatter(lot) => {
             format!("modulus scatter of {}", assembly.lots[lot.index()].name)
         }
+        Unknown::DataScatter(lot, which) => {
+            let what = match which {
+                Datum::Poisson => "Poisson's ratio",
+                Datum::Yield => "yield strength",
+                Datum::Density => "density",
+            };
+            format!("scatter of {what} of {}", assembly.lots[lot.index()].name)
+        }
         Unknown::SwellScatter(lot) => {
             format!("swelling scatter of {}", assembly.lots[lot.index()].name)
         }
@@ -97,6 +105,9 @@ pub fn unknown(assembly: &Assembly, unknown: Unknown) -> String {
         }
         Unknown::Cavity(s) => format!("cavity of {}", subject(s)),
         Unknown::Charge(s) => format!("charge of {}", subject(s)),
+        Unknown::BulkScatter(s) => {
+            format!("scatter of the bulk modulus of the charge of {}", subject(s))
+        }
         Unknown::FillScatter(s) => format!("expansion scatter of the charge of {}", subject(s)),
     }
 }
@@ -137,6 +148,7 @@ pub fn place(assembly: &Assembly, unknown: Unknown) -> Span {
         }
         Unknown::ExpansionScatter(lot)
         | Unknown::ModulusScatter(lot)
+        | Unknown::DataScatter(lot, _)
         | Unknown::SwellScatter(lot) => {
             let part = assembly.parts.iter().find(|p| p.lot == lot);
             part.map_or(assembly.span, |p| p.material_span)
@@ -154,6 +166,7 @@ pub fn place(assembly: &Assembly, unknown: Unknown) -> Span {
         | Unknown::Cavity(s)
         | Unknown::Charge(s)
         | Unknown::FillScatter(s)
+        | Unknown::BulkScatter(s)
         | Unknown::Stiffness { restraint: s, .. }
         | Unknown::Area { restraint: s, .. } => assembly.subject(s).span,
     }

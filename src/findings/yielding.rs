@@ -1,11 +1,11 @@
-//! `stress-past-yield`: a ring or member that yields, where elastic figures end.
+//! `stress-past-yield`: a ring, wall or member that yields, where elastic figures end.
 
 use super::number::{Round, digits};
 use super::words;
 use crate::diagnostic::{Code, Diagnostic};
 use crate::evaluate::Evaluation;
 use crate::evaluate::outcome::Figure;
-use crate::model::{Assembly, Quantity};
+use crate::model::{Assembly, Quantity, SubjectKind};
 use crate::numeric::tolerance::LIMIT_SLACK;
 
 pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec<Diagnostic>) {
@@ -36,10 +36,16 @@ pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec
             )
             .here(format!("stress up to {share} % of its yield strength"))
             .label(part.material_span, "of this material")
-            .help(
-                "nothing is computed beyond yield, and interference lost to it does not come \
-                 back: take less interference, a thicker ring or a stronger material",
-            ),
+            .help(match subject.kind {
+                SubjectKind::Fill(_) => {
+                    "nothing is computed beyond yield, and a wall that has yielded stays wider: \
+                     charge less, take a thicker wall or a stronger material"
+                }
+                _ => {
+                    "nothing is computed beyond yield, and interference lost to it does not come \
+                     back: take less interference, a thicker ring or a stronger material"
+                }
+            }),
         );
     }
 }

@@ -28,6 +28,18 @@ pub fn closed_cylinder_compliance<N: Number>(wall: &Ring<N>) -> N {
     shape / wall.modulus.clone()
 }
 
+/// Von Mises stress in the bore of a closed thick cylinder, its greatest, Pa.
+///
+/// Formula: `√3·p·Q²/(Q²−1)`, `Q = D/d`: from `σ_r = −p`, `σ_θ = p(Q²+1)/(Q²−1)` and the ends' force
+/// `σ_z = p/(Q²−1)`. Computed as `√3·p(1 + g/2)` with `g = 2/(Q²−1)`, which is the same.
+///
+/// Source: Lamé; Timoshenko, *Strength of Materials*, part II (from memory).
+///
+/// Valid for: as [`closed_cylinder_compliance`], away from its ends.
+pub fn closed_cylinder_von_mises<N: Number>(wall: &Ring<N>, pressure: N) -> N {
+    pressure * (wall.g() * 0.5 + 1.0) * N::exact(3.0).sqrt()
+}
+
 /// Tangents drawn after the first; see [`full_pressure`].
 const TANGENTS: usize = 5;
 

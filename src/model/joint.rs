@@ -94,6 +94,8 @@ pub struct Fill {
     pub volume: Option<Arc<Expr>>,
     /// Its volume as a number, at reference, m³.
     pub stated: Option<Scenario>,
+    /// The wall around it; none where it is taken as rigid.
+    pub wall: Option<Wall>,
     /// What is in it.
     pub material: Arc<Material>,
     /// How much, m³.
@@ -101,6 +103,17 @@ pub struct Fill {
     /// At what temperature that volume was measured.
     pub charged_at: Charge,
     /// Where the charge stands.
+    pub span: Span,
+}
+
+/// The wall of a round cavity: a closed cylinder of its part.
+#[derive(Debug, Clone)]
+pub struct Wall {
+    /// Its inner diameter.
+    pub bore: Arc<Expr>,
+    /// Its outer diameter.
+    pub outside: Arc<Expr>,
+    /// Where it stands.
     pub span: Span,
 }
 

@@ -67,6 +67,8 @@ pub enum Unknown {
     ExpansionScatter(LotId),
     /// Scatter of the modulus of a lot.
     ModulusScatter(LotId),
+    /// Scatter of another property of a lot.
+    DataScatter(LotId, Datum),
     /// Scatter of the swelling of a lot.
     SwellScatter(LotId),
     /// A condition's own temperature, K.
@@ -134,4 +136,17 @@ pub enum Unknown {
     Charge(SubjectId),
     /// Scatter of the expansion of a charge.
     FillScatter(SubjectId),
+    /// Scatter of the bulk modulus of a charge.
+    BulkScatter(SubjectId),
+}
+
+/// Properties of a lot that scatter on their own, besides expansion, modulus and swelling.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, PartialOrd, Ord, Hash)]
+pub enum Datum {
+    /// Poisson's ratio.
+    Poisson,
+    /// Yield strength.
+    Yield,
+    /// Density.
+    Density,
 }

@@ -184,6 +184,16 @@ fn cautions(assembly: &Assembly, evaluation: &Evaluation) -> Vec<String> {
             words::name(&assembly.condition(beyond.condition).name),
         ));
     }
+    for subject in &assembly.subjects {
+        let SubjectKind::Fill(fill) = &subject.kind else { continue };
+        if fill.wall.is_none() && fill.material.bulk_modulus.is_some() {
+            cautions.push(format!(
+                "the cavity of {} is taken as rigid, which makes its pressure too high; its `wall` \
+                 would be counted",
+                words::name(&subject.name)
+            ));
+        }
+    }
     let joint = assembly
         .subjects
         .iter()

@@ -18,7 +18,7 @@ pub enum Cause {
     Coating,
     /// Swelling of lots.
     Moisture,
-    /// Forces, strains, speeds, stiffnesses and moduli.
+    /// Forces, strains, speeds, stiffnesses, moduli and strengths.
     Load,
     /// Where a fit sits in its clearance.
     Play,
@@ -78,6 +78,8 @@ impl Cause {
             Unknown::Friction(_) => Cause::Friction,
             Unknown::Cavity(_) | Unknown::Charge(_) => Cause::Volume,
             Unknown::ModulusScatter(_)
+            | Unknown::DataScatter(..)
+            | Unknown::BulkScatter(_)
             | Unknown::Strain { .. }
             | Unknown::Load { .. }
             | Unknown::LoadArea { .. }

@@ -91,6 +91,8 @@ pub(super) fn scale(assembly: &Assembly, unknown: Unknown) -> Scale {
         Unknown::Cavity(_) | Unknown::Charge(_) => shown(Kind::VOLUME),
         Unknown::ExpansionScatter(_)
         | Unknown::ModulusScatter(_)
+        | Unknown::DataScatter(..)
+        | Unknown::BulkScatter(_)
         | Unknown::SwellScatter(_)
         | Unknown::Seat { .. }
         | Unknown::Friction(_)

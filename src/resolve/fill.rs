@@ -1,10 +1,14 @@
 //! `fill`: a liquid or solid in a cavity.
 
-use super::expression::Resolver;
+use super::expression::{Resolver, expr};
 use super::material;
 use super::quantity::{self, Expect, with_article};
 use crate::diagnostic::{Code, Diagnostic};
-use crate::model::{Charge, Expr, Fill, PartId, Scenario};
+use crate::materials::Material;
+use crate::model::{
+    Charge, DimensionId, Expr, ExprKind, Feature, Fill, Form, PartId, Scenario, Wall,
+};
+use crate::span::Span;
 use crate::syntax::tree::{self, CavityVolume, ChargeState};
 use crate::units::Kind;
 use std::sync::Arc;
@@ -26,12 +30,24 @@ impl<'t> Resolver<'_, '_, 't> {
         let spread = charge.spread.as_ref();
         let volume = quantity::scenario(self.cx, &charge.volume, spread, Expect::Of(Kind::VOLUME));
         let charged_at = self.charged_at(charge.at.as_ref());
+        let wall = match &written.wall {
+            Some(wall) => {
+                let material = material.as_ref();
+                Some(self.wall(wall, cavity.as_ref().map(|c| c.0), material, charge))
+            }
+            None => None,
+        };
         let (cavity_of, volume_of, stated) = cavity?;
         let volume = self.positive(&charge.volume, volume?)?;
+        let wall = match wall {
+            Some(wall) => Some(wall?),
+            None => None,
+        };
         Some(Fill {
             cavity_of,
             volume: volume_of,
             stated,
+            wall,
             material: material?,
             charge: volume,
             charged_at: charged_at?,
@@ -77,6 +93,114 @@ impl<'t> Resolver<'_, '_, 't> {
                 Some((part?, Some(volume), None))
             }
         }
+    }
+
+    /// The wall around a cavity, by two diameters of the part that the cavity is of.
+    fn wall(
+        &mut self,
+        written: &'t tree::Wall,
+        cavity_of: Option<PartId>,
+        material: Option<&Arc<Material>>,
+        charge: &tree::Charge,
+    ) -> Option<Wall> {
+        let bore = self.diameter(&written.bore, cavity_of, Feature::External, "bore");
+        let outside = self.diameter(&written.outside, cavity_of, Feature::Internal, "outside");
+        if let Some(material) = material.filter(|m| m.bulk_modulus.is_none()) {
+            // Without it nothing is computed that the wall has to do with.
+            let name = material.name.clone();
+            return self.no_bulk_modulus(&name, charge.material.span, written.span);
+        }
+        let (bore, outside) = (bore?, outside?);
+        self.around(bore, outside, written.span)?;
+        self.needs_stiffness(cavity_of?, written.span)?;
+        let size = |dimension, path: &tree::Path| {
+            expr(path.span, Kind::LENGTH, ExprKind::Size { dimension, piece: 1 })
+        };
+        Some(Wall {
+            bore: size(bore, &written.bore),
+            outside: size(outside, &written.outside),
+            span: written.span,
+        })
+    }
+
+    /// A diameter of the part that a cavity is of, not on the wrong side of its wall.
+    fn diameter(
+        &mut self,
+        path: &tree::Path,
+        cavity_of: Option<PartId>,
+        wrong: Feature,
+        word: &str,
+    ) -> Option<DimensionId> {
+        let id = self.dimension(path)?;
+        let found = &self.cx.dimensions[id.index()];
+        let (line, form, feature, part) = (found.line, found.form, found.feature, found.part);
+        let name = self.path_of(id);
+        let refusal =
+            |code, message| Diagnostic::new(code, path.span, message).label(line, "stated here");
+        if let Some(owner) = cavity_of.filter(|owner| *owner != part) {
+            let owner = &self.cx.parts[owner.index()].name;
+            let finding = refusal(
+                Code::NotOfThatJoint,
+                format!("`{name}` is no size of `{owner}`, which the cavity is of"),
+            );
+            let help = format!("name the {word} of `{owner}`, as `{owner}.{word}`");
+            return self.cx.refuse(finding.help(help));
+        }
+        if form != Form::Diameter {
+            let finding = refusal(Code::WrongKind, format!("expected a diameter, found `{name}`"));
+            return self.cx.refuse(finding.help("a wall has two diameters, stated as `dia 60 H8`"));
+        }
+        if feature == wrong {
+            let finding =
+                refusal(Code::WrongSurface, format!("`{name}` cannot be the {word} of a wall"));
+            let help = "name the hole first and what is around it second, as `wall bore body.bore \
+                        outside body.outside`";
+            return self.cx.refuse(finding.help(help));
+        }
+        Some(id)
+    }
+
+    /// Refuses a wall that is not there within the tolerances.
+    fn around(&mut self, bore: DimensionId, outside: DimensionId, span: Span) -> Option<()> {
+        let (inner, outer) =
+            (&self.cx.dimensions[bore.index()], &self.cx.dimensions[outside.index()]);
+        if inner.nominal + inner.upper < outer.nominal + outer.lower {
+            return Some(());
+        }
+        let (inner, outer) = (inner.line, outer.line);
+        self.cx.refuse(
+            Diagnostic::new(
+                Code::RingWithoutWall,
+                span,
+                "the outside of the wall is not larger than its bore",
+            )
+            .label(inner, "the bore")
+            .label(outer, "the outside")
+            .help("name the bore first, as `wall bore body.bore outside body.outside`"),
+        )
+    }
+
+    /// Refuses to compute the pressure of what states no stiffness.
+    pub(super) fn no_bulk_modulus<T>(
+        &mut self,
+        material: &str,
+        stated: Span,
+        need: Span,
+    ) -> Option<T> {
+        if material.is_empty() {
+            return None;
+        }
+        self.cx.refuse(
+            Diagnostic::new(
+                Code::MissingProperty,
+                stated,
+                format!("the material `{material}` states no `bulk modulus`"),
+            )
+            .label(need, "needed here")
+            .help(format!(
+                "state it: `material my_{material} like {material} {{ bulk modulus 1.6 GPa }}`"
+            )),
+        )
     }
 
     fn positive(&mut self, written: &tree::Quantity, volume: Scenario) -> Option<Scenario> {

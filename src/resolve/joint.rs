@@ -1,5 +1,7 @@
 //! `joint { … }`: the rings that press on each other, and the surfaces they have besides.
 
+mod walls;
+
 use super::expression::{Resolver, expr, is_round, terms};
 use super::quantity::{self, Expect};
 use crate::diagnostic::{Code, Diagnostic};
@@ -77,7 +79,7 @@ impl<'t> Resolver<'_, '_, 't> {
         let outer = self.ring(outer, RingSide::Outer, &lines, written);
         self.check_ring_names(&lines, &inner, &outer);
         let length = match lines.length {
-            Some((length, span)) => self.operand(length, span, Form::Linear),
+            Some((length, span)) => self.contact_length(length, span),
             None => self.cx.refuse(
                 Diagnostic::new(
                     Code::JointIncomplete,
@@ -90,7 +92,8 @@ impl<'t> Resolver<'_, '_, 't> {
         let friction = match lines.friction {
             Some((friction, spread, _)) => {
                 let expect = Expect::Of(Kind::PURE);
-                Some(quantity::scenario(self.cx, friction, spread, expect)?)
+                let found = quantity::scenario(self.cx, friction, spread, expect)?;
+                Some(self.possible_friction(found, friction)?)
             }
             None => None,
         };
@@ -99,6 +102,7 @@ impl<'t> Resolver<'_, '_, 't> {
             None => None,
         };
         let (inner, outer, length) = (inner?, outer?, length?);
+        self.has_walls(&inner, &outer, external, internal)?;
         Some(Joint { span: written.span, length, inner, outer, friction, insertion_clearance })
     }
 
@@ -277,6 +281,19 @@ impl<'t> Resolver<'_, '_, 't> {
         }
         let free = self.operand(size, span, Form::Diameter)?;
         if let ExprKind::Size { dimension, .. } = free.kind {
+            let owner = self.cx.dimensions[dimension.index()].part;
+            if self.cx.parts[owner.index()].name != name {
+                let path = self.path_of(dimension);
+                return self.cx.refuse(
+                    Diagnostic::new(
+                        Code::NotOfThatJoint,
+                        free.span,
+                        format!("`{path}` is no size of `{name}`"),
+                    )
+                    .label(self.cx.dimensions[dimension.index()].line, "stated here")
+                    .help(format!("state the {word} of `{name}` itself, as a size or by its name")),
+                );
+            }
             let opposite = match side {
                 RingSide::Inner => Feature::External,
                 RingSide::Outer => Feature::Internal,
@@ -289,7 +306,8 @@ impl<'t> Resolver<'_, '_, 't> {
                         free.span,
                         format!("`{path}` cannot be the {word} of `{name}`"),
                     )
-                    .label(self.cx.dimensions[dimension.index()].line, "stated here"),
+                    .label(self.cx.dimensions[dimension.index()].line, "stated here")
+                    .help(format!("name the surface of `{name}` that is not in contact")),
                 );
             }
         }
@@ -297,7 +315,12 @@ impl<'t> Resolver<'_, '_, 't> {
     }
 
     /// A size stated on the spot, which is then exact, or a dimension.
-    fn operand(&mut self, operand: &Operand, line: Span, form: Form) -> Option<Arc<Expr>> {
+    pub(super) fn operand(
+        &mut self,
+        operand: &Operand,
+        line: Span,
+        form: Form,
+    ) -> Option<Arc<Expr>> {
         match operand {
             Operand::Dimension(path) => {
                 let dimension = self.dimension(path)?;
@@ -337,7 +360,18 @@ impl<'t> Resolver<'_, '_, 't> {
     fn stated(&mut self, operand: &Operand, line: Span) -> Option<Scenario> {
         match operand {
             Operand::Quantity(quantity) => {
-                quantity::scenario(self.cx, quantity, None, Expect::Size)
+                let value = quantity::scenario(self.cx, quantity, None, Expect::Size)?;
+                if value.least < 0.0 {
+                    return self.cx.refuse(
+                        Diagnostic::new(
+                            Code::ValueOutOfRange,
+                            quantity.span(),
+                            "a clearance while joining is not below nought",
+                        )
+                        .help("state the room wanted, as `insertion clearance 0.02`"),
+                    );
+                }
+                Some(value)
             }
             Operand::Dimension(path) => self.cx.refuse(
                 Diagnostic::new(Code::WrongKind, path.span, "expected a length, found a name")

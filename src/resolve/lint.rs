@@ -54,7 +54,10 @@ fn expressions(kind: &SubjectKind) -> Vec<&Arc<Expr>> {
             found
         }
         SubjectKind::Restraint(restraint) => restraint.members.iter().map(|m| &m.length).collect(),
-        SubjectKind::Fill(fill) => fill.volume.iter().collect(),
+        SubjectKind::Fill(fill) => {
+            let wall = fill.wall.iter().flat_map(|w| [&w.bore, &w.outside]);
+            fill.volume.iter().chain(wall).collect()
+        }
     }
 }
 

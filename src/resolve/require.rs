@@ -36,6 +36,11 @@ impl<'t> Resolver<'_, '_, 't> {
         };
         self.check_of_yield(quantity, written)?;
         let limits = quantity::limits(self.cx, &written.limit, kind)?;
+        if quantity.is_unconditional() {
+            for limit in [&limits.lower, &limits.upper].into_iter().flatten() {
+                quantity::above_absolute_zero(self.cx, limit.span, limit.value)?;
+            }
+        }
         let conditions = self.conditions_of(quantity, written, conditions)?;
         let concession = match &written.concession {
             Some(stated) => self.concession(stated, written, kind, &limits),

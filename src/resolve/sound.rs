@@ -159,7 +159,10 @@ fn rests_on(kind: &SubjectKind, unsound: &Unsound) -> bool {
                 Charge::Condition(condition) => unsound.conditions.contains(&condition),
                 Charge::Reference | Charge::At(_) => false,
             };
-            charged || part(&fill.cavity_of) || fill.volume.iter().any(expr)
+            charged
+                || part(&fill.cavity_of)
+                || fill.volume.iter().any(expr)
+                || fill.wall.iter().any(|w| expr(&w.bore) || expr(&w.outside))
         }
     }
 }
@@ -272,6 +275,10 @@ impl Renumber {
                     *condition = self.condition(*condition).unwrap_or(*condition);
                 }
                 fill.volume.iter_mut().for_each(|e| self.expr(e));
+                if let Some(wall) = &mut fill.wall {
+                    self.expr(&mut wall.bore);
+                    self.expr(&mut wall.outside);
+                }
             }
         }
     }

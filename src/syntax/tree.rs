@@ -32,7 +32,7 @@ pub use quantity::{
 pub use requirement::{Bound, Concession, Conditions, Limit, Measure, Method, Requirement};
 pub use response::{
     Cavity, CavityVolume, Charge, ChargeState, Fill, Fit, Gap, Joint, JointLine, Let, Member,
-    Operand, Outcome, Preload, Restraint, RingSide, Role, Surface,
+    Operand, Outcome, Preload, Restraint, RingSide, Role, Surface, Wall,
 };
 
 use crate::span::{Span, Spanned};

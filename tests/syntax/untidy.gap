@@ -64,3 +64,5 @@ stretched screw.grip stiffness 205 kN/mm ±8% area 84.3mm2
 preload 12kN±25% at assembly}
 let torque = 3 N·m*2
 # the end
+fill  tank{cavity  of  body 240cm3;wall   bore body.bore  outside   body.outside # round
+charge oil 200 cm3}

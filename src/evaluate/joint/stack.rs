@@ -1,10 +1,10 @@
 //! Rings one in another, innermost first, joined by the fits between them.
 
 use super::super::scene::{At, Response, Scene, Unable};
-use super::super::{elastic, expression, outcome::Property, temperature};
+use super::super::{elastic, expression, temperature};
 use crate::mechanics::ring::{self, Ring};
 use crate::mechanics::{contact, joint as formulas};
-use crate::model::{Assembly, Expr, Fit, Joint, Owner, PartId, SubjectId, Unknown};
+use crate::model::{Assembly, Datum, Expr, Fit, Joint, Owner, PartId, SubjectId, Unknown};
 use crate::numeric::{Number, Recorded};
 
 /// The stack that a joint belongs to. Diameters are nominal, at the reference temperature, m.
@@ -112,7 +112,7 @@ impl Stack {
         let t = temperature::of(scene, at, Owner::Part(part));
         let spin = match at {
             At::Condition(condition) if self.turns(scene, at, place) => {
-                let density = elastic::property(scene, part, Property::Density, t.clone())?;
+                let density = elastic::property(scene, part, Datum::Density, t.clone())?;
                 ring::spin(density, scene.unknown(Unknown::Speed(condition)))
             }
             _ => Recorded::exact(0.0),
@@ -121,7 +121,7 @@ impl Stack {
             bore: bore.map(|d| Recorded::exact(0.5 * d)),
             outside: Recorded::exact(0.5 * outside),
             modulus: elastic::modulus(scene, part, t.clone())?,
-            poisson: elastic::property(scene, part, Property::Poisson, t)?,
+            poisson: elastic::property(scene, part, Datum::Poisson, t)?,
             spin,
         })
     }

@@ -233,6 +233,7 @@ fn key(assembly: &Assembly, unknown: Unknown) -> String {
         }
         Unknown::ExpansionScatter(l) => format!("expansion {}", lot(l)),
         Unknown::ModulusScatter(l) => format!("modulus {}", lot(l)),
+        Unknown::DataScatter(l, which) => format!("{which:?} {}", lot(l)),
         Unknown::SwellScatter(l) => format!("swelling {}", lot(l)),
         other => format!("{other:?}"),
     }

@@ -24,7 +24,8 @@ const OF_FIT: [(&str, Quantity); 3] = [
 const OF_RESTRAINT: [(&str, Quantity); 2] =
     [("force", Quantity::Force), ("separation", Quantity::Separation)];
 
-const OF_FILL: [(&str, Quantity); 1] = [("ullage", Quantity::Ullage)];
+const OF_FILL: [(&str, Quantity); 2] =
+    [("ullage", Quantity::Ullage), ("pressure", Quantity::Pressure)];
 
 /// Words people use for a quantity that has another name here.
 const OTHER_WORDS: [(&str, &str); 5] = [
@@ -77,6 +78,11 @@ impl Resolver<'_, '_, '_> {
             ),
             Some((_, quantity)) => {
                 self.needs_friction(subject, quantity, measure)?;
+                if let (SubjectKind::Fill(fill), Quantity::Pressure) = (&subject.kind, quantity)
+                    && fill.material.bulk_modulus.is_none()
+                {
+                    return self.no_bulk_modulus(&fill.material.name, fill.span, measure.span);
+                }
                 Some(quantity)
             }
             None => self.unknown_quantity(subject, measure, &text),
@@ -111,6 +117,16 @@ impl Resolver<'_, '_, '_> {
                 }
                 (restraint.members.iter().map(|m| m.part).collect(), "member of this restraint")
             }
+            SubjectKind::Fill(fill) if fill.wall.is_none() => {
+                let finding = Diagnostic::new(
+                    Code::FillIncomplete,
+                    name.span,
+                    "the stress around a cavity needs its wall, and the fill states none",
+                );
+                let help = "add a line such as `wall bore body.bore outside body.outside`";
+                return self.cx.refuse(finding.label(fill.span, "the fill").help(help));
+            }
+            SubjectKind::Fill(fill) => (vec![fill.cavity_of], "wall of this cavity"),
             kind => {
                 let text = format!("a {} has no stress", noun(kind));
                 return self.cx.refuse(Diagnostic::new(Code::UnknownQuantity, name.span, text));
@@ -220,7 +236,7 @@ fn quantities(kind: &SubjectKind) -> impl Iterator<Item = (&'static str, Quantit
 
 fn words_of(kind: &SubjectKind) -> Vec<String> {
     let mut words: Vec<String> = quantities(kind).map(|(word, _)| word.to_string()).collect();
-    if matches!(kind, SubjectKind::Fit(_) | SubjectKind::Restraint(_)) {
+    if matches!(kind, SubjectKind::Fit(_) | SubjectKind::Restraint(_) | SubjectKind::Fill(_)) {
         words.push("stress in PART".to_string());
     }
     words

@@ -17,6 +17,12 @@ pub(super) fn hint(
     let before = text[line.start..at].trim_end();
     let previous = last_word(before);
     let found = word_at(text, at);
+    if word_at(text, line.start) == "wall" && at > line.start {
+        return Some(
+            "name two diameters of the part, as `wall bore body.bore outside body.outside`"
+                .to_owned(),
+        );
+    }
     if rest.starts_with(['\u{2013}', '\u{2014}']) {
         return Some("write `..` for a range and `-` for a minus".to_owned());
     }

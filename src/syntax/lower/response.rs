@@ -5,7 +5,7 @@ use crate::span::Spanned;
 use crate::syntax::grammar::{Node, Rule};
 use crate::syntax::tree::{
     Cavity, CavityVolume, Charge, ChargeState, Expr, Fill, Fit, Gap, Joint, JointLine, Let, Member,
-    Name, Operand, Outcome, Preload, Restraint, RingSide, Role, Spread, Surface,
+    Name, Operand, Outcome, Preload, Restraint, RingSide, Role, Spread, Surface, Wall,
 };
 
 impl Lower {
@@ -174,7 +174,14 @@ impl Lower {
     /// The header alone; its lines stand in a block.
     pub(in crate::syntax) fn fill(&mut self, node: Node<'_>) -> Option<Fill> {
         let name = spelled(&node.child(Rule::name)?);
-        Some(Fill { name, cavity: None, charge: None, requirements: Vec::new(), span: node.span() })
+        Some(Fill {
+            name,
+            cavity: None,
+            wall: None,
+            charge: None,
+            requirements: Vec::new(),
+            span: node.span(),
+        })
     }
 
     pub(in crate::syntax) fn cavity(&mut self, node: Node<'_>) -> Option<Cavity> {
@@ -184,6 +191,13 @@ impl Lower {
             None => CavityVolume::Stated(self.quantity(node.child(Rule::quantity)?)?),
         };
         Some(Cavity { part, volume, span: node.span() })
+    }
+
+    pub(in crate::syntax) fn wall(&mut self, node: Node<'_>) -> Option<Wall> {
+        let span = node.span();
+        let mut paths = node.children().filter(|child| child.rule() == Rule::path);
+        let (bore, outside) = (path(paths.next()?)?, path(paths.next()?)?);
+        Some(Wall { bore, outside, span })
     }
 
     pub(in crate::syntax) fn charge(&mut self, node: Node<'_>) -> Option<Charge> {

@@ -169,7 +169,8 @@ impl Reader<'_> {
     pub(super) fn fill(&mut self, line: &Line) -> Option<Statement> {
         let header = self.header(line, Rule::fill_line, Lower::fill);
         self.needs_block(line);
-        let (mut cavity, mut charge, mut requirements) = (None, None, Vec::new());
+        let (mut cavity, mut wall, mut charge) = (None, None, None);
+        let mut requirements = Vec::new();
         self.block(line, |reader, inner| match reader.first_word(inner) {
             "require" => requirements.extend(reader.require(inner)),
             "cavity" => {
@@ -180,10 +181,17 @@ impl Reader<'_> {
                 let stated = reader.lone(inner, Rule::charge_line, Lower::charge);
                 reader.once(&mut charge, stated, inner);
             }
-            _ => reader.unknown(inner, &["cavity", "charge", "require"], "a line of a fill"),
+            "wall" => {
+                let stated = reader.lone(inner, Rule::wall_line, Lower::wall);
+                reader.once(&mut wall, stated, inner);
+            }
+            _ => {
+                let words = ["cavity", "wall", "charge", "require"];
+                reader.unknown(inner, &words, "a line of a fill");
+            }
         });
         let fill: Fill = header?;
         let span = self.whole(line);
-        Some(Statement::Fill(Box::new(Fill { cavity, charge, requirements, span, ..fill })))
+        Some(Statement::Fill(Box::new(Fill { cavity, wall, charge, requirements, span, ..fill })))
     }
 }

@@ -218,6 +218,8 @@ pub struct Fill {
     pub name: Name,
     /// The space.
     pub cavity: Option<Cavity>,
+    /// The wall around it.
+    pub wall: Option<Wall>,
     /// What is in it.
     pub charge: Option<Charge>,
     /// What is required of it.
@@ -244,6 +246,17 @@ pub enum CavityVolume {
     Stated(Quantity),
     /// `= pi/4 * body.bore^2 * body.stroke`
     Computed(Expr),
+}
+
+/// `wall bore body.bore outside body.outside`
+#[derive(Debug, Clone, PartialEq)]
+pub struct Wall {
+    /// The diameter of the cavity.
+    pub bore: Path,
+    /// The diameter around the wall.
+    pub outside: Path,
+    /// The whole line.
+    pub span: Span,
 }
 
 /// `charge hydraulic_oil 225 cm3 at fill_day`

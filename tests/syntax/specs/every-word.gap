@@ -148,5 +148,6 @@ fill oil_space {
 }
 fill reservoir {
   cavity of body = area * body.stroke
+  wall bore body.bore outside body.outside
   charge hydraulic_oil 205 cm³ ±2 % at fill_day
 }

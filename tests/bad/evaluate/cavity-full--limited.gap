@@ -1,0 +1,16 @@
+assembly "Accumulator"
+lengths in mm
+temperatures in degC
+condition filled 20
+condition hot 60 { oil 5 K below body }
+part body of steel_c45 {
+  length  = 120 ±0.2
+}
+part cap of steel_c45 { outside = dia 90 ±0.1 }
+gap long = body.length { require "AC-9" 119 .. 121 }
+result around = cap.outside { require "AC-8" 89 .. 91 }
+fill oil {
+  cavity of body 340 cm3
+  charge hydraulic_oil 334 cm3 at filled
+  require "AC-1" pressure <= 60 MPa
+}
