@@ -7,6 +7,7 @@
 mod account;
 mod basis;
 mod cause;
+mod caution;
 mod coordinate;
 pub mod diagnostic;
 pub mod json;
@@ -32,6 +33,7 @@ use crate::units::Unit;
 pub use account::account;
 pub use basis::{Assumption, Grounds, MaterialNote, PartTemperature};
 pub use cause::{Cause, CauseSum};
+pub use caution::Caution;
 pub use coordinate::Coordinate;
 pub use shop::ShopCard;
 
@@ -141,6 +143,8 @@ pub struct Figure {
     pub greatest_at: Vec<Coordinate>,
     /// True for what is shown only on demand unless something is required of it.
     pub secondary: bool,
+    /// What must be said beside it.
+    pub caution: Option<Caution>,
 }
 
 /// Across what a length is measured.
@@ -190,6 +194,8 @@ pub struct Case {
     pub statistical: bool,
     /// The limits, as written.
     pub limits: String,
+    /// What must be said beside it.
+    pub caution: Option<Caution>,
     /// Least allowed value.
     pub lower: Option<f64>,
     /// Greatest allowed value.

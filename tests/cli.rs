@@ -1,6 +1,7 @@
 //! The commands as a user calls them: streams, files, exit status.
 
 mod binary;
+mod cautions;
 mod check;
 mod draws;
 mod record;

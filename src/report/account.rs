@@ -2,6 +2,7 @@
 
 use super::basis::grounds;
 use super::cause::Cause;
+use super::caution::Caution;
 use super::coordinate::{coordinates, scale};
 use super::shop::cards;
 use super::{
@@ -75,6 +76,7 @@ fn figure(assembly: &Assembly, figure: &outcome::Figure) -> Figure {
                 | Quantity::Value
                 | Quantity::Ullage
         ),
+        caution: Caution::of(figure.quantity),
     }
 }
 
@@ -210,6 +212,7 @@ fn case(assembly: &Assembly, evaluation: &Evaluation, verdict: &Verdict, today: 
         method: method(requirement.method),
         statistical: requirement.method != Method::WorstCase,
         limits: limits(requirement),
+        caution: Caution::of(requirement.quantity),
         lower,
         upper,
         unit: shown_unit(requirement),

@@ -4,7 +4,7 @@
 //! it changes only when something changed. What differs between two records is told in their own
 //! lines.
 
-use super::{Account, Case, Figure};
+use super::{Account, Case, Figure, caution};
 use crate::findings::Standing;
 use crate::findings::number::{Round, difference, shown, with_unit};
 use crate::units::Unit;
@@ -46,6 +46,11 @@ pub fn record(account: &Account) -> String {
             format!("  {}: {}\n", quoted(&m.name), quoted(&format!("{from} .. {to}")))
         }),
     );
+    let figures = account.figures.iter().map(|f| f.caution);
+    let cautions = caution::lines(figures.chain(account.cases.iter().map(|c| c.caution)));
+    if !cautions.is_empty() {
+        section(&mut out, "cautions", cautions.iter().map(|c| format!("  - {}\n", quoted(c))));
+    }
     out
 }
 

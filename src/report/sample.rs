@@ -42,6 +42,7 @@ fn figure(subject: &str, quantity: &str, condition: &str, range: (f64, f64, f64)
         least_at: corner(41.987),
         greatest_at: corner(42.003),
         secondary: false,
+        caution: None,
     }
 }
 
@@ -63,6 +64,7 @@ fn case(figures: &[Figure], at: usize, requirement: usize, limits: &str) -> Case
         method: "worst case".into(),
         statistical: false,
         limits: limits.into(),
+        caution: None,
         lower: Some(ends[0]),
         upper: Some(ends[1]),
         unit: figure.unit,

@@ -32,6 +32,8 @@ pub struct Selected {
     /// A spacer, where one was asked for.
     #[serde(skip_serializing_if = "Option::is_none")]
     pub spacer: Option<SpacerLength>,
+    /// What to bear in mind where margins of load or of joining decide.
+    pub cautions: Vec<&'static str>,
 }
 
 /// The classes that a dimension may have, or a hole and a shaft together.

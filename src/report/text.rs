@@ -13,7 +13,7 @@ mod table;
 
 use super::look::{Look, Role};
 use super::wrap::{blanks, visible, width, wrap};
-use super::{Account, Report, Spec, diagnostic, summary};
+use super::{Account, Caution, Report, Spec, caution, diagnostic, summary};
 use crate::diagnostic::Severity;
 use crate::findings::Standing;
 use crate::findings::number::{Round, with_unit};
@@ -73,6 +73,14 @@ pub fn render(report: &Report, extent: Extent, look: Look) -> String {
     }
     if !out.is_empty() {
         out.push('\n');
+    }
+    // A detailed report has them, at more length, among what its figures rest on.
+    if extent < Extent::Detail {
+        let cases = report.specs.iter().filter_map(|s| s.account.as_ref()).flat_map(|a| &a.cases);
+        let findings = report.specs.iter().flat_map(|s| &s.findings);
+        let called_for =
+            cases.map(|c| c.caution).chain(findings.map(|d| Caution::of_finding(d.code)));
+        cautions(&mut out, &caution::lines(called_for), look);
     }
     let counted = summary::summary(report);
     let role = if counted.fail + counted.undecided + counted.wrong > 0 {
@@ -145,6 +153,13 @@ fn heading(out: &mut String, spec: &Spec, account: &Account, look: Look) {
 fn section(out: &mut String, title: &str, look: Look) {
     out.push('\n');
     paragraph(out, 0, title, Role::Title, look);
+}
+
+/// A line for each caution.
+pub(super) fn cautions(out: &mut String, lines: &[&str], look: Look) {
+    for line in lines {
+        paragraph(out, 0, &format!("caution: {line}"), Role::Warn, look);
+    }
 }
 
 /// A paragraph, wrapped, first line and others indented alike.

@@ -52,6 +52,9 @@ pub struct SpecEntry {
     /// were asked for.
     #[serde(skip_serializing_if = "Option::is_none")]
     pub assembly_yield: Option<YieldEntry>,
+    /// What to bear in mind with these figures: values from memory, the limits of a material, the
+    /// review that figures of load call for, the dangers of joining.
+    pub cautions: Vec<String>,
     /// What is wrong or worth knowing.
     pub findings: Vec<FindingEntry>,
 }

@@ -7,6 +7,7 @@ use super::{
 use crate::evaluate::select::{self, Governing, Obstacle, Rank, Selections};
 use crate::findings::words;
 use crate::model::{Assembly, ConditionId, DimensionId, Form, SubjectId, SubjectKind};
+use crate::report::caution::{self, Caution};
 use crate::units::{Kind, Unit};
 
 /// Puts what was found of a spec into words.
@@ -23,6 +24,12 @@ pub fn selected(
         centrings: found.centrings.iter().map(|c| centring(assembly, c)).collect(),
         tolerances: found.tolerances.iter().map(|t| tolerance(assembly, t)).collect(),
         spacer: spacer.map(|spacer| spacer_length(assembly, spacer)),
+        // A spacer is found from means of lengths alone; whatever else is said, every requirement
+        // has been judged for.
+        cautions: match spacer {
+            Some(_) => Vec::new(),
+            None => caution::lines(assembly.requirements.iter().map(|r| Caution::of(r.quantity))),
+        },
     }
 }
 

@@ -4,6 +4,7 @@ use super::{Candidate, Centring, Choice, Nearest, Selected, SpacerLength, Tolera
 use crate::findings::number::{Round, decimals, digits, join, share};
 use crate::findings::words;
 use crate::report::look::{Look, Role};
+use crate::report::text::cautions;
 use crate::report::wrap::{blanks, left, right, width, wrap};
 use crate::units::Unit;
 
@@ -21,7 +22,12 @@ pub fn text(selected: &Selected, all: bool, look: Look) -> String {
     if blocks.is_empty() {
         blocks.push("no class is left open, no fit fails, and nothing is required\n".to_string());
     }
-    blocks.join("\n")
+    let mut out = blocks.join("\n");
+    if !selected.cautions.is_empty() {
+        out.push('\n');
+        cautions(&mut out, &selected.cautions, look);
+    }
+    out
 }
 
 fn choice(choice: &Choice, all: bool, look: Look) -> String {

@@ -56,6 +56,7 @@ fn spec(spec: &Spec) -> SpecEntry {
             seed: f.drawn.map(|d| d.seed),
             width_missed: f.drawn.and_then(|d| d.missed),
         }),
+        cautions: account.map_or_else(Vec::new, |a| a.grounds.cautions.clone()),
         findings: spec.findings.iter().map(|d| finding(d, &spec.sources)).collect(),
     }
 }
