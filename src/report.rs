@@ -251,6 +251,8 @@ pub struct Statistics {
     pub second_order: Option<(f64, f64)>,
     /// The share of assemblies that break a limit.
     pub failing: FailingShare,
+    /// The same for the delivery whose lots fail most.
+    pub worst_lot: Option<WorstLot>,
     /// Mean and standard deviation where the scenarios make it least.
     pub low: (f64, f64),
     /// Mean and standard deviation where they make it greatest.
@@ -263,6 +265,17 @@ pub struct Statistics {
     pub assumed: bool,
     /// Share of the variance that several unknowns bring together.
     pub interaction: Option<f64>,
+}
+
+/// How a quantity varies within the delivery whose lots fail most.
+#[derive(Debug, Clone)]
+pub struct WorstLot {
+    /// The share of assemblies that break a limit.
+    pub failing: FailingShare,
+    /// Capability index to the nearer limit.
+    pub cpk: Option<f64>,
+    /// The end of each lot's scatter.
+    pub at: Vec<Coordinate>,
 }
 
 /// A share of assemblies, 0 … 1.

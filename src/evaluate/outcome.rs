@@ -243,6 +243,9 @@ pub struct Statistics {
     pub share_interval: (f64, f64),
     /// How it was drawn, where it was.
     pub drawn: Option<Drawn>,
+    /// The same with the scatter of its lots at their worst, for requirements on a share of
+    /// assemblies or a capability to which lots bring scatter, where details are asked for.
+    pub worst_lot: Option<WorstLot>,
     /// Capability index to the nearer limit.
     pub cpk: Option<f64>,
     /// True where the share is that of the formula to its printed digits, without draws.
@@ -279,6 +282,7 @@ impl Statistics {
             share_failing: 1.0,
             share_interval: (0.0, 1.0),
             drawn: None,
+            worst_lot: None,
             cpk: None,
             exact: false,
             random: 0,
@@ -306,6 +310,21 @@ pub struct AssemblyYield {
     pub share_interval: (f64, f64),
     /// How it was drawn, where it was.
     pub drawn: Option<Drawn>,
+}
+
+/// How a quantity varies within the delivery whose lots fail most.
+#[derive(Debug, Clone, PartialEq)]
+pub struct WorstLot {
+    /// Share of assemblies that break a limit, 0 … 1.
+    pub share_failing: f64,
+    /// What that share is known to lie between.
+    pub share_interval: (f64, f64),
+    /// How it was drawn, where it was.
+    pub drawn: Option<Drawn>,
+    /// Capability index to the nearer limit.
+    pub cpk: Option<f64>,
+    /// The end of each lot's scatter.
+    pub corner: Vec<(Unknown, f64)>,
 }
 
 /// How a share was drawn.

@@ -10,12 +10,13 @@ mod corners;
 mod draw;
 mod judge;
 mod linear;
+mod lots;
 mod together;
 
-use super::Options;
 use super::outcome::{Evaluation, Statistics};
 use super::scene::Response;
 use super::tally::Tally;
+use super::{Detail, Options};
 use crate::model::{Assembly, Method};
 use corners::Corners;
 use draw::Check;
@@ -31,6 +32,7 @@ pub(crate) struct Drawing<'a> {
 struct Case<'a> {
     /// Index of the verdict.
     verdict: usize,
+    method: Method,
     response: &'a Response,
     corners: Corners,
     lower: Option<f64>,
@@ -60,6 +62,7 @@ pub(crate) fn settle(
             let response = &responses[v.figure?];
             Some(Case {
                 verdict,
+                method: requirement.method,
                 response,
                 corners: corners::find(assembly, response),
                 lower: requirement.lower.as_ref().map(|l| l.value),
@@ -77,6 +80,9 @@ pub(crate) fn settle(
         for (&i, &count) in bent.iter().zip(&counts.single) {
             draw::take(&mut statistics[i], count, counts.draws, drawing.options);
         }
+    }
+    if drawing.options.detail == Detail::Full {
+        lots::settle(assembly, &cases, &mut statistics, drawing);
     }
     evaluation.assembly_yield = Some(together::assembly(assembly, &cases, &statistics, drawing));
     let judged: Vec<(usize, Statistics)> =

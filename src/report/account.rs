@@ -7,6 +7,7 @@ use super::coordinate::{coordinates, scale};
 use super::shop::cards;
 use super::{
     Account, Case, Contribution, FailingShare, Figure, FrictionBand, Measure, Statistics, Window,
+    WorstLot,
 };
 use crate::evaluate::Evaluation;
 use crate::evaluate::outcome::{self, Verdict};
@@ -230,7 +231,10 @@ fn case(assembly: &Assembly, evaluation: &Evaluation, verdict: &Verdict, today: 
             .iter()
             .map(|c| contribution(assembly, requirement, verdict, c))
             .collect(),
-        statistics: verdict.statistics.as_ref().map(|s| statistics(s, requirement.method)),
+        statistics: verdict
+            .statistics
+            .as_ref()
+            .map(|s| statistics(assembly, s, requirement.method)),
         thermal_shift: thermal_shift(assembly, evaluation, verdict),
         window: verdict.window.as_ref().map(|w| window(assembly, requirement, w)),
     }
@@ -307,7 +311,7 @@ fn contribution(
     }
 }
 
-fn statistics(s: &outcome::Statistics, method: Method) -> Statistics {
+fn statistics(assembly: &Assembly, s: &outcome::Statistics, method: Method) -> Statistics {
     Statistics {
         mean: s.mean,
         sigma: s.sigma,
@@ -317,6 +321,15 @@ fn statistics(s: &outcome::Statistics, method: Method) -> Statistics {
             interval: s.share_interval,
             drawn: s.drawn,
         },
+        worst_lot: s.worst_lot.as_ref().map(|w| WorstLot {
+            failing: FailingShare {
+                share: w.share_failing,
+                interval: w.share_interval,
+                drawn: w.drawn,
+            },
+            cpk: w.cpk,
+            at: coordinates(assembly, &w.corner),
+        }),
         low: s.low,
         high: s.high,
         shown_sigmas: match method {

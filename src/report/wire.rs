@@ -224,6 +224,11 @@ pub struct RequirementEntry {
     /// Capability index to the nearer limit.
     #[serde(skip_serializing_if = "Option::is_none")]
     pub cpk: Option<f64>,
+    /// The same for the delivery whose lots fail most: all of its pieces share its lots, and this is
+    /// the greatest share over the ends of their scatter. For requirements on a share of assemblies
+    /// or a capability to which lots bring scatter.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub worst_lot: Option<WorstLotEntry>,
     /// `holds`, `fails`, `undecided` or `conceded`.
     pub verdict: &'static str,
     /// The reason given.
@@ -243,6 +248,30 @@ pub struct RequirementEntry {
     /// the contributors it sums to 1.
     #[serde(skip_serializing_if = "Option::is_none")]
     pub interaction: Option<f64>,
+}
+
+/// How a requirement stands within the delivery whose lots fail most.
+#[derive(Debug, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
+pub struct WorstLotEntry {
+    /// Share of assemblies that break a limit, 0 … 1.
+    pub share_failing: Option<f64>,
+    /// What that share is known to lie between.
+    pub share_failing_interval: [f64; 2],
+    /// Number of draws, where it was drawn.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub draws: Option<u64>,
+    /// Seed of the draws, where it was drawn.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub seed: Option<u64>,
+    /// The width that was asked for of its interval, where the most draws allowed did not reach it.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub width_missed: Option<f64>,
+    /// Capability index to the nearer limit.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub cpk: Option<f64>,
+    /// The end of each lot's scatter, −1 or 1 in the unit of its tolerance.
+    pub at: Map,
 }
 
 /// Mean and standard deviation to second order.

@@ -81,6 +81,7 @@ pub(super) fn statistics(assembly: &Assembly, case: &Case<'_>) -> Statistics {
         share_failing: shares.iter().sum::<f64>().min(1.0),
         share_interval: (bounds.0.min(1.0), bounds.1.min(1.0)),
         drawn: None,
+        worst_lot: None,
         cpk,
         exact,
         random: shown.parts.len(),

@@ -4,7 +4,7 @@
 use super::{
     CauseEntry, ContributorEntry, Document, FindingEntry, FrictionBandEntry, LabelEntry, Map,
     RequirementEntry, ResultEntry, SCHEMA, SecondOrderEntry, ShopCardEntry, SpecEntry,
-    SummaryEntry, TogetherEntry, WindowEntry, YieldEntry,
+    SummaryEntry, TogetherEntry, WindowEntry, WorstLotEntry, YieldEntry,
 };
 use crate::diagnostic::{Diagnostic, Label};
 use crate::report::cause::by_cause;
@@ -180,6 +180,15 @@ fn requirement(account: &Account, case: &Case) -> RequirementEntry {
         seed: drawn.map(|d| d.seed),
         width_missed: drawn.and_then(|d| d.missed),
         cpk: statistics.and_then(|s| s.cpk).and_then(number),
+        worst_lot: statistics.and_then(|s| s.worst_lot.as_ref()).map(|w| WorstLotEntry {
+            share_failing: number(w.failing.share),
+            share_failing_interval: [w.failing.interval.0, w.failing.interval.1],
+            draws: w.failing.drawn.map(|d| d.draws),
+            seed: w.failing.drawn.map(|d| d.seed),
+            width_missed: w.failing.drawn.and_then(|d| d.missed),
+            cpk: w.cpk.and_then(number),
+            at: corner(&w.at),
+        }),
         verdict: case.standing.word(),
         because: case.because.clone(),
         concession: case.concession.clone(),

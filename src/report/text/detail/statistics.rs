@@ -4,7 +4,7 @@ use crate::evaluate::outcome::Drawn;
 use crate::findings::number::{Round, difference_with_unit, digits, with_unit};
 use crate::report::look::{Look, Role};
 use crate::report::text::paragraph;
-use crate::report::{Case, FailingShare, Statistics};
+use crate::report::{Case, FailingShare, Statistics, WorstLot};
 
 /// Shares below this are not told apart.
 const LEAST_SHARE: f64 = 1e-18;
@@ -23,22 +23,46 @@ pub(super) fn render(out: &mut String, case: &Case, s: &Statistics, look: Look) 
         );
         paragraph(out, 2, &text, Role::Plain, look);
     }
+    if let Some(worst) = &s.worst_lot {
+        paragraph(out, 2, &worst_lot(worst), Role::Plain, look);
+    }
     if s.assumed {
         let text = "ASSUMED: sizes without a stated spread are normal, centred, limits at 3 sigma";
         paragraph(out, 2, text, Role::Warn, look);
     }
 }
 
+/// What fails of the worst delivery, which it is, and how it was found.
+fn worst_lot(worst: &WorstLot) -> String {
+    let ends: Vec<String> = worst
+        .at
+        .iter()
+        .map(|c| format!("{} {}", c.name, if c.value < 0.0 { "least" } else { "greatest" }))
+        .collect();
+    format!(
+        "worst lot: {}{} fail, with {} (the pieces of a delivery share its lots: the greatest \
+         share over the ends of their scatter)",
+        index(worst.cpk),
+        failing(&worst.failing),
+        ends.join(", ")
+    )
+}
+
 /// Capability index and failing share in words.
 pub(in crate::report::text) fn capability(s: &Statistics) -> String {
-    let cpk = s.cpk.map_or_else(String::new, |c| format!("Cpk {}, ", digits(c, 2, Round::Down)));
-    format!("{cpk}{} fail", failing(&s.failing))
+    format!("{}{} fail", index(s.cpk), failing(&s.failing))
+}
+
+fn index(cpk: Option<f64>) -> String {
+    // Where nothing varies there is no capability.
+    let cpk = cpk.filter(|c| c.is_finite());
+    cpk.map_or_else(String::new, |c| format!("Cpk {}, ", digits(c, 2, Round::Down)))
 }
 
 /// Both in so few words that they fit below a row of figures.
 pub(in crate::report::text) fn brief(s: &Statistics) -> String {
     let Some(drawn) = s.failing.drawn else { return capability(s) };
-    let cpk = s.cpk.map_or_else(String::new, |c| format!("Cpk {}, ", digits(c, 2, Round::Down)));
+    let cpk = index(s.cpk);
     let (least, greatest) = s.failing.interval;
     let (least, greatest) =
         (share_of_assemblies(least, Round::Down), share_of_assemblies(greatest, Round::Up));
