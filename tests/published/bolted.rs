@@ -42,6 +42,58 @@ fn hibbeler_bolt_in_a_sleeve() {
 }
 
 #[test]
+fn gere_bolt_through_two_copper_tubes() {
+    // Gere, Mechanics of Materials, 7th edition, problem 2.5-22 (inputs; its answers were not at
+    // hand): bolt of 5 mm through tubes of 40 mm (25 × 4) and 50 mm (17 × 3), warmed by 30 K, the nut
+    // of 1.0 mm pitch then turned by half; 200 GPa and 12 ppm/K, copper 120 GPa and 17 ppm/K. Solved
+    // here by displacements: the free faces of bolt and tubes meet under one force.
+    let area = |outside: f64, wall: f64| std::f64::consts::PI * wall * (outside - wall);
+    let (bolt, wide, narrow) =
+        (std::f64::consts::PI / 4.0 * 25.0, area(25.0, 4.0), area(17.0, 3.0));
+    near(wide, 263.894, 0.001);
+    near(narrow, 131.947, 0.001);
+    let (stiff_bolt, stiff_wide, stiff_narrow) =
+        (200e3 * bolt / 90.0, 120e3 * wide / 40.0, 120e3 * narrow / 50.0);
+    // Unknown: how far the joint between the tubes and the nut move (mm); head at 0.
+    //   wide·(x₁ − 40α_cΔ) = narrow·(x₂ − x₁ − 50α_cΔ) = −bolt·(x₂ + ½ − 90α_sΔ)
+    let (copper, steel) = (17e-6 * 30.0, 12e-6 * 30.0);
+    let (a11, a12, b1) = (
+        stiff_wide + stiff_narrow,
+        -stiff_narrow,
+        stiff_wide * 40.0 * copper - stiff_narrow * 50.0 * copper,
+    );
+    let (a21, a22, b2) = (
+        -stiff_narrow,
+        stiff_narrow + stiff_bolt,
+        stiff_narrow * 50.0 * copper + stiff_bolt * (90.0 * steel - 0.5),
+    );
+    let x2 = (b2 * a11 - b1 * a21) / (a22 * a11 - a12 * a21);
+    let by_displacements = stiff_bolt * (x2 + 0.5 - 90.0 * steel);
+    let c = compliance(0.09, 200e9, bolt * 1e-6)
+        + compliance(0.04, 120e9, wide * 1e-6)
+        + compliance(0.05, 120e9, narrow * 1e-6);
+    let grown = growth(0.04, copper, 0.0) + growth(0.05, copper, 0.0) - growth(0.09, steel, 0.0);
+    let found = force(grown + 0.5e-3, c);
+    assert!((found / by_displacements - 1.0).abs() < 1e-12, "{found} {by_displacements}");
+    assert!(found > 10e3);
+}
+
+#[test]
+fn two_parts_after_lee() {
+    // D. Lee, How internal loads affect bolt preload, 2010: F_b = k_b(Δ_b + δ) − k_b·α_b·ΔT_b·L_b, with
+    // the lengthening δ that bolt and clamped part share; each at its own temperature.
+    let (preload, k_bolt, k_clamped, length) = (12e3, 200e6, 700e6, 0.08);
+    let (bolt, clamped) = (11.7e-6 * 60.0 * length, 23.4e-6 * 90.0 * length);
+    // Equilibrium k_b(Δ_b + δ − e_b) = k_c(Δ_c − δ + e_c), with k_b·Δ_b = k_c·Δ_c = preload.
+    let shared = (k_clamped * clamped + k_bolt * bolt) / (k_bolt + k_clamped);
+    let printed = k_bolt * (preload / k_bolt + shared) - k_bolt * bolt;
+    let c = 1.0 / k_bolt + 1.0 / k_clamped;
+    let grown = growth(length, 23.4e-6 * 90.0, 0.0) - growth(length, 11.7e-6 * 60.0, 0.0);
+    let found = force(taken_up(preload, c, grown), c);
+    assert!((found / printed - 1.0).abs() < 1e-13, "{found} {printed}");
+}
+
+#[test]
 fn preload_after_vdi_2230() {
     // VDI 2230-1 (the formula from memory): ΔF = l_K(α_SΔT − α_PΔT)/(δ_S E_RT/E_T + δ_P E_RT/E_T) is
     // lost by expansion, and F_V(1 − (δ_S+δ_P)/(δ_S E_RT/E_T + δ_P E_RT/E_T)) by the moduli.

@@ -1,6 +1,8 @@
 //! Press and shrink joints against textbooks, and proven over their tolerances.
 
+use crate::support::run;
 use gapkeep::mechanics::{Ring, contact, joint};
+use gapkeep::model::Quantity;
 use gapkeep::numeric::extremes::extremes;
 use gapkeep::numeric::{Interval, Number, Tape};
 
@@ -49,6 +51,58 @@ fn shigley_hub_and_shaft_in_inches() {
     let hub = ring(Some(0.5 * INCH), INCH, 30e6 * PSI, 0.292);
     assert!((p / PSI - 22_500.0).abs() < 1e-6);
     assert!((joint::hub_hoop_stress(&hub, p) / PSI - 37_500.0).abs() < 1e-6);
+}
+
+#[test]
+fn shigley_from_the_text_of_a_spec() {
+    // The two solutions of the first test by their classes: limits from the tables of ISO 286.
+    for (class, least, greatest) in [("s6", 34.9, 114.5), ("u6", 67.9, 147.5)] {
+        let run = run(&format!(
+            r#"
+assembly "solutions 3-64 and 3-66"
+lengths in mm
+temperatures in degC
+condition shop 20
+material steel {{ cte 11.5 ppm/K; modulus 207 GPa; poisson 0.292; source "Shigley" }}
+part hub of steel {{ bore = dia 40 H7; outside = dia 80 exact }}
+part shaft of steel {{ seat = dia 40 {class} }}
+fit seat = shaft.seat in hub.bore {{
+  joint {{ length 40; friction 0.15; shaft solid; hub outside hub.outside }}
+}}
+"#
+        ));
+        let (low, high) = run.range("seat", Quantity::Pressure, "shop");
+        assert!(prints(low, least, 0.1) && prints(high, greatest, 0.1), "{low} {high}");
+        // DIN 7190 as taught (Zwickau University of Applied Sciences): to press it in takes
+        // F_e = π·D·l·µ·p at the greatest pressure, here in kN.
+        let push = std::f64::consts::PI * 40.0 * 40.0 * 0.15 * high * 1e-3;
+        let found = run.range("seat", Quantity::AxialForce, "shop").1;
+        let unit = push / found;
+        assert!((unit - 1.0).abs() < 1e-9 || (unit * 1e3 - 1.0).abs() < 1e-9, "{found} {push}");
+    }
+}
+
+#[test]
+fn locomotive_tyres_take_a_thousandth_of_their_diameter() {
+    // American Railway Master Mechanics, in F. D. Jones, Turning and Boring: centres of 38 to 66 in
+    // have shrink allowances of 0.040 to 0.070 in. On a solid centre of the tyre's steel (30e6 psi) the
+    // hoop stress of a tyre 3 in thick is by hand E·δ/d·(1 + (d/D)²)/2, a little under the E·δ/d of a
+    // thin ring; the allowances bring all of them to 27 500 … 29 300 psi.
+    let table =
+        [(38.0, 0.040), (44.0, 0.047), (50.0, 0.053), (56.0, 0.060), (62.0, 0.066), (66.0, 0.070)];
+    for (centre, allowance) in table {
+        let share: f64 = allowance / centre;
+        assert!((share / 0.001_05 - 1.0).abs() < 0.025, "{centre}: {share}");
+        let (d, delta) = (centre * INCH, allowance * INCH);
+        let wheel = ring(None, d / 2.0, 30e6 * PSI, 0.29);
+        let tyre = ring(Some(d / 2.0), d / 2.0 + 3.0 * INCH, 30e6 * PSI, 0.29);
+        let p = joint::pressure(delta, d, joint::compliance(&wheel, &tyre));
+        let hoop = joint::hub_hoop_stress(&tyre, p) / PSI;
+        let q = centre / (centre + 6.0);
+        let by_hand = 30e6 * share * (1.0 + q * q) / 2.0;
+        assert!((hoop / by_hand - 1.0).abs() < 1e-12, "{centre}: {hoop} psi");
+        assert!((27_500.0..29_500.0).contains(&hoop), "{centre}: {hoop} psi");
+    }
 }
 
 #[test]
