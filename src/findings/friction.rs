@@ -1,7 +1,7 @@
 //! `friction-along-seat`: a requirement that holds with rings free to slip along their seat, and may
 //! not where friction holds them.
 
-use super::number::{Round, digits, with_unit};
+use super::number::{Digits, Round, digits};
 use super::words;
 use crate::diagnostic::{Code, Diagnostic};
 use crate::evaluate::Evaluation;
@@ -56,10 +56,13 @@ fn finding(
             Round::Up,
         ),
     };
-    let unit = requirement.unit;
+    let limit_value = limit.map(|l| l.value);
+    let numbers: Vec<f64> = [Some(end), without, limit_value].into_iter().flatten().collect();
+    let apart = numbers.iter().map(|x| x - limit_value.unwrap_or(0.0)).collect::<Vec<f64>>();
+    let shown = Digits::of(requirement.unit, &[numbers, apart].concat());
     let of_yield = if limit.is_some_and(|l| l.of_yield) { " of yield" } else { "" };
     let value = |si: Option<f64>, round| {
-        si.map_or_else(String::new, |si| format!("{}{of_yield}", with_unit(si, unit, round)))
+        si.map_or_else(String::new, |si| format!("{}{of_yield}", shown.value(si, round)))
     };
     let subject = words::name(&assembly.subject(requirement.subject).name);
     let what = words::quantity(assembly, requirement.quantity);
@@ -71,7 +74,7 @@ fn finding(
         "{word} {} with it, {} without, limit {}",
         value(Some(end), round),
         value(without, round),
-        value(limit.map(|l| l.value), Round::Nearest),
+        value(limit_value, Round::Nearest),
     );
     if !others.is_empty() {
         let names: Vec<String> = others.iter().map(|t| condition(t)).collect();

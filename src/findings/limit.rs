@@ -2,7 +2,7 @@
 //!
 //! One finding a line and side, at the condition where it is worst; the other conditions are named.
 
-use super::number::{self, Round};
+use super::number::{self, Digits, Round};
 use super::standing::{Standing, standing};
 use super::words;
 use crate::diagnostic::{Code, Diagnostic, Severity};
@@ -92,9 +92,10 @@ fn finding(
     };
     let unit = requirement.unit;
     let of_yield = share_of(requirement);
-    let value = number::with_unit(end, unit, round);
-    let limit = number::with_unit(worst.limit.value, unit, Round::Nearest);
-    let short = number::difference_with_unit(worst.short, unit, Round::Up);
+    let digits = Digits::of(unit, &[end, worst.limit.value, worst.short]);
+    let value = digits.value(end, round);
+    let limit = digits.value(worst.limit.value, Round::Nearest);
+    let short = digits.difference(worst.short, Round::Up);
     let word = if side == Side::Least { "least" } else { "greatest" };
     let subject = words::name(&assembly.subject(requirement.subject).name);
     let what = match requirement.quantity {

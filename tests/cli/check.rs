@@ -181,3 +181,20 @@ fn nothing_outside_the_root_is_read() {
     assert!(ran.output.contains("file-outside"), "{}", ran.output);
     assert_eq!(bench.run("check secret.gap --root specs").status, 2);
 }
+
+#[test]
+fn no_pressure_at_all_is_a_plain_0_without_a_strip() {
+    let spec = "assembly \"Reservoir\"\nlengths in mm\ntemperatures in degC\ncondition hot 90\n\
+                part body of aluminium_6061_t6 { bore = dia 60 H8; stroke = 85 ±0.3 }\n\
+                fill oil {\n  cavity of body = pi/4 * body.bore^2 * body.stroke\n  \
+                charge hydraulic_oil 205 cm3 ±2 %\n}\n";
+    let ran = Bench::new(&[("oil.gap", spec)]).run("check oil.gap --detail");
+    let after = ran.output.split_once("  pressure, MPa\n").unwrap().1;
+    let row = after.lines().next().unwrap();
+    assert_eq!(row.split_whitespace().collect::<Vec<_>>(), ["hot", "0", "0", "0"]);
+    // Under each other with the figures above.
+    let ullage = ran.output.split_once("  ullage, %\n").unwrap().1.lines().next().unwrap();
+    let end = |row: &str, word: &str| row.find(word).unwrap() + word.len();
+    let first = ullage.split_whitespace().nth(1).unwrap();
+    assert_eq!(end(row, " 0"), end(ullage, first), "{ullage}\n{row}");
+}

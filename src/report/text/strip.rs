@@ -10,6 +10,9 @@
 
 use crate::report::look::{Look, Role};
 
+/// A scale spans at least this share of what is drawn on it.
+const LEAST_WIDTH: f64 = 1e-9;
+
 /// What the strips of a group are drawn to: least and greatest value on them.
 #[derive(Debug, Clone, Copy)]
 pub(super) struct Scale {
@@ -26,7 +29,10 @@ impl Scale {
             to = to.max(value);
         }
         let room = 0.05 * (to - from);
-        (room.is_finite() && room > 0.0).then_some(Scale { from: from - room, to: to + room })
+        // A width that is a trace of rounding is no scale.
+        let least = LEAST_WIDTH * from.abs().max(to.abs());
+        (room.is_finite() && to - from > least)
+            .then_some(Scale { from: from - room, to: to + room })
     }
 
     /// The cell of a value among `cells`.
@@ -121,6 +127,8 @@ mod tests {
     fn a_scale_needs_two_values() {
         assert!(Scale::over([1.0, 1.0].into_iter()).is_none());
         assert!(Scale::over([f64::NAN, 2.0].into_iter()).is_none());
+        assert!(Scale::over([37.0, 37.0 + 1e-12].into_iter()).is_none());
+        assert!(Scale::over([0.0, 0.0].into_iter()).is_none());
         assert!(Scale::over([1.0, 2.0, f64::INFINITY].into_iter()).is_some());
     }
 }

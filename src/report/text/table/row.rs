@@ -1,7 +1,9 @@
 //! One line of the table: figures put into words.
 
 use crate::findings::Standing;
-use crate::findings::number::{Round, decimals, difference, difference_with_unit, digits};
+use crate::findings::number::{
+    Round, decimals, difference, difference_with_unit, digits, is_nothing,
+};
 use crate::report::text::detail::statistics::brief;
 use crate::report::wrap::visible;
 use crate::report::{Account, Case, Figure};
@@ -43,6 +45,11 @@ pub(super) fn row(account: &Account, figure: &Figure, case: Option<&Case>) -> Ro
         }
         None => (figure.least, figure.mean, figure.greatest),
     };
+    // Nothing at all is a plain 0 with no strip of its own scale; a length has a drawing's digits.
+    let nothing = !matches!(unit.kind, Kind::TEMPERATURE | Kind::LENGTH)
+        && [least, mean, greatest].iter().all(|si| is_nothing(*si, unit));
+    let (least, mean, greatest) = if nothing { (0.0, 0.0, 0.0) } else { (least, mean, greatest) };
+    let shown = |si: f64, round| if nothing { "0".to_string() } else { shown(si, round) };
     let aside = match statistics {
         Some(s) => brief(s),
         None => aside(figure),
@@ -72,11 +79,14 @@ fn places(account: &Account, figure: &Figure) -> usize {
     });
     let size = alike
         .flat_map(|f| [f.least, f.greatest])
+        .filter(|si| !is_nothing(*si, figure.unit))
         .map(|si| figure.unit.from_si(si).abs())
         .filter(|size| size.is_finite())
         .fold(0.0, f64::max);
     let mut places = usual;
-    while size > 0.0 && size * libm::pow(10.0, places as f64) < 10.0 && places < usual + MOST_MORE {
+    // A length keeps the digits of a drawing as long as any are seen; of others the greatest has three.
+    let seen = if figure.unit.kind == Kind::LENGTH { 10.0 } else { 100.0 };
+    while size > 0.0 && size * libm::pow(10.0, places as f64) < seen && places < usual + MOST_MORE {
         places += 1;
     }
     places
