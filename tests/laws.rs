@@ -236,3 +236,20 @@ fn forty_dimensions_make_one_gap() {
     assert!(figure.range.least.met && figure.range.greatest.met);
     assert!(figure.range.least.corner.len() >= 40);
 }
+
+#[test]
+fn contributors_sum_to_the_range_across_a_contact_that_opens() {
+    // Loose at one corner and tight at the other: the pressure has a kink in between.
+    let run = run("assembly \"kink\"\nlengths in mm\ntemperatures in degC\n\
+         condition hot 40 .. 90\n\
+         part hub of aluminium_6061_t6 { bore = dia 40 +0.03/0\n outside = dia 80 ±0 }\n\
+         part pin of steel_c45 { seat = dia 40 +0.055/+0.02 }\n\
+         fit seat = pin.seat in hub.bore {\n  joint { hub outside hub.outside; pin solid; length 30 mm }\n  \
+         require \"P\" pressure <= 1 MPa\n}");
+    let verdict = run.verdict("P", "hot");
+    let figure = run.figure("seat", Quantity::Pressure, Some("hot"));
+    assert_eq!(figure.range.least.bound, 0.0);
+    let range = figure.range.greatest.reached - figure.range.least.reached;
+    let parts: f64 = verdict.contributors.iter().map(|c| c.part).sum();
+    assert!((parts / range - 1.0).abs() < 1e-12, "{parts} {range}");
+}

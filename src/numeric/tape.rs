@@ -6,6 +6,7 @@
 //! local slopes come from [`Dual`], so that the rules of differentiation stand in one place.
 
 mod columns;
+mod kinks;
 mod recorded;
 
 use super::{Curve, Dual, Interval, Number, Ordered};
