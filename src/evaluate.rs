@@ -23,6 +23,7 @@ mod size;
 mod statistics;
 pub mod tally;
 mod temperature;
+mod thermal;
 mod verdict;
 mod window;
 
@@ -87,7 +88,7 @@ pub fn evaluate_counted(assembly: &Assembly, options: &Options, tally: &Tally) -
     selection::settle(assembly, &mut run.evaluation);
     run.evaluation.friction_bands = joint::band::bands(assembly, &run.evaluation.beyond_data);
     run.evaluation.turned_over = joint::band::turned_over(assembly, &run.evaluation);
-    run.windows();
+    run.temperatures();
     run.evaluation.missing.sort();
     run.evaluation.missing.dedup();
     run.evaluation
@@ -214,8 +215,7 @@ impl Run<'_> {
         } else {
             requirement.conditions.iter().map(|&c| Some(c)).collect()
         };
-        let of_yield =
-            [&requirement.lower, &requirement.upper].into_iter().flatten().any(|l| l.of_yield);
+        let of_yield = requirement.of_yield();
         // Requirements on sets are judged over all members at once, afterwards; they stand here
         // with the first.
         let members: Vec<Chosen> = selection::choices(assembly, requirement.subject).swap_remove(0);
@@ -237,6 +237,7 @@ impl Run<'_> {
                     margin: f64::NAN,
                     contributors: Vec::new(),
                     window: None,
+                    thermal_shifts: Vec::new(),
                     statistics: None,
                 },
                 Some(at) => {
@@ -257,6 +258,7 @@ impl Run<'_> {
                         margin: judged.margin,
                         contributors,
                         window: None,
+                        thermal_shifts: Vec::new(),
                         statistics: None,
                     }
                 }
@@ -264,8 +266,8 @@ impl Run<'_> {
         }
     }
 
-    /// Temperature windows of what is looked into.
-    fn windows(&mut self) {
+    /// What temperature does, and temperature windows, of what is looked into.
+    fn temperatures(&mut self) {
         for at in 0..self.evaluation.verdicts.len() {
             let verdict = &self.evaluation.verdicts[at];
             // What has no bounds here has none nearby, and looking for them everywhere is slow.
@@ -277,8 +279,13 @@ impl Run<'_> {
                 && !verdict.figure.is_some_and(unbounded);
             let Some(figure) = verdict.figure.filter(|_| wanted) else { continue };
             let members = &self.evaluation.figures[figure].members;
-            let found = window::window(self.assembly, verdict, members);
-            self.evaluation.verdicts[at].window = found;
+            let window = window::window(self.assembly, verdict, members);
+            let shifts = match self.detail {
+                Detail::Full => thermal::shifts(self.assembly, verdict, members),
+                Detail::Brief => Vec::new(),
+            };
+            let verdict = &mut self.evaluation.verdicts[at];
+            (verdict.window, verdict.thermal_shifts) = (window, shifts);
         }
     }
 }

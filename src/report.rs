@@ -219,8 +219,8 @@ pub struct Case {
     pub contributors: Vec<Contribution>,
     /// How it varies from assembly to assembly, where statistics were asked for.
     pub statistics: Option<Statistics>,
-    /// The mean here minus the mean at reference.
-    pub thermal_shift: Option<f64>,
+    /// What temperature does to the mean since reference, by part, largest first.
+    pub thermal_shifts: Vec<(String, f64)>,
     /// Temperatures at which it would hold.
     pub window: Option<Window>,
 }

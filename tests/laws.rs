@@ -253,3 +253,33 @@ fn contributors_sum_to_the_range_across_a_contact_that_opens() {
     let parts: f64 = verdict.contributors.iter().map(|c| c.part).sum();
     assert!((parts / range - 1.0).abs() < 1e-12, "{parts} {range}");
 }
+
+#[test]
+fn the_thermal_shift_is_shared_out_part_by_part() {
+    let head = "assembly \"shift\"\nlengths in mm\ntemperatures in degC\n\
+         material light { cte 23.4 ppm/K; modulus 70 GPa; poisson 0.33; source \"test\" }\n\
+         material heavy { cte 11.7 ppm/K; modulus 207 GPa; poisson 0.29; source \"test\" }\n\
+         condition hot 80 ±5 { pin 30 K above }\ncondition room 20\n\
+         part hub of light { bore = dia 40 +0.03/0\n outside = dia 80 ±0 }\n\
+         part pin of heavy { seat = dia 40 +0.095/+0.08 }\n";
+    let free =
+        run(&format!("{head}fit seat = pin.seat in hub.bore {{ require \"C\" clearance <= 0 }}"));
+    let unit = |si: f64| si * 1e3;
+    let shifts = |run: &Run, id: &str| -> Vec<f64> {
+        run.verdict(id, "hot").thermal_shifts.iter().map(|s| s.shift).collect()
+    };
+    // αΔT·d of each, middle sizes: the bore opens, the pin closes.
+    let found = shifts(&free, "C");
+    assert_eq!(found.len(), 2);
+    assert!((unit(found[0]) - 23.4e-6 * 60.0 * 40.015).abs() < 1e-12, "{found:?}");
+    assert!((unit(found[1]) + 11.7e-6 * 90.0 * 40.0875).abs() < 1e-12, "{found:?}");
+    // Of what is not linear they still sum to all of it.
+    let joint = run(&format!(
+        "{head}fit seat = pin.seat in hub.bore {{\n  \
+         joint {{ hub outside hub.outside; pin solid; length 30 mm }}\n  \
+         require \"P\" pressure >= 0.1 MPa\n}}"
+    ));
+    let total: f64 = shifts(&joint, "P").iter().sum();
+    let mean = |at| joint.figure("seat", Quantity::Pressure, Some(at)).range.mean;
+    assert!((total / (mean("hot") - mean("room")) - 1.0).abs() < 1e-12);
+}

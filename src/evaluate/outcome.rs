@@ -99,6 +99,8 @@ pub struct Verdict {
     pub contributors: Vec<Contributor>,
     /// Where it would hold if the temperatures were other ones.
     pub window: Option<Window>,
+    /// What temperature alone does to the mean since reference, part by part, largest first.
+    pub thermal_shifts: Vec<PartShift>,
     /// How it varies from assembly to assembly, where some requirement of the spec asks for
     /// statistics.
     pub statistics: Option<Statistics>,
@@ -135,6 +137,15 @@ pub struct Contributor {
     pub part: f64,
     /// The same as a share of the range, 0 … 1.
     pub share_of_range: f64,
+}
+
+/// What the temperature of one part or charge does to a mean.
+#[derive(Debug, Clone, Copy, PartialEq)]
+pub struct PartShift {
+    /// Whose temperature.
+    pub owner: Owner,
+    /// The shift from the reference temperature to that of the condition, in the quantity's SI unit.
+    pub shift: f64,
 }
 
 /// The temperatures at which a requirement holds, as proven intervals of one temperature that all

@@ -58,13 +58,15 @@ pub(crate) struct Shift {
     pub(crate) way: Way,
 }
 
-/// The two ways to move temperatures.
+/// The ways to move temperatures.
 #[derive(Debug, Clone)]
 pub(crate) enum Way {
     /// Every part to this temperature, K.
     Common(Recorded),
     /// Every departure from the reference temperature by this factor.
     Scaled(Recorded),
+    /// The departure of each by a factor of its own; of anyone else by 1.
+    Each(Vec<(Owner, Recorded)>),
 }
 
 /// A recording under way.

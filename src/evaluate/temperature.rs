@@ -17,11 +17,19 @@ pub(crate) fn of(scene: &Scene<'_>, at: At, owner: Owner) -> Recorded {
     match scene.shift(id) {
         None => in_condition(scene, id, owner),
         Some(Way::Common(temperature)) => temperature.clone() + stated(scene, id, owner).tolerance,
-        Some(Way::Scaled(factor)) => {
-            let Stated { nominal, tolerance } = stated(scene, id, owner);
-            factor.clone() * (nominal - scene.assembly.reference) + reference + tolerance
+        Some(Way::Scaled(factor)) => departed(scene, id, owner, factor.clone()),
+        Some(Way::Each(factors)) => {
+            let own = factors.iter().find(|(o, _)| *o == owner).map(|(_, factor)| factor.clone());
+            departed(scene, id, owner, own.unwrap_or(Recorded::exact(1.0)))
         }
     }
+}
+
+/// The temperature with its departure from reference multiplied, tolerance kept.
+fn departed(scene: &Scene<'_>, id: ConditionId, owner: Owner, factor: Recorded) -> Recorded {
+    let reference = scene.assembly.reference;
+    let Stated { nominal, tolerance } = stated(scene, id, owner);
+    factor * (nominal - reference) + reference + tolerance
 }
 
 /// A temperature in two parts: what the spec asks for, and how far it may be off. K.

@@ -30,8 +30,7 @@ pub(crate) fn window(assembly: &Assembly, verdict: &Verdict, members: &[Chosen])
     let condition = verdict.condition?;
     let requirement = &assembly.requirements[verdict.requirement];
     let axis = Axis::of(assembly, requirement, condition)?;
-    let of_yield =
-        [&requirement.lower, &requirement.upper].into_iter().flatten().any(|l| l.of_yield);
+    let of_yield = requirement.of_yield();
     let response = Scene::record_shifted(
         assembly,
         members,

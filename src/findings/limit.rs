@@ -192,8 +192,7 @@ fn aside(requirement: &Requirement, value: f64, side: Side) -> String {
 
 /// What a share is of.
 fn share_of(requirement: &Requirement) -> &'static str {
-    let limits = [&requirement.lower, &requirement.upper];
-    if limits.into_iter().flatten().any(|limit| limit.of_yield) { " of yield" } else { "" }
+    if requirement.of_yield() { " of yield" } else { "" }
 }
 
 fn at_condition(assembly: &Assembly, broken: &Broken<'_>) -> String {

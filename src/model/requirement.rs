@@ -117,6 +117,13 @@ pub enum Method {
     Share(f64),
 }
 
+impl Requirement {
+    /// True where a limit is a share of yield.
+    pub fn of_yield(&self) -> bool {
+        [&self.lower, &self.upper].into_iter().flatten().any(|limit| limit.of_yield)
+    }
+}
+
 /// An accepted departure from a requirement.
 #[derive(Debug, Clone, PartialEq)]
 pub struct Concession {

@@ -119,7 +119,7 @@ fn unit_of(
         .requirements
         .iter()
         .find(|r| r.subject == subject && r.quantity == quantity)
-        .filter(|r| of_yield(r) == share_of_yield);
+        .filter(|r| r.of_yield() == share_of_yield);
     if let Some(requirement) = required {
         return shown_unit(requirement);
     }
@@ -131,11 +131,7 @@ fn unit_of(
 
 /// The unit a requirement's figures are shown in; a share of yield in per cent.
 fn shown_unit(requirement: &Requirement) -> &'static Unit {
-    find("%").filter(|_| of_yield(requirement)).unwrap_or(requirement.unit)
-}
-
-fn of_yield(requirement: &Requirement) -> bool {
-    [&requirement.lower, &requirement.upper].into_iter().flatten().any(|l| l.of_yield)
+    find("%").filter(|_| requirement.of_yield()).unwrap_or(requirement.unit)
 }
 
 /// The kind of a quantity; a result's is that of its expression.
@@ -235,7 +231,11 @@ fn case(assembly: &Assembly, evaluation: &Evaluation, verdict: &Verdict, today: 
             .statistics
             .as_ref()
             .map(|s| statistics(assembly, s, requirement.method)),
-        thermal_shift: thermal_shift(assembly, evaluation, verdict),
+        thermal_shifts: verdict
+            .thermal_shifts
+            .iter()
+            .map(|s| (words::owner(assembly, s.owner), s.shift))
+            .collect(),
         window: verdict.window.as_ref().map(|w| window(assembly, requirement, w)),
     }
 }
@@ -275,7 +275,7 @@ fn limits(requirement: &Requirement) -> String {
         (None, Some(upper)) => format!("<= {}", upper.written),
         (None, None) => String::new(),
     };
-    if of_yield(requirement) { format!("{both} of yield") } else { both }
+    if requirement.of_yield() { format!("{both} of yield") } else { both }
 }
 
 fn contribution(
@@ -340,23 +340,4 @@ fn statistics(assembly: &Assembly, s: &outcome::Statistics, method: Method) -> S
         assumed: s.assumed,
         interaction: s.variance_shares.iter().find(|v| v.unknown.is_none()).map(|v| v.share),
     }
-}
-
-/// How far temperature alone moves the mean: here minus the same at a condition where every part
-/// is at the reference temperature, if the spec states one.
-fn thermal_shift(assembly: &Assembly, evaluation: &Evaluation, verdict: &Verdict) -> Option<f64> {
-    let here = evaluation.figures.get(verdict.figure?)?;
-    let is_reference = |condition| {
-        let mut there = evaluation.temperatures.iter().filter(|t| t.condition == condition);
-        there.all(|t| t.least == assembly.reference && t.greatest == assembly.reference)
-    };
-    let reference = evaluation.figures.iter().find(|f| {
-        f.subject == here.subject
-            && f.quantity == here.quantity
-            && f.members == here.members
-            && f.of_yield == here.of_yield
-            && f.condition != here.condition
-            && f.condition.is_some_and(is_reference)
-    })?;
-    Some(here.range.mean - reference.range.mean)
 }

@@ -79,7 +79,10 @@ fn case(figures: &[Figure], at: usize, requirement: usize, limits: &str) -> Case
             contribution("temperature of hot", "85 ±3", Cause::Temperature, 0.0075, 0.32),
         ],
         statistics: None,
-        thermal_shift: Some(figure.unit.to_si(0.0041)),
+        thermal_shifts: vec![
+            ("housing".into(), figure.unit.to_si(0.0062)),
+            ("bearing".into(), figure.unit.to_si(-0.0021)),
+        ],
         window: Some(Window {
             words: "holds from 0.0 °C to 58.1 °C and from 77.0 °C on".into(),
             intervals: vec![(273.15, 331.25), (350.15, f64::INFINITY)],

@@ -199,6 +199,9 @@ pub struct RequirementEntry {
     pub greatest: Option<f64>,
     /// Distance to the nearer limit, negative when passed.
     pub margin: Option<f64>,
+    /// What the temperature of each part does to the mean since reference; in detail only.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub thermal_shift: Option<Map>,
     /// Standard deviation to first order, where statistics were asked for.
     #[serde(skip_serializing_if = "Option::is_none")]
     pub sigma: Option<f64>,

@@ -146,8 +146,7 @@ pub(super) fn conditions(requirement: &Requirement) -> Vec<Option<ConditionId>> 
 
 /// What a requirement asks for at a condition.
 pub(super) fn asked(requirement: &Requirement, condition: Option<ConditionId>) -> Asked {
-    let of_yield =
-        [&requirement.lower, &requirement.upper].into_iter().flatten().any(|l| l.of_yield);
+    let of_yield = requirement.of_yield();
     let Requirement { subject, quantity, .. } = *requirement;
     Asked { subject, quantity, condition, of_yield, members: Vec::new() }
 }

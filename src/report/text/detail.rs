@@ -5,7 +5,9 @@ mod contributors;
 pub(super) mod statistics;
 
 use super::{paragraph, section};
-use crate::findings::number::{Round, decimals, difference_with_unit, digits, join, with_unit};
+use crate::findings::number::{
+    Round, decimals, difference, difference_with_unit, digits, join, with_unit,
+};
 use crate::report::look::{Look, Role};
 use crate::report::{Account, Case, Coordinate, Figure};
 
@@ -82,11 +84,8 @@ fn one(
 
 fn range(out: &mut String, account: &Account, case: &Case, look: Look) {
     contributors::render(out, case, look);
-    if let Some(shift) = case.thermal_shift {
-        let shift = difference_with_unit(shift, case.unit, Round::Nearest);
-        let sign = if shift.starts_with('-') { "" } else { "+" };
-        let text = format!("mean thermal shift since reference {sign}{shift}");
-        paragraph(out, 2, &text, Role::Plain, look);
+    if !case.thermal_shifts.is_empty() {
+        paragraph(out, 2, &thermal_shift(case), Role::Plain, look);
     }
     let Some(figure) = case.figure.map(|f| &account.figures[f]) else { return };
     let least = with_unit(figure.least, case.unit, Round::Down);
@@ -94,6 +93,25 @@ fn range(out: &mut String, account: &Account, case: &Case, look: Look) {
     corner(out, case, "least", &least, &figure.least_at, look);
     corner(out, case, "greatest", &greatest, &figure.greatest_at, look);
     character(out, figure, look);
+}
+
+/// What temperature does to the mean: in all, and by part where several do.
+fn thermal_shift(case: &Case) -> String {
+    let signed = |figure: String| {
+        let sign = if figure.starts_with('-') { "" } else { "+" };
+        format!("{sign}{figure}")
+    };
+    let total: f64 = case.thermal_shifts.iter().map(|(_, shift)| shift).sum();
+    let total = signed(difference_with_unit(total, case.unit, Round::Nearest));
+    let parts: Vec<String> = case
+        .thermal_shifts
+        .iter()
+        .map(|(name, shift)| {
+            format!("{name} {}", signed(difference(*shift, case.unit, Round::Nearest)))
+        })
+        .collect();
+    let parts = if parts.len() > 1 { format!(": {}", parts.join(", ")) } else { String::new() };
+    format!("mean thermal shift since reference {total}{parts}")
 }
 
 fn character(out: &mut String, figure: &Figure, look: Look) {

@@ -167,6 +167,10 @@ fn requirement(account: &Account, case: &Case) -> RequirementEntry {
         mean: of(statistics.map(|s| s.mean).or(figure.map(|f| f.mean))),
         greatest: of(figure.map(|f| f.greatest)),
         margin: number(case.unit.difference_from_si(case.margin)),
+        thermal_shift: (!case.thermal_shifts.is_empty()).then(|| {
+            let of = |si: f64| number(case.unit.difference_from_si(si));
+            Map(case.thermal_shifts.iter().map(|(name, si)| (name.clone(), of(*si))).collect())
+        }),
         sigma: statistics.and_then(|s| number(case.unit.difference_from_si(s.sigma))),
         second_order: statistics.and_then(|s| s.second_order).map(|(mean, sigma)| {
             SecondOrderEntry {
