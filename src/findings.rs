@@ -19,6 +19,7 @@ pub mod standing;
 mod statistical;
 pub mod thin_margin;
 mod undecided;
+mod weak;
 pub mod window;
 pub mod words;
 mod yielding;
@@ -40,6 +41,7 @@ pub fn findings(assembly: &Assembly, evaluation: &Evaluation, today: &str) -> Ve
     contact::find(assembly, evaluation, &mut found);
     limit::find(assembly, evaluation, today, &mut found);
     statistical::find(assembly, evaluation, &mut found);
+    weak::find(assembly, evaluation, &mut found);
     speed::find(assembly, &mut found);
     yielding::find(assembly, evaluation, &mut found);
     full::find(assembly, evaluation, &mut found);

@@ -247,6 +247,10 @@ codes! {
     OneCoatedMate = "one-coated-mate", Note;
     /// A root sum of squares of few contributors.
     RssOfFew = "rss-of-few", Note;
+    /// A contributor that makes over half of a variance.
+    VarianceOfOne = "variance-of-one", Note;
+    /// Statistics of sizes that nobody has said how they vary.
+    SpreadAssumed = "spread-assumed", Note;
     /// One piece counted several times where several pieces may be meant.
     CopiesOrPieces = "copies-or-pieces", Note;
     /// A fit with less clearance than required.

@@ -150,3 +150,18 @@ pub enum Datum {
     /// Density.
     Density,
 }
+
+impl Unknown {
+    /// True for what a lot brings: scatter of its material, one value for all of its pieces.
+    pub fn is_of_a_lot(self) -> bool {
+        matches!(
+            self,
+            Unknown::ExpansionScatter(_)
+                | Unknown::ModulusScatter(_)
+                | Unknown::DataScatter(..)
+                | Unknown::SwellScatter(_)
+                | Unknown::FillScatter(_)
+                | Unknown::BulkScatter(_)
+        )
+    }
+}

@@ -16,12 +16,7 @@ pub(crate) fn distribution(assembly: &Assembly, unknown: Unknown) -> Option<Dist
             spread(stated.spread.as_ref().unwrap_or(&usual), limits)
         }
         // Limits without more knowledge: uniform (JCGM 100:2008, 4.3.7).
-        Unknown::ExpansionScatter(_)
-        | Unknown::ModulusScatter(_)
-        | Unknown::DataScatter(..)
-        | Unknown::BulkScatter(_)
-        | Unknown::SwellScatter(_)
-        | Unknown::FillScatter(_) => Distribution::uniform(0.0, 1.0).ok(),
+        lot if lot.is_of_a_lot() => Distribution::uniform(0.0, 1.0).ok(),
         _ => spread(stated.spread.as_ref()?, limits),
     }
 }

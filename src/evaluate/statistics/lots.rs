@@ -14,17 +14,6 @@ use crate::numeric::Interval;
 /// Most corners that are looked at for one requirement at one condition.
 const MOST_CORNERS: usize = 64;
 
-/// True for what a lot brings: one value for all of its pieces.
-fn of_a_lot(unknown: Unknown) -> bool {
-    matches!(
-        unknown,
-        Unknown::ExpansionScatter(_)
-            | Unknown::ModulusScatter(_)
-            | Unknown::SwellScatter(_)
-            | Unknown::FillScatter(_)
-    )
-}
-
 /// A case with its lots fixed.
 struct Corner<'a> {
     /// Of which case.
@@ -90,7 +79,7 @@ fn worse(one: &WorstLot, other: &WorstLot) -> bool {
 /// that is not proven.
 fn ends(case: &Case<'_>) -> Vec<Vec<(usize, f64)>> {
     let lots: Vec<usize> = (0..case.response.unknowns.len())
-        .filter(|&i| of_a_lot(case.response.unknowns[i]) && case.corners.chances[i].is_some())
+        .filter(|&i| case.response.unknowns[i].is_of_a_lot() && case.corners.chances[i].is_some())
         .collect();
     let mut found: Vec<Vec<(usize, f64)>> = Vec::new();
     let sides = [
