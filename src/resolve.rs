@@ -127,7 +127,8 @@ fn assembly(cx: &mut Context, root: FileId, gathered: &Gathered) -> Option<Assem
     };
     let whole = errors.is_empty();
     unsound.collect(&errors, &keep, &statements.conditions);
-    let assembly = if unsound.is_empty() { keep } else { sound::keep_sound(keep, unsound) };
+    let mut assembly = if unsound.is_empty() { keep } else { sound::keep_sound(keep, unsound) };
+    fill::settle_full(&mut assembly);
     require::check_keys(cx, &assembly.requirements);
     let looked_at = lint::Subject { assembly: &assembly, lets: &lets, whole };
     cx.diagnostics.extend(lint::lint(&looked_at));

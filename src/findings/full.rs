@@ -30,14 +30,6 @@ pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec
     }
 }
 
-/// True where the spec limits the pressure of a fill, or the stress that it brings into its wall.
-fn is_limited(assembly: &Assembly, fill: SubjectId, at: Option<ConditionId>) -> bool {
-    assembly.requirements.iter().any(|r| {
-        let of_pressure = matches!(r.quantity, Quantity::Pressure | Quantity::Stress(_));
-        r.subject == fill && of_pressure && at.is_none_or(|c| r.conditions.contains(&c))
-    })
-}
-
 fn full(
     assembly: &Assembly,
     evaluation: &Evaluation,
@@ -50,7 +42,7 @@ fn full(
             .iter()
             .filter(|f| f.subject == id && f.quantity == Quantity::Ullage)
             .filter(|f| f.range.least.reached < -LIMIT_SLACK)
-            .filter(|f| is_limited(assembly, id, f.condition) == limited)
+            .filter(|f| f.condition.is_some_and(|c| fill.may_be_full.contains(&c)) == limited)
             .min_by(|a, b| a.range.least.bound.total_cmp(&b.range.least.bound))
     };
     let unforeseen = fullest(false);
@@ -120,9 +112,6 @@ fn stiffened(
     id: SubjectId,
     fill: &Fill,
 ) -> Option<Diagnostic> {
-    if fill.wall.is_none() && !is_limited(assembly, id, None) {
-        return None;
-    }
     let modulus = fill.material.bulk_modulus.as_ref()?;
     let of_modulus = |figure: &Figure| {
         let t = evaluation

@@ -104,6 +104,9 @@ pub struct Fill {
     pub charged_at: Charge,
     /// Where the charge stands.
     pub span: Span,
+    /// Conditions at which the spec limits its pressure, or the stress that it brings into the wall:
+    /// there it may be full.
+    pub may_be_full: Vec<ConditionId>,
 }
 
 /// The wall of a round cavity: a closed cylinder of its part.

@@ -199,7 +199,11 @@ fn cautions(assembly: &Assembly, evaluation: &Evaluation) -> Vec<String> {
         .iter()
         .any(|s| matches!(&s.kind, SubjectKind::Fit(fit) if fit.joint.is_some()));
     let held = assembly.subjects.iter().any(|s| matches!(s.kind, SubjectKind::Restraint(_)));
-    if joint || held {
+    let walled = assembly
+        .subjects
+        .iter()
+        .any(|s| matches!(&s.kind, SubjectKind::Fill(fill) if fill.wall.is_some()));
+    if joint || held || walled {
         cautions.push(
             "stress and force are elastic and without bending, creep or load from outside; they \
              support, and do not replace, a qualified engineer's review"

@@ -38,7 +38,7 @@ impl Caution {
     /// What a finding calls for that may stand where nothing of the kind is required.
     pub(super) fn of_finding(code: Code) -> Option<Caution> {
         match code {
-            Code::StressPastYield => Some(Caution::Review),
+            Code::StressPastYield | Code::BulkModulusGrows => Some(Caution::Review),
             Code::JoiningOutOfReach => Some(Caution::Joining),
             _ => None,
         }

@@ -6,7 +6,8 @@ use super::quantity::{self, Expect, with_article};
 use crate::diagnostic::{Code, Diagnostic};
 use crate::materials::Material;
 use crate::model::{
-    Charge, DimensionId, Expr, ExprKind, Feature, Fill, Form, PartId, Scenario, Wall,
+    Assembly, Charge, DimensionId, Expr, ExprKind, Feature, Fill, Form, PartId, Quantity, Scenario,
+    SubjectKind, Wall,
 };
 use crate::span::Span;
 use crate::syntax::tree::{self, CavityVolume, ChargeState};
@@ -15,6 +16,17 @@ use std::sync::Arc;
 
 /// A cavity: the part around it, and its volume as an expression or as a number.
 type Cavity = (PartId, Option<Arc<Expr>>, Option<Scenario>);
+
+/// Tells each fill where requirements expect it to be full; whatever of them is checked afterwards.
+pub(super) fn settle_full(assembly: &mut Assembly) {
+    for requirement in &assembly.requirements {
+        let of_pressure = matches!(requirement.quantity, Quantity::Pressure | Quantity::Stress(_));
+        let subject = assembly.subjects.get_mut(requirement.subject.index());
+        if let (true, Some(SubjectKind::Fill(fill))) = (of_pressure, subject.map(|s| &mut s.kind)) {
+            fill.may_be_full.extend(&requirement.conditions);
+        }
+    }
+}
 
 impl<'t> Resolver<'_, '_, 't> {
     /// A fill with its cavity and its charge.
@@ -52,6 +64,7 @@ impl<'t> Resolver<'_, '_, 't> {
             charge: volume,
             charged_at: charged_at?,
             span: charge.span,
+            may_be_full: Vec::new(),
         })
     }
 

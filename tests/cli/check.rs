@@ -198,3 +198,18 @@ fn no_pressure_at_all_is_a_plain_0_without_a_strip() {
     let first = ullage.split_whitespace().nth(1).unwrap();
     assert_eq!(end(row, " 0"), end(ullage, first), "{ullage}\n{row}");
 }
+
+#[test]
+fn a_cavity_that_may_be_full_is_no_error_when_its_pressure_is_not_asked_for() {
+    let spec = "assembly \"Accumulator\"\nlengths in mm\ntemperatures in degC\ncondition hot 60\n\
+                part body of steel_c45 { bore = dia 60 H8; outside = dia 90 h8 }\n\
+                fill oil {\n  cavity of body 240 cm3\n  \
+                wall bore body.bore outside body.outside\n  charge hydraulic_oil 238 cm3\n  \
+                require \"U\" ullage <= 5 %\n  require \"P\" pressure <= 60 MPa\n}\n";
+    let bench = Bench::new(&[("oil.gap", spec)]);
+    for call in ["check oil.gap", "check oil.gap --only U", "check oil.gap --only P"] {
+        let ran = bench.run(call);
+        assert_eq!(ran.status, 0, "{call}: {}", ran.output);
+        assert!(ran.output.contains("note: `oil` is full at `hot`"), "{call}: {}", ran.output);
+    }
+}

@@ -89,6 +89,10 @@ impl Lens for Selection {
                 here && (self.only.is_empty() || required(f.subject))
             })
             .collect();
+        let here = |c| self.takes_condition(&assembly.condition(c).name);
+        let asked = |subject| self.only.is_empty() || required(subject);
+        evaluation.friction_bands.retain(|b| here(b.condition) && asked(b.subject));
+        evaluation.shop_cards.retain(|card| asked(card.subject));
         let places: Vec<usize> = keep
             .iter()
             .scan(0, |next, &kept| {
