@@ -11,6 +11,7 @@ pub mod expansion;
 pub mod filling;
 pub mod joining;
 pub mod joint;
+pub mod place;
 pub mod restraint;
 pub mod ring;
 pub mod seal;

@@ -3,6 +3,7 @@
 use super::joint;
 use super::scene::{At, Scene, Unable};
 use super::size;
+use crate::mechanics::place;
 use crate::model::{Binary, Expr, ExprKind, Fit, Function, SubjectId, Unknown};
 use crate::numeric::{Number, Recorded};
 
@@ -118,6 +119,6 @@ fn clearance_of(scene: &Scene<'_>, at: At, fit: SubjectId) -> Result<Recorded, U
 fn play(scene: &Scene<'_>, at: At, fit: SubjectId) -> Result<Recorded, Unable> {
     // As drawn nothing has been pushed to either side.
     let At::Condition(condition) = at else { return Ok(Recorded::exact(0.0)) };
-    let open = clearance_of(scene, at, fit)?.max(Recorded::exact(0.0));
-    Ok(scene.unknown(Unknown::Seat { fit, condition }) * open * 0.5)
+    let clearance = clearance_of(scene, at, fit)?;
+    Ok(place::in_play(scene.unknown(Unknown::Seat { fit, condition }), clearance))
 }

@@ -3,7 +3,7 @@
 use super::scene::{At, Scene, Unable};
 use super::{elastic, temperature};
 use crate::materials::{Expansion, Expansions, Material};
-use crate::mechanics::{expansion, restraint};
+use crate::mechanics::{expansion, place, restraint};
 use crate::model::{
     ConditionId, Dimension, DimensionId, Direction, Feature, Form, Owner, PartId, Unknown,
 };
@@ -66,7 +66,7 @@ pub(crate) fn as_stated(
     if let Some(geometric) = dimension.geometric
         && let Some(bonus) = geometric.bonus
     {
-        return size * (zone_with_bonus(scene, bonus, piece) + dimension.upper);
+        return place::at_maximum_material(size, dimension.upper, left(scene, bonus, piece));
     }
     let size = if dimension.members.is_empty() {
         size
@@ -77,22 +77,20 @@ pub(crate) fn as_stated(
     match &dimension.coating {
         Some(coating) if coating.before && coating.factor != 0.0 => {
             let thickness = scene.unknown(Unknown::Coating { dimension: id, piece });
-            size + thickness * (coating.factor * coating.build_up)
+            place::coated(size, thickness, coating.factor, coating.build_up)
         }
         _ => size,
     }
 }
 
-/// Half of how far a feature has left its maximum material size: what it adds to each side of the
-/// zone of a tolerance stated at that size (ISO 2692).
-fn zone_with_bonus(scene: &Scene<'_>, feature: DimensionId, piece: u32) -> Recorded {
+/// How far a feature has left its maximum material size, m.
+fn left(scene: &Scene<'_>, feature: DimensionId, piece: u32) -> Recorded {
     let dimension = scene.assembly.dimension(feature);
     let size = scene.unknown(Unknown::Size { dimension: feature, piece });
-    let left = match dimension.feature {
+    match dimension.feature {
         Feature::External => -size + dimension.greatest(),
         Feature::Internal | Feature::Unstated => size - dimension.least(),
-    };
-    left * 0.5
+    }
 }
 
 /// All strain of a dimension in a state of the world, against its drawing state.
