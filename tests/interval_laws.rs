@@ -106,3 +106,29 @@ fn the_slope_of_a_length_is_bounded_where_the_length_may_be_zero() {
     let zero = Dual::constant(Dual::constant(Interval::ZERO));
     assert_eq!(twice.hypot(zero).slope.slope, Interval::ENTIRE);
 }
+
+#[test]
+fn what_is_undefined_stays_so_whatever_comes_after() {
+    // √x − 1 … has no value for some of x: no later operation may make a bound of it.
+    let nothing = Interval::new(-1.0, 4.0).sqrt();
+    assert_eq!(nothing, Interval::ENTIRE);
+    let one = Interval::point(1.0);
+    for (name, result) in [
+        ("sin", nothing.sin()),
+        ("cos", nothing.cos()),
+        ("atan", nothing.atan()),
+        ("exp", nothing.exp()),
+        ("sqr", nothing.sqr()),
+        ("abs", Number::abs(nothing)),
+        ("min", Number::min(nothing, one)),
+        ("min of the other", Number::min(one, nothing)),
+        ("max", Number::max(nothing, one)),
+        ("max of the other", Number::max(one, nothing)),
+        ("atan2", nothing.atan2(one)),
+        ("atan2 of the other", one.atan2(nothing)),
+        ("hypot", nothing.hypot(one)),
+        ("hypot of the other", one.hypot(nothing)),
+    ] {
+        assert_eq!(result, Interval::ENTIRE, "{name}");
+    }
+}

@@ -2,6 +2,7 @@
 //! enumeration, mirrored stacks negate, units change nothing, wider tolerances never narrow.
 
 use crate::support::{Run, run};
+use gapkeep::evaluate::outcome::Outcome;
 use gapkeep::evaluate::respond;
 use gapkeep::model::{ConditionId, Quantity, SubjectId};
 use gapkeep::numeric::random::Stream;
@@ -282,4 +283,28 @@ fn the_thermal_shift_is_shared_out_part_by_part() {
     let total: f64 = shifts(&joint, "P").iter().sum();
     let mean = |at| joint.figure("seat", Quantity::Pressure, Some(at)).range.mean;
     assert!((total / (mean("hot") - mean("room")) - 1.0).abs() < 1e-12);
+}
+
+#[test]
+fn a_quantity_without_a_value_somewhere_never_holds() {
+    // 10 ±1 over 9.5 ±0.1 is less than 1 for some, more than 1 for others; each of these is bounded
+    // wherever it has a value.
+    for (result, limit) in [
+        ("cos(acos(a.x / a.y))", "<= 2"),
+        ("sin(asin(a.x / a.y))", "-2 .. 2"),
+        ("min(1, sqrt(a.x / a.y - 1))", "<= 2"),
+        ("max(0, sqrt(a.x / a.y - 1))", ">= 0"),
+        ("abs(sqrt(a.x / a.y - 1))", ">= 0"),
+        ("(sqrt(a.x / a.y - 1))^2", ">= 0"),
+        ("atan(sqrt(a.x / a.y - 1))", "<= 100 deg"),
+        ("atan2(sqrt(a.x / a.y - 1), 1)", "<= 200 deg"),
+    ] {
+        let run = run(&format!(
+            "assembly \"no value\"\nlengths in mm\ncondition shop 20\n\
+             part a of steel_c45 {{ x = 10 ±1; y = 9.5 ±0.1 }}\n\
+             result r = {result} {{ require \"R\" {limit} }}\n"
+        ));
+        let outcome = run.verdict("R", "shop").outcome;
+        assert_eq!(outcome, Outcome::Undecided, "{result}");
+    }
 }

@@ -203,7 +203,7 @@ fn share<N: Ordered>(x: N, length: &N) -> N {
         Some(Ordering::Less) => (-1.0, 0.0),
         _ => (-1.0, 1.0),
     };
-    (x / length.clone()).max(N::exact(least)).min(N::exact(most))
+    (x / length.clone()).known_within(least, most)
 }
 
 impl<N: Ordered> Ordered for Dual<N> {
@@ -212,6 +212,9 @@ impl<N: Ordered> Ordered for Dual<N> {
     }
     fn hull(self, o: Self) -> Self {
         Dual { value: self.value.hull(o.value), slope: self.slope.hull(o.slope) }
+    }
+    fn known_within(self, least: f64, most: f64) -> Self {
+        Dual { value: self.value.known_within(least, most), slope: self.slope }
     }
     fn is_zero(&self) -> bool {
         self.value.is_zero() && self.slope.is_zero()

@@ -114,6 +114,11 @@ impl Interval {
         self.lo.abs().max(self.hi.abs())
     }
 
+    /// True when nothing is known of a value, be it that it is not defined.
+    fn is_entire(self) -> bool {
+        self == Interval::ENTIRE
+    }
+
     fn increasing(self, f: fn(f64) -> f64) -> Interval {
         widened(f(self.lo), f(self.hi))
     }
@@ -126,6 +131,9 @@ impl Interval {
     /// `top + (2k+1)π`.
     fn wave(self, f: fn(f64) -> f64, top: f64) -> Interval {
         use std::f64::consts::PI;
+        if self.is_entire() {
+            return self;
+        }
         if !self.is_bounded() || self.width() > 6.0 || self.magnitude() > 1e6 {
             return Interval { lo: -1.0, hi: 1.0 };
         }
@@ -273,6 +281,7 @@ impl Number for Interval {
         match n {
             0 => return Interval::point(1.0),
             1 => return self,
+            _ if self.is_entire() => return self,
             _ => {}
         }
         if n % 2 == 1 || self.lo >= 0.0 {
@@ -296,6 +305,9 @@ impl Number for Interval {
         Interval::new(if lo == 0.0 { 0.0 } else { down(lo) }, if hi == 0.0 { 0.0 } else { up(hi) })
     }
     fn exp(self) -> Self {
+        if self.is_entire() {
+            return self;
+        }
         self.increasing(libm::exp).within(0.0, f64::INFINITY)
     }
     fn ln(self) -> Self {
@@ -332,11 +344,17 @@ impl Number for Interval {
         widened(libm::acos(self.hi), libm::acos(self.lo))
     }
     fn atan(self) -> Self {
+        if self.is_entire() {
+            return self;
+        }
         self.increasing(libm::atan)
     }
     fn atan2(self, x: Self) -> Self {
         // The angle is monotone in each coordinate on a box that holds neither the origin nor the
         // cut along the negative x axis, so its extremes stand on the corners.
+        if self.is_entire() || x.is_entire() {
+            return Interval::ENTIRE;
+        }
         let on_cut = x.lo <= 0.0 && self.contains(0.0);
         if on_cut {
             return outward(-std::f64::consts::PI, std::f64::consts::PI);
@@ -352,11 +370,14 @@ impl Number for Interval {
         widened(lo, hi)
     }
     fn hypot(self, o: Self) -> Self {
+        if self.is_entire() || o.is_entire() {
+            return Interval::ENTIRE;
+        }
         // Rounded outward, a sum of squares may begin below zero: a length does not.
         (self.sqr() + o.sqr()).within(0.0, f64::INFINITY).sqrt()
     }
     fn abs(self) -> Self {
-        if self.lo >= 0.0 {
+        if self.lo >= 0.0 || self.is_entire() {
             self
         } else if self.hi <= 0.0 {
             -self
@@ -365,13 +386,19 @@ impl Number for Interval {
         }
     }
     fn min(self, o: Self) -> Self {
+        if self.is_entire() || o.is_entire() {
+            return Interval::ENTIRE;
+        }
         Interval { lo: self.lo.min(o.lo), hi: self.hi.min(o.hi) }
     }
     fn max(self, o: Self) -> Self {
+        if self.is_entire() || o.is_entire() {
+            return Interval::ENTIRE;
+        }
         Interval { lo: self.lo.max(o.lo), hi: self.hi.max(o.hi) }
     }
     fn apply(self, curve: &Arc<dyn Curve>) -> Self {
-        curve.range(self)
+        if self.is_entire() { self } else { curve.range(self) }
     }
 }
 
@@ -394,6 +421,9 @@ impl Ordered for Interval {
     }
     fn hull(self, o: Self) -> Self {
         Interval { lo: self.lo.min(o.lo), hi: self.hi.max(o.hi) }
+    }
+    fn known_within(self, least: f64, most: f64) -> Self {
+        self.within(least, most)
     }
     fn is_zero(&self) -> bool {
         *self == Interval::ZERO

@@ -107,6 +107,9 @@ pub trait Ordered: Number {
     /// A number that stands for both.
     #[must_use]
     fn hull(self, other: Self) -> Self;
+    /// What is left of an enclosure of a number that is known to lie between two others.
+    #[must_use]
+    fn known_within(self, least: f64, most: f64) -> Self;
     /// True for nothing but an exact zero without any derivative.
     fn is_zero(&self) -> bool;
 }
@@ -182,6 +185,9 @@ impl Ordered for f64 {
     fn hull(self, _other: Self) -> Self {
         // Only an undefined value has no order with another, and it stays undefined.
         f64::NAN
+    }
+    fn known_within(self, least: f64, most: f64) -> Self {
+        Number::min(Number::max(self, least), most)
     }
     fn is_zero(&self) -> bool {
         *self == 0.0
