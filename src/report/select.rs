@@ -5,6 +5,8 @@
 //! standard's tables state them; what is not known or has no end is `null`.
 
 mod from;
+#[cfg(test)]
+mod schema;
 mod text;
 
 pub use from::selected;
@@ -18,6 +20,7 @@ pub const SCHEMA: &str = "gapkeep/select/1";
 
 /// What would meet the requirements of one spec.
 #[derive(Debug, Clone, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
 pub struct Selected {
     /// `gapkeep/select/1`.
     pub schema: &'static str,
@@ -38,6 +41,7 @@ pub struct Selected {
 
 /// The classes that a dimension may have, or a hole and a shaft together.
 #[derive(Debug, Clone, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
 pub struct Choice {
     /// `part.dimension`, or those of hole and shaft.
     pub dimensions: Vec<String>,
@@ -53,6 +57,7 @@ pub struct Choice {
     pub room: Option<(f64, f64)>,
     /// Unit of `room`.
     #[serde(serialize_with = "name_of")]
+    #[cfg_attr(test, schemars(with = "String"))]
     pub unit: &'static Unit,
     /// Other dimensions left open, which were taken at their nominal sizes.
     pub open_beside: Vec<String>,
@@ -62,6 +67,7 @@ pub struct Choice {
 
 /// A class, or a pair.
 #[derive(Debug, Clone, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
 pub struct Candidate {
     /// As written on a drawing: `K7`, or `H7/g6`.
     pub class: String,
@@ -77,6 +83,7 @@ pub struct Candidate {
 
 /// A requirement and its distance to its limit.
 #[derive(Debug, Clone, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
 pub struct Nearest {
     /// The requirement.
     pub requirement: String,
@@ -86,11 +93,13 @@ pub struct Nearest {
     pub margin: Option<f64>,
     /// Its unit.
     #[serde(serialize_with = "name_of")]
+    #[cfg_attr(test, schemars(with = "String"))]
     pub unit: &'static Unit,
 }
 
 /// The nominals that centre a subject.
 #[derive(Debug, Clone, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
 pub struct Centring {
     /// The subject.
     pub subject: String,
@@ -110,6 +119,7 @@ pub struct Centring {
 
 /// A dimension with the nominal that centres.
 #[derive(Debug, Clone, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
 pub struct Recentred {
     /// `part.dimension`.
     pub dimension: String,
@@ -119,6 +129,7 @@ pub struct Recentred {
     pub nominal: f64,
     /// Unit of both.
     #[serde(serialize_with = "name_of")]
+    #[cfg_attr(test, schemars(with = "String"))]
     pub unit: &'static Unit,
     /// Requirements of other subjects that would no longer hold.
     pub breaks: Vec<String>,
@@ -126,6 +137,7 @@ pub struct Recentred {
 
 /// A tolerance and its share.
 #[derive(Debug, Clone, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
 pub struct Cost {
     /// What it is.
     pub name: String,
@@ -135,6 +147,7 @@ pub struct Cost {
 
 /// How far a tolerance could grow.
 #[derive(Debug, Clone, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
 pub struct Tolerance {
     /// `part.dimension`.
     pub dimension: String,
@@ -144,6 +157,7 @@ pub struct Tolerance {
     pub each_side: Option<f64>,
     /// Its unit.
     #[serde(serialize_with = "name_of")]
+    #[cfg_attr(test, schemars(with = "String"))]
     pub unit: &'static Unit,
     /// What stops it, or does not hold already.
     pub stopped_by: Option<String>,
@@ -151,6 +165,7 @@ pub struct Tolerance {
 
 /// The length of a spacer.
 #[derive(Debug, Clone, Serialize)]
+#[cfg_attr(test, derive(schemars::JsonSchema))]
 pub struct SpacerLength {
     /// `part.dimension`.
     pub dimension: String,
@@ -164,6 +179,7 @@ pub struct SpacerLength {
     pub nominal: f64,
     /// Unit of both lengths.
     #[serde(serialize_with = "name_of")]
+    #[cfg_attr(test, schemars(with = "String"))]
     pub unit: &'static Unit,
     /// The mean at both conditions with it.
     pub mean: f64,
@@ -171,6 +187,7 @@ pub struct SpacerLength {
     pub means_stated: (f64, f64),
     /// Unit of the means.
     #[serde(serialize_with = "name_of")]
+    #[cfg_attr(test, schemars(with = "String"))]
     pub unit_of_mean: &'static Unit,
 }
 

@@ -6,7 +6,7 @@
 
 mod from;
 #[cfg(test)]
-mod schema;
+pub(in crate::report) mod schema;
 
 pub use from::document;
 use serde::ser::SerializeMap;

@@ -53,7 +53,7 @@ fn violations(schema: &Value, root: &Value, value: &Value, path: &str, found: &m
                 }
             }
             "const" | "minimum" | "type" | "minItems" | "maxItems" => {}
-            "$ref" | "anyOf" | "items" | "properties" | "additionalProperties" => {}
+            "$ref" | "anyOf" | "items" | "prefixItems" | "properties" | "additionalProperties" => {}
             other => wrong(&format!("the check does not know `{other}`")),
         }
     }
@@ -73,6 +73,11 @@ fn violations(schema: &Value, root: &Value, value: &Value, path: &str, found: &m
     if let (Some(items), Some(list)) = (schema.get("items"), value.as_array()) {
         for (i, item) in list.iter().enumerate() {
             violations(items, root, item, &format!("{path}[{i}]"), found);
+        }
+    }
+    if let (Some(Value::Array(items)), Some(list)) = (schema.get("prefixItems"), value.as_array()) {
+        for (i, (rule, item)) in items.iter().zip(list).enumerate() {
+            violations(rule, root, item, &format!("{path}[{i}]"), found);
         }
     }
     if let Some(object) = value.as_object() {
@@ -109,11 +114,15 @@ fn is_of(value: &Value, rule: &Value) -> bool {
     }
 }
 
-fn found_in(value: &Value) -> Vec<String> {
-    let schema = schema();
+/// What of `value` a schema does not allow.
+pub(in crate::report) fn not_allowed(schema: &Value, value: &Value) -> Vec<String> {
     let mut found = Vec::new();
-    violations(&schema, &schema, value, "", &mut found);
+    violations(schema, schema, value, "", &mut found);
     found
+}
+
+fn found_in(value: &Value) -> Vec<String> {
+    not_allowed(&schema(), value)
 }
 
 #[test]
