@@ -17,6 +17,7 @@ use super::{Account, Caution, Report, Spec, caution, diagnostic, summary};
 use crate::diagnostic::Severity;
 use crate::findings::Standing;
 use crate::findings::number::{Round, with_unit};
+use rayon::prelude::{IntoParallelRefIterator, ParallelIterator};
 
 /// How much is shown.
 #[derive(Debug, Clone, Copy, PartialEq, Eq, PartialOrd, Ord)]
@@ -35,31 +36,9 @@ pub fn render(report: &Report, extent: Extent, look: Look) -> String {
     let mut out = String::new();
     let mut after_brief = false;
     let several = report.specs.len() > 1;
-    for spec in &report.specs {
-        let mut part = String::new();
-        if let Some(account) = &spec.account {
-            match extent {
-                Extent::Quiet => {}
-                Extent::Normal if several && all_holds(spec, account) => {
-                    part.push_str(&one_line(spec, account, look));
-                }
-                _ => whole(&mut part, spec, account, extent, look),
-            }
-        }
-        for finding in &spec.findings {
-            if !part.is_empty() {
-                part.push('\n');
-            }
-            part.push_str(&diagnostic::render(finding, &spec.sources, look));
-        }
-        for line in &spec.stale {
-            let role = match line.as_bytes().first() {
-                Some(b'-') => Role::Bad,
-                Some(b'+') => Role::Good,
-                _ => Role::Quiet,
-            };
-            part.push_str(&format!("  {}\n", look.paint(role, &visible(line))));
-        }
+    let parts: Vec<String> =
+        report.specs.par_iter().map(|spec| part(spec, several, extent, look)).collect();
+    for part in &parts {
         if part.is_empty() {
             continue;
         }
@@ -69,7 +48,7 @@ pub fn render(report: &Report, extent: Extent, look: Look) -> String {
             out.push('\n');
         }
         after_brief = brief;
-        out.push_str(&part);
+        out.push_str(part);
     }
     if !out.is_empty() {
         out.push('\n');
@@ -94,6 +73,35 @@ pub fn render(report: &Report, extent: Extent, look: Look) -> String {
         out.push_str(&format!("{}\n", look.paint(role, &line)));
     }
     out
+}
+
+/// What there is to say of one spec; empty where that is nothing.
+fn part(spec: &Spec, several: bool, extent: Extent, look: Look) -> String {
+    let mut part = String::new();
+    if let Some(account) = &spec.account {
+        match extent {
+            Extent::Quiet => {}
+            Extent::Normal if several && all_holds(spec, account) => {
+                part.push_str(&one_line(spec, account, look));
+            }
+            _ => whole(&mut part, spec, account, extent, look),
+        }
+    }
+    for finding in &spec.findings {
+        if !part.is_empty() {
+            part.push('\n');
+        }
+        part.push_str(&diagnostic::render(finding, &spec.sources, look));
+    }
+    for line in &spec.stale {
+        let role = match line.as_bytes().first() {
+            Some(b'-') => Role::Bad,
+            Some(b'+') => Role::Good,
+            _ => Role::Quiet,
+        };
+        part.push_str(&format!("  {}\n", look.paint(role, &visible(line))));
+    }
+    part
 }
 
 fn all_holds(spec: &Spec, account: &Account) -> bool {
