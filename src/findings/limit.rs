@@ -4,6 +4,7 @@
 
 use super::number::{self, Digits, Round};
 use super::standing::{Standing, standing};
+use super::window::{DataEnds, sentence};
 use super::words;
 use crate::diagnostic::{Code, Diagnostic, Severity};
 use crate::evaluate::Evaluation;
@@ -119,7 +120,7 @@ fn finding(
         here.push_str(&format!("; also {}", others.join(", ")));
     }
     if let Some(window) = &worst.verdict.window {
-        here.push_str(&format!("; {}", super::window::sentence(assembly, window)));
+        here.push_str(&format!("; {}", sentence(assembly, window, DataEnds::Left)));
     }
     let mut diagnostic =
         Diagnostic::new(code(requirement.quantity, side), requirement.span, message).here(here);

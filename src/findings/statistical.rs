@@ -67,7 +67,7 @@ fn finding(
     let here = format!(
         "mean {}, sigma {}, {failing} of assemblies fail",
         number::with_unit(statistics.mean, unit, Round::Nearest),
-        number::difference_with_unit(statistics.sigma, unit, Round::Nearest),
+        number::difference_with_unit(statistics.sigma, unit, Round::Up),
     );
     let mut shares: Vec<_> = statistics.variance_shares.iter().collect();
     shares.sort_by(|a, b| b.share.total_cmp(&a.share));

@@ -156,7 +156,7 @@ fn assumed(
     let count = words::count(sizes.len(), "size", "sizes");
     let mut largest: Vec<(DimensionId, f64)> = sizes.into_iter().collect();
     largest.sort_by(|a, b| b.1.total_cmp(&a.1));
-    let message = format!("how {count} in the statistics of {name} vary is assumed");
+    let message = format!("the spread of {count} in the statistics of {name} is assumed");
     let mut diagnostic = Diagnostic::new(Code::SpreadAssumed, first, message)
         .here("normal, centred, limits at 3 sigma")
         .help(

@@ -9,59 +9,69 @@ use crate::model::Assembly;
 /// Most parts whose temperatures are named at the end of a scaled window.
 const NAMED: usize = 4;
 
+/// Whether the end of the data is told where no limit ends the window before.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+pub enum DataEnds {
+    /// As in `holds up to 71.3 °C`.
+    Left,
+    /// As in `holds from -40.0 °C, where data end, to 71.3 °C`.
+    Told,
+}
+
 /// Where a requirement holds, such as `holds up to 71.3 °C`, or, where parts differ, `holds up to
-/// 1.31 times the departure from 20.0 °C: hub 91.2 °C, shaft 77.4 °C`.
-pub fn sentence(assembly: &Assembly, window: &Window) -> String {
+/// 1.310 times the departure from 20.0 °C: hub 91.2 °C, shaft 77.4 °C`.
+pub fn sentence(assembly: &Assembly, window: &Window, ends: DataEnds) -> String {
     if window.intervals.is_empty() {
         return "holds at no temperature its materials are known for".to_string();
     }
-    let pieces: Vec<String> = window.intervals.iter().map(|i| piece(assembly, window, i)).collect();
-    let pieces = pieces.join(" and ");
-    if !window.scaled {
-        return format!("holds {pieces}");
+    if window.scaled {
+        let pieces: Vec<String> = window.intervals.iter().map(|&i| scaled(window, i)).collect();
+        let reference =
+            with_unit(assembly.reference, assembly.defaults.temperature, Round::Nearest);
+        let there = there(assembly, window).map_or_else(String::new, |t| format!(": {t}"));
+        let pieces = pieces.join(" and ");
+        return format!("holds {pieces} times the departure from {reference}{there}");
     }
-    let reference = with_unit(assembly.reference, assembly.defaults.temperature, Round::Nearest);
-    let there = there(assembly, window).map_or_else(String::new, |t| format!(": {t}"));
-    format!("holds {pieces} times the departure from {reference}{there}")
+    let pieces: Vec<String> =
+        window.intervals.iter().map(|&i| common(assembly, window, i, ends)).collect();
+    format!("holds {}", pieces.join(" and "))
 }
 
-/// How far the data of the materials go, where that ends the window; nothing where it does not.
-pub fn data(assembly: &Assembly, window: &Window) -> Option<String> {
-    let (from, to) = window.looked_at;
-    let open = |(a, b): &(f64, f64)| {
-        (a.is_infinite() && from.is_finite()) || (b.is_infinite() && to.is_finite())
-    };
-    if window.scaled || !window.intervals.iter().any(open) {
-        return None;
-    }
-    let unit = assembly.defaults.temperature;
-    let from = from.is_finite().then(|| format!("from {}", with_unit(from, unit, Round::Up)));
-    let to = to.is_finite().then(|| format!("to {}", with_unit(to, unit, Round::Down)));
-    let ends: Vec<String> = from.into_iter().chain(to).collect();
-    Some(format!("data reach {}", ends.join(" ")))
-}
-
-fn piece(assembly: &Assembly, window: &Window, &(from, to): &(f64, f64)) -> String {
-    let unit = assembly.defaults.temperature;
-    let number = |x: f64, round| match window.scaled {
-        true => digits(x, 3, round),
-        false => with_unit(x, unit, round),
-    };
+fn scaled(window: &Window, (from, to): (f64, f64)) -> String {
+    let least = digits(from, 3, Round::Up);
     // Beyond the last factor looked at nothing is known.
-    let (least, to) = match window.scaled && to.is_infinite() {
-        true => ("at least ", window.looked_at.1),
-        false => ("", to),
+    let most = match to.is_finite() {
+        true => digits(to, 3, Round::Down),
+        false => format!("at least {}", digits(window.looked_at.1, 3, Round::Down)),
     };
+    if from.is_finite() { format!("from {least} to {most}") } else { format!("up to {most}") }
+}
+
+fn common(assembly: &Assembly, window: &Window, (from, to): (f64, f64), ends: DataEnds) -> String {
+    let unit = assembly.defaults.temperature;
+    let (least, most) = (with_unit(from, unit, Round::Up), with_unit(to, unit, Round::Down));
+    let (coldest, hottest) = window.looked_at;
+    let cold = (ends == DataEnds::Told && coldest.is_finite())
+        .then(|| with_unit(coldest, unit, Round::Up));
+    let hot = (ends == DataEnds::Told && hottest.is_finite())
+        .then(|| with_unit(hottest, unit, Round::Down));
     match (from.is_finite(), to.is_finite()) {
-        (true, true) => {
-            format!("from {} to {least}{}", number(from, Round::Up), number(to, Round::Down))
-        }
-        (true, false) => format!("from {} on", number(from, Round::Up)),
-        (false, true) => format!("up to {least}{}", number(to, Round::Down)),
-        (false, false) if window.looked_at == (f64::NEG_INFINITY, f64::INFINITY) => {
+        (true, true) => format!("from {least} to {most}"),
+        (true, false) => match hot {
+            Some(hot) => format!("from {least} to {hot}, where data end"),
+            None => format!("from {least} on"),
+        },
+        (false, true) => match cold {
+            Some(cold) => format!("from {cold}, where data end, to {most}"),
+            None => format!("up to {most}"),
+        },
+        (false, false) if !coldest.is_finite() && !hottest.is_finite() => {
             "at any temperature".to_string()
         }
-        (false, false) => "wherever its materials are known".to_string(),
+        (false, false) => match (cold, hot) {
+            (Some(cold), Some(hot)) => format!("wherever data reach, from {cold} to {hot}"),
+            _ => "wherever its materials are known".to_string(),
+        },
     }
 }
 

@@ -11,7 +11,8 @@ use super::{
 };
 use crate::evaluate::Evaluation;
 use crate::evaluate::outcome::{self, Verdict};
-use crate::findings::{standing, thin_margin, window as words_of_window, words};
+use crate::findings::window::{DataEnds, sentence};
+use crate::findings::{standing, thin_margin, words};
 use crate::model::{
     Assembly, Basis, Condition, Expr, ExprKind, Form, Method, Quantity, Requirement, Subject,
     SubjectId, SubjectKind, Unknown,
@@ -243,10 +244,8 @@ fn case(assembly: &Assembly, evaluation: &Evaluation, verdict: &Verdict, today: 
 fn window(assembly: &Assembly, requirement: &Requirement, found: &outcome::Window) -> Window {
     // Windows are proven for every piece, also where statistics decide.
     let by = if requirement.method == Method::WorstCase { "" } else { "by worst case it " };
-    let data =
-        words_of_window::data(assembly, found).map_or_else(String::new, |d| format!("; {d}"));
     Window {
-        words: format!("{by}{}{data}", words_of_window::sentence(assembly, found)),
+        words: format!("{by}{}", sentence(assembly, found, DataEnds::Told)),
         intervals: found.intervals.clone(),
         looked_at: found.looked_at,
         scaled: found.scaled,

@@ -131,22 +131,7 @@ pub(crate) fn find(cx: &mut Context, name: &tree::Name) -> Option<Arc<Material>>
     for name in Library::builtin().names() {
         names.push(name);
     }
-    let near = suggest(&name.value, names);
-    let meant: Vec<String> = Library::builtin()
-        .search(&name.value)
-        .iter()
-        .map(|material| format!("`{}`", material.name))
-        .collect();
-    let help = match (near, meant.len()) {
-        (Some(near), _) => format!("did you mean `{near}`?"),
-        (None, 0) => format!("define it: `material {} {{ cte … ppm/K }}`", name.value),
-        (None, 1) => format!("did you mean {}?", meant[0]),
-        (None, n) if n <= LISTED => format!("did you mean one of {}?", meant.join(", ")),
-        (None, n) => {
-            let rest = n - LISTED;
-            format!("did you mean one of {} or {rest} more?", meant[..LISTED].join(", "))
-        }
-    };
+    let help = meant(&name.value, names);
     cx.refuse(
         Diagnostic::new(
             Code::UnknownMaterial,
@@ -155,4 +140,49 @@ pub(crate) fn find(cx: &mut Context, name: &tree::Name) -> Option<Arc<Material>>
         )
         .help(help),
     )
+}
+
+/// What an unknown name may mean: a library material with its grade number, the nearest spelling, or
+/// whatever the library has of that name or family.
+fn meant(name: &str, names: Vec<&str>) -> String {
+    let found = |word: &str| -> Vec<String> {
+        Library::builtin().search(word).iter().map(|m| format!("`{}`", m.name)).collect()
+    };
+    let words = || name.split('_').filter(|word| word.len() > 2);
+    let has_digit = |word: &&str| word.bytes().any(|b| b.is_ascii_digit());
+    let define = format!("define it: `material {name} {{ cte … ppm/K }}`");
+    let near = suggest(name, names);
+    // `steel_304` is spelled much like `steel_1020`, but it is the number that says which.
+    let graded = |grade: &str| -> Vec<String> {
+        let of_it = |known: &&str| known.split('_').any(|word| word == grade);
+        let named: Vec<String> =
+            Library::builtin().names().filter(of_it).map(|known| format!("`{known}`")).collect();
+        if named.is_empty() { found(grade) } else { named }
+    };
+    let grade: Vec<String> = words().filter(has_digit).flat_map(graded).collect();
+    let near_has_grade =
+        |near: &String| words().filter(has_digit).any(|grade| near.contains(grade));
+    if !grade.is_empty() && grade.len() <= LISTED && !near.as_ref().is_some_and(near_has_grade) {
+        return did_you_mean(&grade);
+    }
+    if let Some(near) = near {
+        return did_you_mean(&[format!("`{near}`")]);
+    }
+    let meant = found(name);
+    if !meant.is_empty() {
+        return did_you_mean(&meant);
+    }
+    let family = words().map(found).find(|family| !family.is_empty());
+    family.map_or(define.clone(), |family| format!("{} or {define}", did_you_mean(&family)))
+}
+
+fn did_you_mean(names: &[String]) -> String {
+    match names {
+        [one] => format!("did you mean {one}?"),
+        few if few.len() <= LISTED => format!("did you mean one of {}?", few.join(", ")),
+        many => {
+            let rest = many.len() - LISTED;
+            format!("did you mean one of {} or {rest} more?", many[..LISTED].join(", "))
+        }
+    }
 }

@@ -324,6 +324,19 @@ fn mistakes_of_materials_are_told_apart() {
     refused(&block("cte instantaneous, ppm/K { 100 11; 20 12 }"), Code::TableNotRising);
     refused(&block("cte 12 ppm/K; swell { dry 1 %; wet 2 % }"), Code::SwellOfFirstState);
     refused("part a of steel_c44", Code::UnknownMaterial);
+    for (named, meant) in [
+        ("steel_304", "did you mean `stainless_304`?"),
+        ("stainles_304", "did you mean `stainless_304`?"),
+        ("alu_6061", "did you mean `aluminium_6061_t6`?"),
+        (
+            "optical_bk7",
+            "did you mean one of `calcium_fluoride`, `glass_crown`, `glass_flint`? or define it: ",
+        ),
+        ("unobtainium", "define it: "),
+    ] {
+        let help = refused(&format!("part a of {named}"), Code::UnknownMaterial).help;
+        assert!(help.as_ref().is_some_and(|h| h.starts_with(meant)), "{named}: {help:?}");
+    }
     let vague = refused("part a of stainless", Code::UnknownMaterial);
     assert!(vague.help.is_some_and(|help| help.contains("stainless_304")));
     let lint = read("material m like aluminium_6061_t6 { cte 13 ppm/K }\npart a of m", &[]);
