@@ -10,6 +10,7 @@ mod friction;
 mod full;
 mod joining;
 mod limit;
+mod measured;
 mod missing;
 pub mod number;
 mod scatter;
@@ -42,6 +43,7 @@ pub fn findings(assembly: &Assembly, evaluation: &Evaluation, today: &str) -> Ve
     limit::find(assembly, evaluation, today, &mut found);
     statistical::find(assembly, evaluation, &mut found);
     weak::find(assembly, evaluation, &mut found);
+    measured::find(assembly, evaluation, &mut found);
     speed::find(assembly, &mut found);
     yielding::find(assembly, evaluation, &mut found);
     full::find(assembly, evaluation, &mut found);

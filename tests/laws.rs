@@ -1,7 +1,7 @@
 //! Laws that hold for every assembly: proven ranges hold every sample, corners agree with
 //! enumeration, mirrored stacks negate, units change nothing, wider tolerances never narrow.
 
-use crate::support::{Run, run};
+use crate::support::{Folder, Run, run, run_with};
 use gapkeep::evaluate::outcome::Outcome;
 use gapkeep::evaluate::respond;
 use gapkeep::model::{ConditionId, Quantity, SubjectId};
@@ -307,4 +307,28 @@ fn a_quantity_without_a_value_somewhere_never_holds() {
         let outcome = run.verdict("R", "shop").outcome;
         assert_eq!(outcome, Outcome::Undecided, "{result}");
     }
+}
+
+#[test]
+fn a_tail_needs_three_over_its_share_measured_values() {
+    // The rule of three, common practice: 300 values for a share of 1 per cent.
+    let warned = |count: usize, asked: &str| {
+        let rows: String =
+            (0..count).map(|i| format!("{:.3}\n", 4.0 + 1e-3 * (i % 7) as f64)).collect();
+        let mut folder = Folder::default();
+        folder.0.insert("slot.csv".into(), format!("slot [mm]\n{rows}"));
+        let spec = format!(
+            "assembly \"t\"\nlengths in mm\ntemperatures in degC\ncondition day 20\n\
+             part a of steel_c45 {{ size = 10 ±0.01 spread normal }}\n\
+             part b of steel_c45 {{ slot = 4 ±0.05 spread from \"slot.csv\" }}\n\
+             gap g = a.size - b.slot {{ require >= 5.9 {asked} }}"
+        );
+        let run = run_with(&spec, &folder);
+        run.diagnostics.iter().any(|d| d.code.text() == "tail-beyond-measured")
+    };
+    assert!(warned(299, "for 99 % of assemblies"));
+    assert!(!warned(300, "for 99 % of assemblies"));
+    // One side of 3 sigma: 0.135 per cent.
+    assert!(warned(2222, "by Cpk 1") && !warned(2223, "by Cpk 1"));
+    assert!(!warned(10, "by worst case"));
 }

@@ -251,6 +251,8 @@ codes! {
     VarianceOfOne = "variance-of-one", Note;
     /// Statistics of sizes that nobody has said how they vary.
     SpreadAssumed = "spread-assumed", Note;
+    /// A share of assemblies that is finer than the measured values behind it show.
+    TailBeyondMeasured = "tail-beyond-measured", Warning;
     /// One piece counted several times where several pieces may be meant.
     CopiesOrPieces = "copies-or-pieces", Note;
     /// A fit with less clearance than required.

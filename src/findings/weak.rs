@@ -121,7 +121,7 @@ fn of_one(
     let help = match (open, unknown.is_of_a_lot()) {
         (true, _) => "how it varies decides: state it with `spread`, or use `by worst case`",
         (_, true) => "all pieces of a lot have it in common: `--detail` shows the worst lot",
-        _ => "how it varies decides: narrow it first, the others hardly count",
+        _ => "how it varies decides: narrow it first",
     };
     let place = words::place(assembly, unknown);
     let mut diagnostic = Diagnostic::new(Code::VarianceOfOne, place, message).help(help);

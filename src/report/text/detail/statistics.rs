@@ -64,8 +64,7 @@ pub(in crate::report::text) fn brief(s: &Statistics) -> String {
     let Some(drawn) = s.failing.drawn else { return capability(s) };
     let cpk = index(s.cpk);
     let (least, greatest) = s.failing.interval;
-    let (least, greatest) =
-        (share_of_assemblies(least, Round::Down), share_of_assemblies(greatest, Round::Up));
+    let (least, greatest) = between(least, greatest);
     let missed = match drawn.missed {
         Some(width) => format!(", wider than {}", asked(width)),
         None => String::new(),
@@ -82,11 +81,10 @@ pub(in crate::report::text) fn brief(s: &Statistics) -> String {
 /// A share of assemblies with what it is known to lie between.
 pub(in crate::report::text) fn failing(f: &FailingShare) -> String {
     let of = share_of_assemblies;
-    let greatest = of(f.interval.1, Round::Up);
-    let least = match of(f.interval.0, Round::Up) == greatest {
-        true => greatest.clone(),
-        false => of(f.interval.0, Round::Down),
-    };
+    let (mut least, greatest) = between(f.interval.0, f.interval.1);
+    if Form::of(f.interval.1).say(f.interval.0, Round::Up) == greatest {
+        least.clone_from(&greatest);
+    }
     match f.drawn {
         Some(drawn) if f.share == 0.0 => format!(
             "none of the assemblies drawn (at most {greatest} at 99 % confidence, {})",
@@ -151,19 +149,47 @@ fn number_of_draws(draws: u64) -> String {
     }
 }
 
-/// A small share as people say it: in per cent, in parts per million, else as a power of ten.
-fn share_of_assemblies(x: f64, round: Round) -> String {
-    match x {
-        _ if x >= 1e-3 => format!("{} %", digits(x * 1e2, 3, round)),
-        _ if x >= 1e-8 => {
-            // Four digits that count.
-            let ppm = x * 1e6;
-            let decimals = (0..6).find(|&d| ppm * libm::pow(10.0, d as f64) >= 1000.0);
-            format!("{} ppm", digits(ppm, decimals.unwrap_or(6), round))
+/// How people say a share: in per cent, in parts per million, else as a power of ten.
+#[derive(Debug, Clone, Copy)]
+enum Form {
+    Percent,
+    /// With so many digits after the point.
+    Ppm(usize),
+    Power,
+}
+
+impl Form {
+    fn of(share: f64) -> Form {
+        match share {
+            _ if share >= 1e-3 || share == 0.0 => Form::Percent,
+            _ if share >= 1e-8 => {
+                // Four digits that count.
+                let ppm = share * 1e6;
+                let decimals = (0..6).find(|&d| ppm * libm::pow(10.0, d as f64) >= 1000.0);
+                Form::Ppm(decimals.unwrap_or(6))
+            }
+            _ => Form::Power,
         }
-        _ if x == 0.0 => "0".to_string(),
-        _ => format!("{x:.2e}"),
     }
+
+    fn say(self, share: f64, round: Round) -> String {
+        match self {
+            _ if share == 0.0 => "0".to_string(),
+            Form::Percent => format!("{} %", digits(share * 1e2, 3, round)),
+            Form::Ppm(decimals) => format!("{} ppm", digits(share * 1e6, decimals, round)),
+            Form::Power => format!("{share:.2e}"),
+        }
+    }
+}
+
+fn share_of_assemblies(x: f64, round: Round) -> String {
+    Form::of(x).say(x, round)
+}
+
+/// Both ends of what a share lies between, in the form of the greater.
+fn between(least: f64, greatest: f64) -> (String, String) {
+    let form = Form::of(greatest);
+    (form.say(least, Round::Down), form.say(greatest, Round::Up))
 }
 
 #[cfg(test)]
@@ -176,6 +202,8 @@ mod tests {
         assert_eq!(failing(&exact(0.023_194)), "2.320 % of assemblies");
         assert_eq!(failing(&exact(3.24e-5)), "32.40 ppm of assemblies");
         assert_eq!(failing(&exact(0.0)), "no assemblies");
+        let known = FailingShare { share: 2e-8, interval: (8.87e-9, 2.759e-8), drawn: None };
+        assert_eq!(failing(&known), "0.00887 ppm .. 0.02759 ppm of assemblies");
         assert_eq!(failing(&exact(1e-20)), "fewer than 1e-18 of assemblies");
         let drawn = |draws, missed| FailingShare {
             share: 0.25,
