@@ -2,6 +2,7 @@
 //! putting a class into the spec.
 
 mod edit;
+mod spaced;
 
 use super::console::Console;
 use super::files::{MOST_BYTES, Place, Rooted, specs};
@@ -9,7 +10,7 @@ use super::pipeline::text_of;
 use super::refusal::{Outcome, Refusal};
 use crate::diagnostic::{Code, Diagnostic, Severity};
 use crate::evaluate::Options;
-use crate::evaluate::select::{Asked, NoSpacer, Selections, Spacer, select, spacer};
+use crate::evaluate::select::{Asked, Selections, select};
 use crate::model::{Assembly, DimensionId, Form};
 use crate::report::diagnostic;
 use crate::report::select::{json, selected, text};
@@ -34,12 +35,13 @@ pub(super) struct SelectArguments {
     #[arg(long = "for", value_name = "PART.DIMENSION")]
     dimension: Option<String>,
     /// The length of this spacer that makes a mean the same at two conditions.
-    #[arg(long, value_name = "PART.DIMENSION", requires_all = ["between", "of"], conflicts_with_all = ["dimension", "write"])]
+    #[arg(long, value_name = "PART.DIMENSION", conflicts_with_all = ["dimension", "write"])]
     spacer: Option<String>,
-    /// The two conditions.
+    /// The two conditions; may be left out where the spec has two.
     #[arg(long, value_name = "CONDITION,CONDITION", requires = "spacer")]
     between: Option<String>,
-    /// The gap, fit or result whose mean is to be the same.
+    /// The gap, fit or result whose mean is to be the same; may be left out where only one depends on
+    /// the spacer.
     #[arg(long, value_name = "NAME", requires = "spacer")]
     of: Option<String>,
     /// Show every class, not the first few and the preferred ones.
@@ -92,7 +94,7 @@ pub(super) fn run(
         None => Asked::Everything,
     };
     let options = Options::default();
-    let spaced = spaced(arguments, &assembly)?;
+    let spaced = spaced::spaced(arguments, &assembly)?;
     let found = match spaced {
         Some(_) => Selections::default(),
         None => select(&assembly, asked, &options),
@@ -177,69 +179,4 @@ fn class_of(assembly: &Assembly, path: &str) -> Result<DimensionId, Refusal> {
         format!("`{path}`, `{}`, takes no ISO 286 class", stated.written),
         "name a diameter or a width",
     ))
-}
-
-/// The spacer asked for, if one is.
-fn spaced(arguments: &SelectArguments, assembly: &Assembly) -> Result<Option<Spacer>, Refusal> {
-    let (Some(path), Some(between), Some(of)) =
-        (&arguments.spacer, &arguments.between, &arguments.of)
-    else {
-        return Ok(None);
-    };
-    let id = dimension(assembly, path)?;
-    let condition = |name: &str| {
-        let found = assembly.condition_ids().find(|&c| assembly.condition(c).name == name.trim());
-        found.ok_or_else(|| {
-            let names: Vec<String> =
-                assembly.conditions.iter().map(|c| format!("`{}`", c.name)).collect();
-            Refusal::new(
-                format!("the spec has no condition `{}`", name.trim()),
-                format!("it has {}", names.join(", ")),
-            )
-        })
-    };
-    let Some((a, b)) = between.split_once(',') else {
-        return Err(Refusal::new(
-            format!("`{between}` does not name two conditions"),
-            "name them as `cold,hot`",
-        ));
-    };
-    let between = (condition(a)?, condition(b)?);
-    let Some(subject) = assembly.subject_ids().find(|&s| assembly.subject(s).name == *of) else {
-        let names: Vec<String> =
-            assembly.subjects.iter().map(|s| format!("`{}`", s.name)).collect();
-        return Err(Refusal::new(
-            format!("the spec has no gap, fit or result `{of}`"),
-            format!("it has {}", names.join(", ")),
-        ));
-    };
-    match spacer(assembly, id, subject, between) {
-        Ok(found) => Ok(Some(found)),
-        Err(none) => Err(no_spacer(none, path, of)),
-    }
-}
-
-fn no_spacer(none: NoSpacer, path: &str, of: &str) -> Refusal {
-    match none {
-        NoSpacer::NoQuantity => Refusal::new(
-            format!("`{of}` has no mean of its own that a length could settle"),
-            "name a gap, a fit or a result",
-        ),
-        NoSpacer::NotComputed => Refusal::new(
-            format!("`{of}` cannot be computed at both conditions"),
-            "`gapkeep check` says what is missing",
-        ),
-        NoSpacer::NoInfluence => Refusal::new(
-            format!("`{path}` does not change how `{of}` differs between the two conditions"),
-            format!("name one that `{of}` contains, of another material than its mates"),
-        ),
-        NoSpacer::NoLength(_) => Refusal::new(
-            format!("no length of `{path}` makes `{of}` the same at both conditions"),
-            "try another material for it, or another dimension",
-        ),
-        NoSpacer::Undecided => Refusal::new(
-            format!("it could not be proven which length of `{path}` makes `{of}` the same"),
-            "try conditions without a range, or another dimension",
-        ),
-    }
 }

@@ -61,7 +61,23 @@ fn a_stack_and_a_failing_fit() {
     insta::assert_snapshot!(ran.output);
     let ran = bench.run("select stack.gap --spacer ring.width --between cold,hot --of float");
     assert_eq!(ran.status, 0);
+    // What there is only one of need not be named.
+    let short = bench.run("select stack.gap --spacer ring.width");
+    assert_eq!((short.status, short.output), (0, ran.output.clone()));
     insta::assert_snapshot!(ran.output);
+}
+
+#[test]
+fn a_spacer_in_two_gaps_or_between_three_conditions_asks_which() {
+    let two = format!("{STACK}gap other = tube.depth - ring.width {{ require >= 0 }}\n");
+    let three = STACK.replace("condition hot", "condition warm 40\ncondition hot");
+    let bench = Bench::new(&[("two.gap", &two), ("three.gap", &three)]);
+    let ran = bench.run("select two.gap --spacer ring.width");
+    assert_eq!((ran.status, ran.output.as_str()), (2, ""));
+    assert!(ran.errors.contains("add `--of` and one of `float`, `other`"), "{}", ran.errors);
+    let ran = bench.run("select three.gap --spacer ring.width");
+    assert_eq!((ran.status, ran.output.as_str()), (2, ""));
+    assert!(ran.errors.contains("two of `cold`, `warm`, `hot`"), "{}", ran.errors);
 }
 
 #[test]
