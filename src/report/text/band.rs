@@ -9,7 +9,7 @@ use crate::report::{Account, FrictionBand};
 /// Writes the bands of each joint.
 pub(super) fn render(out: &mut String, account: &Account, look: Look) {
     for bands in account.bands.chunk_by(|a, b| a.joint == b.joint) {
-        section(out, &format!("friction along the seat of {}", bands[0].joint), look);
+        section(out, &format!("friction in fit {}", bands[0].joint), look);
         let column = bands.iter().map(|b| width(&visible(&b.condition))).max().unwrap_or(0);
         for band in bands {
             let name = left(&visible(&band.condition), column.max(8));
