@@ -27,6 +27,7 @@ pub(crate) mod wrap;
 use crate::diagnostic::Diagnostic;
 use crate::evaluate::outcome::Drawn;
 use crate::findings::Standing;
+use crate::findings::number::{Round, with_unit};
 use crate::source::Sources;
 use crate::span::Span;
 use crate::units::Unit;
@@ -123,8 +124,8 @@ pub struct Figure {
     pub measure: Option<Measure>,
     /// The condition; `None` for what has none.
     pub condition: Option<String>,
-    /// The member of each `one of` set it was computed with: name and size, SI.
-    pub members: Vec<(String, f64)>,
+    /// The member of each `one of` set it was computed with.
+    pub members: Vec<Member>,
     /// The unit it is shown in.
     pub unit: &'static Unit,
     /// No value lies below.
@@ -145,6 +146,24 @@ pub struct Figure {
     pub secondary: bool,
     /// What must be said beside it.
     pub caution: Option<Caution>,
+}
+
+/// A member of a `one of` set.
+#[derive(Debug, Clone, PartialEq)]
+pub struct Member {
+    /// The name of the set.
+    pub name: String,
+    /// Its size, SI.
+    pub size: f64,
+    /// The unit that sizes are shown in.
+    pub unit: &'static Unit,
+}
+
+impl Member {
+    /// The set and the size, such as `shim.thickness 0.1000 mm`.
+    pub(crate) fn shown(&self) -> String {
+        format!("{} {}", self.name, with_unit(self.size, self.unit, Round::Nearest))
+    }
 }
 
 /// Across what a length is measured.

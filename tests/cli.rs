@@ -4,6 +4,7 @@ mod binary;
 mod cautions;
 mod check;
 mod draws;
+mod members;
 mod record;
 mod select;
 mod statistics;

@@ -174,12 +174,16 @@ fn reach(covers: &[(f64, f64)], start: f64, slack: f64) -> f64 {
 
 /// The smallest distance by which the intervals overlap, or overrun the values that occur.
 fn margin(selection: &Selection) -> f64 {
-    let mut sorted: Vec<(f64, f64)> =
-        selection.covers.iter().copied().filter(|(a, b)| a <= b).collect();
-    sorted.sort_by(|a, b| a.0.total_cmp(&b.0));
     let (least, greatest) = selection.occurs;
-    let (Some(&(from, mut at)), false) = (sorted.first(), sorted.is_empty()) else {
-        return least - greatest;
+    let serving = || selection.covers.iter().copied().filter(|(a, b)| a <= b);
+    // Members that serve nothing that occurs leave no hole either.
+    let mut sorted: Vec<(f64, f64)> =
+        serving().filter(|(a, b)| *b >= least && *a <= greatest).collect();
+    sorted.sort_by(|a, b| a.0.total_cmp(&b.0));
+    let Some(&(from, mut at)) = sorted.first() else {
+        let away =
+            serving().map(|(a, b)| (a - greatest).max(least - b)).fold(f64::INFINITY, f64::min);
+        return least - greatest - if away.is_finite() { away } else { 0.0 };
     };
     let mut margin = least - from;
     for &(from, to) in &sorted[1..] {

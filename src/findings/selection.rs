@@ -10,7 +10,10 @@ use crate::model::Assembly;
 pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec<Diagnostic>) {
     for selection in evaluation.selections.iter().filter(|s| s.outcome != Outcome::Holds) {
         let dimension = assembly.dimension(selection.dimension);
-        let unit = assembly.defaults.length;
+        // Assemblies are told apart by the first quantity that contains the set.
+        let first = selection.requirements.first().map(|&index| &assembly.requirements[index]);
+        let unit = first.map_or(assembly.defaults.length, |r| r.unit);
+        let of_member = dimension.unit(&assembly.defaults);
         let mut diagnostic = Diagnostic::new(
             Code::SelectionIncomplete,
             dimension.line,
@@ -33,7 +36,7 @@ pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec
             .iter()
             .zip(&selection.covers)
             .map(|(member, (from, to))| {
-                let member = with_unit(*member, unit, Round::Nearest);
+                let member = with_unit(*member, of_member, Round::Nearest);
                 if from <= to {
                     format!(
                         "{member} serves {} .. {}",

@@ -2,6 +2,7 @@
 
 use super::{ConditionId, DimensionId, PartId, Scenario};
 use crate::span::Span;
+use crate::units::{Defaults, Kind, Unit};
 use std::sync::Arc;
 
 /// One toleranced dimension of a part.
@@ -52,6 +53,14 @@ pub struct Dimension {
 }
 
 impl Dimension {
+    /// The unit that its size is shown in.
+    pub fn unit(&self, defaults: &Defaults) -> &'static Unit {
+        match self.form {
+            Form::Angle => defaults.shown(Kind::ANGLE),
+            Form::Diameter | Form::Radius | Form::Linear => defaults.shown(Kind::LENGTH),
+        }
+    }
+
     /// Least size at its reference temperature.
     pub fn least(&self) -> f64 {
         self.nominal + self.lower

@@ -6,8 +6,8 @@ use super::caution::Caution;
 use super::coordinate::{coordinates, scale};
 use super::shop::cards;
 use super::{
-    Account, Case, Contribution, FailingShare, Figure, FrictionBand, Measure, Statistics, Window,
-    WorstLot,
+    Account, Case, Contribution, FailingShare, Figure, FrictionBand, Measure, Member, Statistics,
+    Window, WorstLot,
 };
 use crate::evaluate::Evaluation;
 use crate::evaluate::outcome::{self, Verdict};
@@ -52,7 +52,7 @@ fn figure(assembly: &Assembly, figure: &outcome::Figure) -> Figure {
     let member = |c: &outcome::Chosen| {
         let set = assembly.dimension(c.dimension);
         let size = set.members.get(c.member as usize).copied().unwrap_or(set.nominal);
-        (assembly.path(c.dimension), size)
+        Member { name: assembly.path(c.dimension), size, unit: set.unit(&assembly.defaults) }
     };
     Figure {
         subject: subject.name.clone(),

@@ -1,7 +1,7 @@
 //! Where an extreme is reached: the value of each unknown, in the unit people state it in.
 
 use crate::findings::words;
-use crate::model::{Assembly, Form, OwnTemperature, Unknown};
+use crate::model::{Assembly, OwnTemperature, Unknown};
 use crate::units::{Kind, Unit, find};
 
 /// The value of one unknown at a corner.
@@ -70,10 +70,9 @@ impl Scale {
 pub(super) fn scale(assembly: &Assembly, unknown: Unknown) -> Scale {
     let shown = |kind| Scale::of(assembly.defaults.shown(kind));
     match unknown {
-        Unknown::Size { dimension, .. } => match assembly.dimension(dimension).form {
-            Form::Angle => shown(Kind::ANGLE),
-            Form::Diameter | Form::Radius | Form::Linear => shown(Kind::LENGTH),
-        },
+        Unknown::Size { dimension, .. } => {
+            Scale::of(assembly.dimension(dimension).unit(&assembly.defaults))
+        }
         Unknown::Coating { .. } => shown(Kind::LENGTH),
         Unknown::Temperature(_) => shown(Kind::TEMPERATURE),
         Unknown::OwnTemperature { condition, owner } => {

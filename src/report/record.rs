@@ -91,7 +91,7 @@ fn requirements(account: &Account) -> Vec<String> {
         }
         lines.push(format!(
             "    {}: {{{}}}\n",
-            condition(case.condition.as_ref()),
+            condition(case.condition.as_ref(), case.figure.map(|f| &account.figures[f])),
             of_case(account, case)
         ));
     }
@@ -135,8 +135,12 @@ fn range(figure: &Figure, unit: &'static Unit) -> String {
     )
 }
 
-fn condition(name: Option<&String>) -> String {
-    quoted(name.map_or("any", String::as_str))
+/// A condition, and the members of sets that a figure there was computed with.
+fn condition(name: Option<&String>, figure: Option<&Figure>) -> String {
+    let mut name = name.map_or_else(|| "any".to_string(), String::clone);
+    let members = figure.map_or(&[][..], |figure| &figure.members);
+    name.extend(members.iter().map(|member| format!(", {}", member.shown())));
+    quoted(&name)
 }
 
 /// Figures that no requirement shows, by subject and quantity, a line a condition.
@@ -155,11 +159,11 @@ fn results(account: &Account) -> Vec<String> {
             lines.push(format!("  {}:\n", quoted(&heading)));
             last = heading;
         }
-        let mut name = figure.condition.clone().unwrap_or_else(|| "any".to_string());
-        for (set, size) in &figure.members {
-            name.push_str(&format!(", {set} {size:.7} m"));
-        }
-        lines.push(format!("    {}: {{{}}}\n", quoted(&name), range(figure, figure.unit)));
+        lines.push(format!(
+            "    {}: {{{}}}\n",
+            condition(figure.condition.as_ref(), Some(figure)),
+            range(figure, figure.unit)
+        ));
     }
     lines
 }

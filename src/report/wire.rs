@@ -151,7 +151,7 @@ pub struct ResultEntry {
     pub measure: Option<&'static str>,
     /// The condition; `null` for what has none.
     pub condition: Option<String>,
-    /// The member of each `one of` set it was computed with, in mm.
+    /// The member of each `one of` set it was computed with, in mm; angles in deg.
     #[serde(skip_serializing_if = "Option::is_none")]
     pub members: Option<Map>,
     /// Unit of the figures.

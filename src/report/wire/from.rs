@@ -10,10 +10,10 @@ use crate::diagnostic::{Diagnostic, Label};
 use crate::report::cause::by_cause;
 use crate::report::summary::summary;
 use crate::report::{
-    Account, Case, Contribution, Coordinate, Figure, FrictionBand, Report, ShopCard, Spec,
+    Account, Case, Contribution, Coordinate, Figure, FrictionBand, Member, Report, ShopCard, Spec,
 };
 use crate::source::Sources;
-use crate::units::{Unit, find};
+use crate::units::{Kind, Unit, find};
 
 /// The report in the format `gapkeep/1`.
 pub fn document(report: &Report) -> Document {
@@ -103,16 +103,18 @@ fn value(si: f64, unit: &Unit) -> Option<f64> {
 }
 
 fn result(figure: &Figure) -> ResultEntry {
-    let size = |si: f64| find("mm").and_then(|mm| value(si, mm));
+    let size = |member: &Member| {
+        let unit = if member.unit.kind == Kind::LENGTH { "mm" } else { "deg" };
+        find(unit).and_then(|unit| value(member.size, unit))
+    };
     ResultEntry {
         name: figure.subject.clone(),
         kind: figure.kind,
         quantity: figure.quantity.clone(),
         measure: figure.measure.map(|m| m.word()),
         condition: figure.condition.clone(),
-        members: (!figure.members.is_empty()).then(|| {
-            Map(figure.members.iter().map(|(name, si)| (name.clone(), size(*si))).collect())
-        }),
+        members: (!figure.members.is_empty())
+            .then(|| Map(figure.members.iter().map(|m| (m.name.clone(), size(m))).collect())),
         unit: figure.unit.symbol,
         least: value(figure.least, figure.unit),
         mean: value(figure.mean, figure.unit),

@@ -30,10 +30,7 @@ pub(super) fn row(account: &Account, figure: &Figure, case: Option<&Case>) -> Ro
     let places = places(account, figure);
     let shown = |si: f64, round| digits(unit.from_si(si), places, round);
     let mut name = figure.condition.clone().unwrap_or_else(|| "any".to_string());
-    for (set, size) in &figure.members {
-        let size = digits(*size * 1e3, 3, Round::Nearest);
-        name.push_str(&format!(", {set} {size} mm"));
-    }
+    name.extend(figure.members.iter().map(|member| format!(", {}", member.shown())));
     let margin = case.map(|c| c.margin).filter(|m| !m.is_nan());
     // A row is about what decides: the proven bounds, or the spread from assembly to assembly.
     let statistics = case.filter(|c| c.statistical).and_then(|c| c.statistics.as_ref());
