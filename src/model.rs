@@ -100,6 +100,8 @@ pub struct Drawing {
 pub struct Lot {
     /// The name after `lot`, or that of the only part.
     pub name: String,
+    /// True where the name is that after `lot`; a part may be called the same.
+    pub stated: bool,
     /// What it is made of.
     pub material: Arc<Material>,
 }

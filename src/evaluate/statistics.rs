@@ -9,6 +9,7 @@ mod chance;
 mod corners;
 mod draw;
 mod judge;
+mod key;
 mod linear;
 mod lots;
 mod together;

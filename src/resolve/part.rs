@@ -26,7 +26,7 @@ pub(crate) fn resolve(cx: &mut Context, parts: &[&tree::Part]) {
         let owner = &owners[index];
         let lot = match stated[index] {
             Some(text) => lots.shared(cx, text, owner),
-            None => add(cx, &part.name.value, owner),
+            None => add(cx, &part.name.value, false, owner),
         };
         let material = owner.material.clone().unwrap_or_else(|| unknown_material(cx));
         cx.parts.push(Part {
@@ -182,7 +182,7 @@ impl Lots {
     fn shared(&mut self, cx: &mut Context, stated: &tree::Text, owner: &Owner) -> LotId {
         let material = owner.material.as_ref().map(|m| m.name.clone()).unwrap_or_default();
         let Some((id, first, place)) = self.named.get(&stated.value).cloned() else {
-            let id = add(cx, &stated.value, owner);
+            let id = add(cx, &stated.value, true, owner);
             let entry = (id, material, owner.material_span);
             self.named.insert(stated.value.clone(), entry);
             return id;
@@ -202,9 +202,9 @@ impl Lots {
     }
 }
 
-fn add(cx: &mut Context, name: &str, owner: &Owner) -> LotId {
+fn add(cx: &mut Context, name: &str, stated: bool, owner: &Owner) -> LotId {
     let material = owner.material.clone().unwrap_or_else(|| unknown_material(cx));
-    cx.lots.push(Lot { name: name.to_string(), material });
+    cx.lots.push(Lot { name: name.to_string(), stated, material });
     LotId(cx.lots.len() as u32 - 1)
 }
 

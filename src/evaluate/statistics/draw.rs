@@ -4,6 +4,7 @@
 //! on every machine, with any number of threads, and whatever else the spec says.
 
 use super::corners::Corners;
+use super::key::key;
 use super::{Case, Drawing};
 use crate::evaluate::Options;
 use crate::evaluate::outcome::{Drawn, Statistics};
@@ -221,22 +222,6 @@ fn block(
     let single = (0..checks).map(|c| row(c).iter().filter(|f| **f).count() as u64).collect();
     let any = (0..count).filter(|&k| (0..checks).any(|c| row(c)[k])).count() as u64;
     Sum { single, any }
-}
-
-/// The name that keys an unknown's stream: what it is, not where it stands in the spec.
-fn key(assembly: &Assembly, unknown: Unknown) -> String {
-    let lot = |l: crate::model::LotId| &assembly.lots[l.index()].name;
-    match unknown {
-        Unknown::Size { dimension, piece } => format!("size {} {piece}", assembly.path(dimension)),
-        Unknown::Coating { dimension, piece } => {
-            format!("coating {} {piece}", assembly.path(dimension))
-        }
-        Unknown::ExpansionScatter(l) => format!("expansion {}", lot(l)),
-        Unknown::ModulusScatter(l) => format!("modulus {}", lot(l)),
-        Unknown::DataScatter(l, which) => format!("{which:?} {}", lot(l)),
-        Unknown::SwellScatter(l) => format!("swelling {}", lot(l)),
-        other => format!("{other:?}"),
-    }
 }
 
 /// What a share of which `count` in `draws` were seen lies between.
