@@ -339,7 +339,7 @@ impl<'t> Resolver<'_, '_, 't> {
                 Some(expr(path.span, Kind::LENGTH, kind))
             }
             Operand::Quantity(quantity) => {
-                let value = quantity::scenario(self.cx, quantity, None, Expect::Size)?;
+                let value = quantity::scenario(self.cx, quantity, None, Expect::Limit)?;
                 if !value.is_exact() {
                     return self.cx.refuse(
                         Diagnostic::new(
@@ -360,7 +360,7 @@ impl<'t> Resolver<'_, '_, 't> {
     fn stated(&mut self, operand: &Operand, line: Span) -> Option<Scenario> {
         match operand {
             Operand::Quantity(quantity) => {
-                let value = quantity::scenario(self.cx, quantity, None, Expect::Size)?;
+                let value = quantity::scenario(self.cx, quantity, None, Expect::Limit)?;
                 if value.least < 0.0 {
                     return self.cx.refuse(
                         Diagnostic::new(

@@ -26,7 +26,7 @@ use crate::units::{Kind, Unit};
 pub(crate) enum Expect {
     /// A length that follows the file's `lengths in`, and may be a tolerance class.
     Size,
-    /// A length as the limit of a requirement: as a size, and never a class.
+    /// A length as a size, and never a tolerance class: the limit of a requirement, a joint's length.
     Limit,
     /// A temperature that follows the file's `temperatures in`.
     Temperature,

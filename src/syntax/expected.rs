@@ -2,6 +2,7 @@
 
 mod hint;
 mod meaning;
+mod tolerance;
 
 use hint::hint;
 use meaning::{Meaning, meaning};

@@ -16,6 +16,9 @@ pub(super) fn states(cx: &mut Context, stated: &tree::Condition) -> Vec<State> {
     for row in &stated.overrides {
         let Some(owner) = owner(cx, &row.part) else { continue };
         let moisture = match (&row.moisture, owner) {
+            (Some(state), _) if matches!(state.value.as_str(), "above" | "below") => {
+                word_first(cx, row, state)
+            }
             (Some(state), Owner::Part(part)) => has_moisture(cx, part, state),
             (Some(state), Owner::Fill(_)) => {
                 let finding = Diagnostic::new(
@@ -54,6 +57,21 @@ pub(super) fn states(cx: &mut Context, stated: &tree::Condition) -> Vec<State> {
         earlier.moisture = earlier.moisture.take().or(moisture);
     }
     states
+}
+
+/// Refuses `rod above 20 K`, which is meant for `rod 20 K above`.
+fn word_first(cx: &mut Context, row: &tree::Override, word: &tree::Name) -> Option<String> {
+    let part = &row.part.value;
+    let amount = match &row.temperature {
+        Some(tree::OwnTemperature::Absolute(quantity)) => cx.text(quantity.span()).to_string(),
+        _ => "12 K".to_string(),
+    };
+    let finding = Diagnostic::new(
+        Code::UnknownMoisture,
+        word.span,
+        format!("`{}` is no moisture of `{part}`", word.value),
+    );
+    cx.refuse(finding.help(format!("a difference stands first: `{part} {amount} {}`", word.value)))
 }
 
 /// The state of that name of a part's material, or a finding.

@@ -18,7 +18,7 @@ pub(super) fn geometrical(
 ) -> Option<Sized> {
     let kind = characteristic(stated.kind.value);
     let name = kind.name();
-    let zone = quantity::scalar(cx, &stated.zone, Expect::Size);
+    let zone = quantity::scalar(cx, &stated.zone, Expect::Limit);
     let misplaced = dimension.form.as_ref().map(|form| form.span);
     if let Some(span) = misplaced {
         return cx.refuse(

@@ -1,6 +1,6 @@
 //! Ways out of the commoner mistakes.
 
-use super::nearest;
+use super::{nearest, tolerance};
 use crate::syntax::STATEMENT_WORDS;
 use crate::syntax::found::short;
 use crate::syntax::layout::{Line, word_at};
@@ -36,6 +36,9 @@ pub(super) fn hint(
             return Some(format!("write `{right}`"));
         }
     }
+    if rest.starts_with('=') && things.contains(&"a size or a dimension") {
+        return Some("the lines of a joint have no `=`".to_owned());
+    }
     if rest.starts_with('^') {
         return Some("powers do not chain; put one of them in parentheses".to_owned());
     }
@@ -49,6 +52,9 @@ pub(super) fn hint(
     if rest.starts_with('-') && glued && !previous.is_empty() && !word_at(text, at + 1).is_empty() {
         return Some(format!("names have no `-`; write `{previous}_{}`", word_at(text, at + 1)));
     }
+    if rest.starts_with("..") {
+        return None;
+    }
     if rest.starts_with('.') && before.ends_with(|c: char| c.is_ascii_digit()) {
         return Some("a number does not end in a point; write `5` or `5.0`".to_owned());
     }
@@ -61,11 +67,22 @@ pub(super) fn hint(
             "write `{digits}x {found}` for independent pieces, without a blank before the x"
         ));
     }
+    if let Some(hint) = tolerance::hint(text, line, at, things) {
+        return Some(hint);
+    }
     if rest.starts_with(|c: char| c.is_ascii_digit())
         && rest.contains('/')
         && words.contains(&"exact")
     {
         return Some("each deviation has its sign: `+0.05/-0.02`".to_owned());
+    }
+    if word_at(text, line.start) != "part"
+        && matches!(found, "hollow" | "outer" | "inner")
+        && words.contains(&"solid")
+    {
+        return Some(format!(
+            "write `{previous} outside 60` or `{previous} bore 20` for the far surface of a ring"
+        ));
     }
     if things == ["a name"] && rest.starts_with(|c: char| c.is_ascii_digit()) {
         return Some("a name begins with a letter".to_owned());
@@ -106,7 +123,7 @@ fn unsigned_exponent(before: &str, glued: &str) -> Option<String> {
     (numeric(&number.replacen('.', "", 1)) && numeric(power)).then(|| format!("{number}e+{power}"))
 }
 
-fn last_word(text: &str) -> &str {
+pub(super) fn last_word(text: &str) -> &str {
     let start = text
         .rfind(|c: char| !(c.is_alphanumeric() || c == '_'))
         .map_or(0, |at| at + text[at..].chars().next().map_or(1, char::len_utf8));
