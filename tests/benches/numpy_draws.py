@@ -2,8 +2,13 @@
 """The draws of tests/benches/statistics.rs in numpy, one column at a time as numpy is fastest.
 
 usage: numpy_draws.py            prints samples a second, the best of twenty runs
+       numpy_draws.py --beside   runs the Rust benchmark too, in turns with numpy, and prints both with
+                                 their ratio
 """
 
+import re
+import subprocess
+import sys
 import time
 
 import numpy as np
@@ -38,10 +43,34 @@ def shrink_joint():
     return int((p > 31.0).sum())
 
 
-for run in (forty_normals, shrink_joint):
+def fastest(run):
     best = float("inf")
     for _ in range(20):
         start = time.perf_counter()
-        count = run()
+        run()
         best = min(best, time.perf_counter() - start)
-    print(f"{run.__name__}: {DRAWS / best / 1e6:.2f} M samples/s, share {count / DRAWS:.5f}")
+    return DRAWS / best
+
+
+def of_bench(name):
+    """Samples a second of a benchmark's fastest run."""
+    command = ["cargo", "bench", "--quiet", "--bench", "statistics", "--", "--max-time", "3", name]
+    printed = subprocess.run(command, check=True, capture_output=True, text=True).stdout
+    number, unit = re.search(r"([\d.]+) ([GMK]?)item/s", printed).groups()
+    return float(number) * {"G": 1e9, "M": 1e6, "K": 1e3, "": 1.0}[unit]
+
+
+PAIRS = [
+    (forty_normals, "yield_of_forty_normals"),
+    (shrink_joint, "yield_of_a_recorded_shrink_joint"),
+]
+
+for run, bench in PAIRS:
+    ours = of_bench(bench) if "--beside" in sys.argv else None
+    numpy = fastest(run)
+    print(f"{run.__name__}: numpy {numpy / 1e6:.2f} M samples/s, share {run() / DRAWS:.5f}")
+    if ours is not None:
+        print(f"  {bench}: {ours / 1e6:.1f} M samples/s, {ours / numpy:.1f} times numpy's")
+if "--beside" in sys.argv:
+    bare = of_bench("bare_loop_of_forty_normals")
+    print(f"bare loop of forty normals: {bare / 1e6:.1f} M samples/s")
