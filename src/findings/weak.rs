@@ -1,18 +1,18 @@
-//! `variance-of-one`, `spread-assumed`: statistics that rest on little.
+//! `rss-of-few`, `variance-of-one`, `spread-assumed`: statistics that rest on little.
 //!
-//! One note a subject, whatever the number of its requirements and conditions, and nothing that
-//! `rss-of-few` says already.
+//! The first is told once a requirement, the others once a subject, whatever the number of their
+//! requirements and conditions; where few contribute, nothing is said of one that outweighs them.
 
 use super::{number, words};
 use crate::diagnostic::{Code, Diagnostic};
 use crate::evaluate::Evaluation;
 use crate::evaluate::outcome::Statistics;
-use crate::model::{
-    Assembly, DimensionId, ExprKind, Method, Requirement, SubjectId, SubjectKind, Unknown,
-};
+use crate::model::{Assembly, DimensionId, Method, Quantity, Requirement, SubjectId, Unknown};
 use crate::span::Span;
 use std::collections::{BTreeMap, BTreeSet};
 
+/// Fewest sizes for which a root sum of squares is commonly trusted (common practice).
+const ENOUGH: usize = 4;
 /// A contributor that makes more of the variance than all others together.
 const MOST: f64 = 0.5;
 /// Sizes with less of the variance do not decide.
@@ -25,6 +25,8 @@ const LABELLED: usize = 3;
 struct Known {
     /// The requirements that ask for statistics, in the order of the spec.
     asked: Vec<Span>,
+    /// Which of them are root sums of squares of few sizes, and of how many.
+    few: Vec<(usize, usize)>,
     /// The greatest share of the variance that each unknown has in any of them.
     shares: BTreeMap<Unknown, f64>,
     /// Those that one contributor decides, and its share, except where few contribute anyway.
@@ -36,6 +38,9 @@ pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec
     for subject in assembly.subject_ids() {
         let known = known(assembly, evaluation, subject);
         let name = words::name(&assembly.subject(subject).name);
+        for &(index, sizes) in &known.few {
+            found.push(of_few(assembly, &assembly.requirements[index], sizes));
+        }
         for (&unknown, (asked, share)) in &known.decided {
             found.push(of_one(assembly, unknown, &name, asked, *share));
         }
@@ -53,11 +58,17 @@ fn known(assembly: &Assembly, evaluation: &Evaluation, subject: SubjectId) -> Kn
         let mut any = false;
         for statistics in of_it.filter_map(|v| v.statistics.as_ref()) {
             any = true;
+            let few = few(assembly, requirement, statistics);
+            if let Some(sizes) = few
+                && !known.few.iter().any(|(told, _)| *told == index)
+            {
+                known.few.push((index, sizes));
+            }
             for share in &statistics.variance_shares {
                 let Some(unknown) = share.unknown else { continue };
                 let most = known.shares.entry(unknown).or_insert(0.0);
                 *most = most.max(share.share);
-                if share.share > MOST && !few(assembly, requirement, statistics) {
+                if share.share > MOST && few.is_none() {
                     decided(&mut known.decided, requirement, unknown, share.share);
                 }
             }
@@ -69,29 +80,30 @@ fn known(assembly: &Assembly, evaluation: &Evaluation, subject: SubjectId) -> Kn
     known
 }
 
-/// True where `rss-of-few` says it: a root sum of squares of fewer than four sizes.
-fn few(assembly: &Assembly, requirement: &Requirement, statistics: &Statistics) -> bool {
-    const ENOUGH: usize = 4;
-    let counted = match &assembly.subject(requirement.subject).kind {
-        SubjectKind::Gap(e) | SubjectKind::Result(e) => {
-            let mut of_a_fit = false;
-            e.walk(&mut |e| {
-                of_a_fit |= matches!(
-                    e.kind,
-                    ExprKind::Clearance(_) | ExprKind::Play(_) | ExprKind::After { .. }
-                );
-            });
-            !of_a_fit
-        }
-        SubjectKind::Fit(fit) => fit.joint.is_none(),
-        SubjectKind::Restraint(_) | SubjectKind::Fill(_) => false,
-    };
-    let sizes = statistics
-        .variance_shares
-        .iter()
-        .filter(|s| matches!(s.unknown, Some(Unknown::Size { .. })))
-        .count();
-    matches!(requirement.method, Method::Rss { .. }) && counted && sizes < ENOUGH
+/// How many sizes vary in a root sum of squares, where they are fewer than it takes.
+fn few(assembly: &Assembly, requirement: &Requirement, statistics: &Statistics) -> Option<usize> {
+    let of_sizes = matches!(
+        requirement.quantity,
+        Quantity::Clearance
+            | Quantity::Interference
+            | Quantity::RadialClearance
+            | Quantity::Gap
+            | Quantity::Value
+    );
+    let elastic = assembly.fit(requirement.subject).is_some_and(|fit| fit.joint.is_some());
+    let by_rss = matches!(requirement.method, Method::Rss { .. });
+    let is_size = |unknown: &Option<Unknown>| matches!(unknown, Some(Unknown::Size { .. }));
+    let sizes = statistics.variance_shares.iter().filter(|s| is_size(&s.unknown)).count();
+    (by_rss && of_sizes && !elastic && sizes < ENOUGH).then_some(sizes)
+}
+
+/// A root sum of squares of so few sizes that one of them decides.
+fn of_few(assembly: &Assembly, requirement: &Requirement, sizes: usize) -> Diagnostic {
+    let vary = words::count(sizes, "size varies", "sizes vary");
+    let name = words::name(&assembly.subject(requirement.subject).name);
+    let message = format!("a root sum of squares, and only {vary} in {name}");
+    Diagnostic::new(Code::RssOfFew, requirement.span, message)
+        .help("with so few, one off its middle decides: use `by worst case`")
 }
 
 fn decided(

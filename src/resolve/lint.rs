@@ -36,7 +36,6 @@ pub(crate) fn lint(subject: &Subject) -> Vec<Diagnostic> {
     found.extend(state::ptfe_transition(subject.assembly));
     found.extend(joint::one_coated_mate(subject.assembly));
     found.extend(joint::free_sizes(subject.assembly));
-    found.extend(statistics::rss_of_few(subject.assembly));
     found.extend(statistics::copies_or_pieces(subject.assembly));
     found
 }
