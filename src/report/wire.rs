@@ -46,7 +46,6 @@ pub struct SpecEntry {
     /// What a shop needs to make each joint; temperatures in the file's unit, clearance in mm.
     pub shop_cards: Vec<ShopCardEntry>,
     /// How far friction along each joint may shift its pressure, where friction is stated.
-    #[serde(skip_serializing_if = "Vec::is_empty")]
     pub friction_bands: Vec<FrictionBandEntry>,
     /// The share of assemblies that meet every requirement at every condition, where statistics
     /// were asked for.
