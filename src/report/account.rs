@@ -78,7 +78,7 @@ fn figure(assembly: &Assembly, figure: &outcome::Figure) -> Figure {
                 | Quantity::Value
                 | Quantity::Ullage
         ),
-        caution: Caution::of(figure.quantity),
+        caution: Caution::of(assembly, figure.subject, figure.quantity),
     }
 }
 
@@ -210,7 +210,7 @@ fn case(assembly: &Assembly, evaluation: &Evaluation, verdict: &Verdict, today: 
         method: method(requirement.method),
         statistical: requirement.method != Method::WorstCase,
         limits: limits(requirement),
-        caution: Caution::of(requirement.quantity),
+        caution: Caution::of(assembly, requirement.subject, requirement.quantity),
         lower,
         upper,
         unit: shown_unit(requirement),

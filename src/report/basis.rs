@@ -194,6 +194,14 @@ fn cautions(assembly: &Assembly, evaluation: &Evaluation) -> Vec<String> {
             ));
         }
     }
+    let closed = |k: &SubjectKind| matches!(k, SubjectKind::Fill(f) if !f.may_be_full.is_empty());
+    if assembly.subjects.iter().any(|s| closed(&s.kind)) {
+        cautions.push(
+            "a trapped liquid gains pressure with every kelvin and can burst what holds it: give it \
+             a relief valve or room; the codes for pressure equipment come first"
+                .to_string(),
+        );
+    }
     let joint = assembly
         .subjects
         .iter()

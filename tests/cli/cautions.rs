@@ -139,3 +139,22 @@ fn selections_say_it_where_loads_decide() {
         serde_json::from_str(&free.run("select sleeve.gap --as json").output).unwrap();
     assert_eq!(json["cautions"], serde_json::json!([]));
 }
+
+#[test]
+fn the_pressure_of_a_closed_liquid_calls_for_a_relief_valve() {
+    let text = include_str!("../../specs/assemblies/hydraulic-test-cell.gap");
+    let bench = Bench::new(&[("cell.gap", text)]);
+    let trapped = "trapped liquid can burst its vessel: relief valve; pressure codes apply";
+    let ran = bench.run("check cell.gap");
+    assert_eq!((ran.status, said(&ran.output)), (0, vec![REVIEW, trapped]));
+    let detail = bench.run("check cell.gap --detail").output.replace("\n  ", " ");
+    assert!(detail.contains("the codes for pressure equipment come first"), "{detail}");
+    assert_eq!(bench.run("record cell.gap").status, 0);
+    assert!(bench.text("cell.record.yaml").contains(trapped));
+    // Full where nothing is limited: an error, and the same caution.
+    let unlimited = text.replace("require \"HC-1\" pressure <= 40 MPa", "require ullage >= -5 %");
+    let unlimited = unlimited.replace("require \"HC-2\" stress in cell <= 60 % of yield", "");
+    let ran = Bench::new(&[("cell.gap", &unlimited)]).run("check cell.gap");
+    assert!(ran.output.contains("error: `oil` is full"), "{}", ran.output);
+    assert_eq!(said(&ran.output), [REVIEW, trapped]);
+}

@@ -28,7 +28,9 @@ pub fn selected(
         // has been judged for.
         cautions: match spacer {
             Some(_) => Vec::new(),
-            None => caution::lines(assembly.requirements.iter().map(|r| Caution::of(r.quantity))),
+            None => caution::lines(
+                assembly.requirements.iter().map(|r| Caution::of(assembly, r.subject, r.quantity)),
+            ),
         },
     }
 }
