@@ -4,6 +4,7 @@ mod binary;
 mod cautions;
 mod check;
 mod draws;
+mod kinks;
 mod members;
 mod record;
 mod select;

@@ -261,6 +261,9 @@ pub struct Statistics {
     pub cpk: Option<f64>,
     /// True where the share is that of the formula to its printed digits, without draws.
     pub exact: bool,
+    /// True where sides may change in a `min`, a `max` or an absolute value: there no line tells mean
+    /// and standard deviation, and those of the draws stand in their place.
+    pub kinked: bool,
     /// Number of random unknowns.
     pub random: usize,
     /// True where some spread is the default and not stated.
@@ -290,6 +293,7 @@ impl Statistics {
             second_order: (f64::NAN, f64::NAN),
             low: (f64::NAN, f64::NAN),
             high: (f64::NAN, f64::NAN),
+            kinked: false,
             share_failing: 1.0,
             share_interval: (0.0, 1.0),
             drawn: None,

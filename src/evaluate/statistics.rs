@@ -78,8 +78,9 @@ pub(crate) fn settle(
     if !bent.is_empty() {
         let checks: Vec<Check<'_>> = bent.iter().map(|&i| Check::of(&cases[i])).collect();
         let counts = draw::run(assembly, &checks, drawing, draw::Counts::widest);
-        for (&i, &count) in bent.iter().zip(&counts.single) {
-            draw::take(&mut statistics[i], count, counts.draws, drawing.options);
+        for (check, &i) in bent.iter().enumerate() {
+            let limits = (cases[i].lower, cases[i].upper);
+            draw::take(&mut statistics[i], &counts, check, limits, drawing.options);
         }
     }
     if drawing.options.detail == Detail::Full {

@@ -12,7 +12,7 @@ use crate::evaluate::scene::Response;
 use crate::model::{Assembly, Unknown};
 use crate::numeric::distribution::Distribution;
 use crate::numeric::probability::{ShareInterval, clopper_pearson};
-use crate::numeric::random::{Merge, Stream, monte_carlo_of};
+use crate::numeric::random::{Merge, Moments, Stream, monte_carlo_of};
 use crate::numeric::tape::{Column, Scratch};
 use std::collections::BTreeMap;
 
@@ -20,6 +20,8 @@ use std::collections::BTreeMap;
 const CONFIDENCE: f64 = 0.99;
 /// Where a width is asked for it is looked at after multiples of so many draws.
 const STEP: u64 = 100_000;
+/// How far, in standard deviations, mean or standard deviation of a line may be off at a kink.
+const LINE_OFF: f64 = 0.02;
 
 /// What is looked at for each draw: one quantity at all corners of its scenarios.
 pub(super) struct Check<'a> {
@@ -47,6 +49,17 @@ pub(super) struct Counts {
     pub(super) single: Vec<u64>,
     /// Draws that break any.
     pub(super) any: u64,
+    /// For each corner that was drawn, what it is of and how it came out.
+    corners: Vec<(Of, Moments)>,
+}
+
+/// A corner of a check.
+#[derive(Clone, Copy)]
+struct Of {
+    check: usize,
+    /// Whether the scenarios there make the quantity least, greatest.
+    least: bool,
+    greatest: bool,
 }
 
 impl Counts {
@@ -58,12 +71,26 @@ impl Counts {
         };
         self.single.iter().map(width).fold(0.0, f64::max)
     }
+
+    /// Mean and standard deviation of a check where the scenarios make it least, and greatest.
+    fn ends(&self, check: usize) -> Option<((f64, f64), (f64, f64))> {
+        let end = |wanted: fn(&Of) -> bool, sigmas: f64| {
+            let of_it = self.corners.iter().filter(|(of, _)| of.check == check);
+            let reached = |m: &Moments| sigmas * (m.mean() + sigmas * libm::sqrt(m.variance()));
+            of_it
+                .map(|(of, m)| (!wanted(of), -reached(m), (m.mean(), libm::sqrt(m.variance()))))
+                .min_by(|a, b| a.0.cmp(&b.0).then(a.1.total_cmp(&b.1)))
+                .map(|(_, _, moments)| moments)
+        };
+        Some((end(|of| of.least, -3.0)?, end(|of| of.greatest, 3.0)?))
+    }
 }
 
 #[derive(Debug, Clone, PartialEq)]
 struct Sum {
     single: Vec<u64>,
     any: u64,
+    corners: Vec<Moments>,
 }
 
 impl Merge for Sum {
@@ -72,12 +99,15 @@ impl Merge for Sum {
             *a += b;
         }
         self.any += next.any;
+        for (a, b) in self.corners.iter_mut().zip(next.corners) {
+            a.merge(b);
+        }
     }
 }
 
 /// One corner of one check: where each input comes from.
 struct Plan<'a> {
-    check: usize,
+    of: Of,
     response: &'a Response,
     inputs: Vec<Input>,
     lower: Option<f64>,
@@ -118,6 +148,11 @@ pub(super) fn run(
             }
         }
         for corner in corners {
+            let of = Of {
+                check: index,
+                least: check.corners.least.contains(corner),
+                greatest: check.corners.greatest.contains(corner),
+            };
             let mut inputs = Vec::with_capacity(corner.len());
             for (i, &unknown) in check.response.unknowns.iter().enumerate() {
                 inputs.push(match &check.corners.chances[i] {
@@ -129,7 +164,7 @@ pub(super) fn run(
                 });
             }
             plans.push(Plan {
-                check: index,
+                of,
                 response: check.response,
                 inputs,
                 lower: check.lower,
@@ -143,7 +178,8 @@ pub(super) fn run(
         streams[place] = Some((stream, chance));
     }
     let streams: Vec<(Stream, Distribution)> = streams.into_iter().flatten().collect();
-    let mut counts = Counts { draws: 0, single: vec![0; checks.len()], any: 0 };
+    let corners = plans.iter().map(|plan| (plan.of, Moments::default())).collect();
+    let mut counts = Counts { draws: 0, single: vec![0; checks.len()], any: 0, corners };
     let mut end = match options.to_width {
         Some(_) => STEP.min(options.draws),
         None => options.draws,
@@ -158,6 +194,7 @@ pub(super) fn run(
         if let Some(sum) = sum {
             counts.single.iter_mut().zip(sum.single).for_each(|(a, b)| *a += b);
             counts.any += sum.any;
+            counts.corners.iter_mut().zip(sum.corners).for_each(|((_, a), b)| a.merge(b));
         }
         counts.draws = end;
         if let Some(wanted) = options.to_width {
@@ -192,13 +229,15 @@ fn block(
     let mut failing = vec![false; checks * count];
     let mut scratch = Scratch::default();
     let mut inputs = Vec::new();
+    let mut corners = Vec::with_capacity(plans.len());
     for plan in plans {
+        let mut moments = Moments::default();
         inputs.clear();
         inputs.extend(plan.inputs.iter().map(|input| match *input {
             Input::Fixed(x) => Column::Fixed(x),
             Input::Drawn(row) => Column::Drawn(&values[row * count..(row + 1) * count]),
         }));
-        let row = &mut failing[plan.check * count..(plan.check + 1) * count];
+        let row = &mut failing[plan.of.check * count..(plan.of.check + 1) * count];
         // What is not a number breaks every limit.
         let (lower, upper) =
             (plan.lower.unwrap_or(f64::NEG_INFINITY), plan.upper.unwrap_or(f64::INFINITY));
@@ -208,20 +247,26 @@ fn block(
             count,
             &mut scratch,
             |_, at, result| match result {
-                Column::Fixed(x) if breaks(x) => row.fill(true),
-                Column::Fixed(_) => {}
+                Column::Fixed(x) => {
+                    moments.merge(Moments::of(&[x]));
+                    if breaks(x) {
+                        row.fill(true);
+                    }
+                }
                 Column::Drawn(result) => {
+                    moments.merge(Moments::of(result));
                     for (failing, &x) in row[at..].iter_mut().zip(result) {
                         *failing |= breaks(x);
                     }
                 }
             },
         );
+        corners.push(moments);
     }
     let row = |check: usize| &failing[check * count..(check + 1) * count];
     let single = (0..checks).map(|c| row(c).iter().filter(|f| **f).count() as u64).collect();
     let any = (0..count).filter(|&k| (0..checks).any(|c| row(c)[k])).count() as u64;
-    Sum { single, any }
+    Sum { single, any, corners }
 }
 
 /// What a share of which `count` in `draws` were seen lies between.
@@ -235,12 +280,38 @@ pub(super) fn drawn(draws: u64, (least, most): (f64, f64), options: &Options) ->
     Drawn { draws, seed: options.seed, missed }
 }
 
-/// Puts a counted share in the place of a computed one.
-pub(super) fn take(statistics: &mut Statistics, count: u64, draws: u64, options: &Options) {
+/// Puts what was counted of a check in the place of what was computed.
+pub(super) fn take(
+    statistics: &mut Statistics,
+    counts: &Counts,
+    check: usize,
+    limits: (Option<f64>, Option<f64>),
+    options: &Options,
+) {
+    let (count, draws) = (counts.single[check], counts.draws);
     let interval = confidence(count, draws);
     statistics.share_failing = count as f64 / draws.max(1) as f64;
     statistics.share_interval = (interval.low, interval.high);
     statistics.drawn = Some(drawn(draws, statistics.share_interval, options));
+    let Some((low, high)) = counts.ends(check).filter(|_| statistics.kinked) else { return };
+    let noise = 4.0 / libm::sqrt(draws as f64);
+    let apart = |drawn: (f64, f64), line: (f64, f64)| {
+        let most = (LINE_OFF + noise) * drawn.1;
+        (drawn.0 - line.0).abs() > most || (drawn.1 - line.1).abs() > most
+    };
+    if !apart(low, statistics.low) && !apart(high, statistics.high) {
+        return;
+    }
+    (statistics.low, statistics.high) = (low, high);
+    statistics.cpk = super::linear::cpk(low, high, limits.0, limits.1);
+    let room = |side: Option<f64>, (mean, sigma): (f64, f64)| {
+        side.map_or(f64::INFINITY, |limit| (limit - mean).abs() / sigma)
+    };
+    let shown = if room(limits.0, low) <= room(limits.1, high) { low } else { high };
+    (statistics.mean, statistics.sigma) = shown;
+    statistics.second_order = shown;
+    // What the line says each brings is not what it brings here.
+    statistics.variance_shares.clear();
 }
 
 #[cfg(test)]

@@ -26,6 +26,8 @@ struct Line {
     interaction: f64,
     /// Most that the quantity leaves the line by, within the reach of the unknowns.
     remainder: f64,
+    /// True where the quantity may have a kink within their reach.
+    kinked: bool,
     /// Each random unknown: its input and the variance it brings.
     parts: Vec<(usize, f64)>,
     /// Slope and half reach of each random unknown, in the order of `parts`.
@@ -62,7 +64,8 @@ pub(super) fn statistics(assembly: &Assembly, case: &Case<'_>) -> Statistics {
         exact &= joint.high <= ALIKE * joint.low + 1e-15;
     }
     exact &= case.corners.proven;
-    let cpk = cpk(lowest, highest, case.lower, case.upper);
+    let ends = ((lowest.mean, deviation(lowest)), (highest.mean, deviation(highest)));
+    let cpk = cpk(ends.0, ends.1, case.lower, case.upper);
     let shown = match (case.lower, case.upper) {
         (Some(l), Some(u)) => {
             let below = (lowest.mean - l) / deviation(lowest);
@@ -76,14 +79,15 @@ pub(super) fn statistics(assembly: &Assembly, case: &Case<'_>) -> Statistics {
         mean: shown.mean,
         sigma: deviation(shown),
         second_order: (shown.second.0, libm::sqrt(shown.second.1.max(0.0))),
-        low: (lowest.mean, deviation(lowest)),
-        high: (highest.mean, deviation(highest)),
+        low: ends.0,
+        high: ends.1,
         share_failing: shares.iter().sum::<f64>().min(1.0),
         share_interval: (bounds.0.min(1.0), bounds.1.min(1.0)),
         drawn: None,
         worst_lot: None,
         cpk,
         exact,
+        kinked: low.iter().chain(&high).any(|line| line.kinked),
         random: shown.parts.len(),
         assumed: assumed(assembly, case.response),
         variance_shares: variance_shares(case.response, shown),
@@ -124,10 +128,15 @@ fn assumed(assembly: &Assembly, response: &Response) -> bool {
     })
 }
 
-fn cpk(low: &Line, high: &Line, lower: Option<f64>, upper: Option<f64>) -> Option<f64> {
-    let index = |room: f64, line: &Line| room / (3.0 * deviation(line));
-    let below = lower.map(|l| index(low.mean - l, low));
-    let above = upper.map(|u| index(u - high.mean, high));
+/// The capability index to the nearer limit, of mean and standard deviation at either side.
+pub(super) fn cpk(
+    low: (f64, f64),
+    high: (f64, f64),
+    lower: Option<f64>,
+    upper: Option<f64>,
+) -> Option<f64> {
+    let below = lower.map(|l| (low.0 - l) / (3.0 * low.1));
+    let above = upper.map(|u| (u - high.0) / (3.0 * high.1));
     match (below, above) {
         (Some(b), Some(a)) => Some(b.min(a)),
         (one, other) => one.or(other),
@@ -172,6 +181,9 @@ impl Side {
         if line.remainder == 0.0 {
             return (on_line, on_line, on_line);
         }
+        if !line.remainder.is_finite() {
+            return (0.0, on_line, 1.0);
+        }
         let (inward, outward) = (share(limit + line.remainder), share(limit - line.remainder));
         (inward.min(outward), on_line, inward.max(outward))
     }
@@ -185,7 +197,10 @@ fn line(response: &Response, corners: &Corners, at: &[f64]) -> Line {
         .zip(&corners.chances)
         .map(|(&x, chance)| chance.as_ref().map_or(Interval::point(x), reach))
         .collect();
-    let (_, _, bends) = response.tape.hessian(&boxed);
+    let (_, within, bends) = response.tape.hessian(&boxed);
+    // Second derivatives see no kink; first derivatives enclose the slopes on both of its sides.
+    let kinked = response.tape.may_kink_within(&boxed);
+    let far = |i: usize| (boxed[i].hi() - at[i]).max(at[i] - boxed[i].lo());
     let (mut terms, mut parts, mut moments) = (Vec::new(), Vec::new(), Vec::new());
     let (mut remainder, mut variance) = (0.0, 0.0);
     for &i in &random {
@@ -200,9 +215,13 @@ fn line(response: &Response, corners: &Corners, at: &[f64]) -> Line {
             skewness: chance.skewness(),
             kurtosis: chance.kurtosis(),
         });
-        for &j in &random {
-            let (w, v) = (half(boxed[i]), half(boxed[j]));
-            remainder += 0.5 * bends[i][j].magnitude() * w * v;
+        if kinked {
+            remainder += (within[i] - Interval::point(slopes[i])).magnitude() * far(i);
+        } else {
+            remainder += random
+                .iter()
+                .map(|&j| 0.5 * bends[i][j].magnitude() * far(i) * far(j))
+                .sum::<f64>();
         }
     }
     let first: Vec<f64> = random.iter().map(|&i| slopes[i]).collect();
@@ -223,11 +242,8 @@ fn line(response: &Response, corners: &Corners, at: &[f64]) -> Line {
         second: (mean + shift, total),
         interaction,
         remainder,
+        kinked,
         parts,
-        slopes: random.iter().map(|&i| (slopes[i], half(boxed[i]))).collect(),
+        slopes: random.iter().map(|&i| (slopes[i], far(i))).collect(),
     }
-}
-
-fn half(range: Interval) -> f64 {
-    0.5 * range.width()
 }

@@ -46,8 +46,10 @@ pub(super) fn settle(
     if !bent.is_empty() {
         let checks: Vec<Check<'_>> = bent.iter().map(|&i| Check::of(&corners[i].case)).collect();
         let counts = draw::run(assembly, &checks, drawing, Counts::widest);
-        for (&i, &count) in bent.iter().zip(&counts.single) {
-            draw::take(&mut of[i], count, counts.draws, drawing.options);
+        for (check, &i) in bent.iter().enumerate() {
+            let case = &corners[i].case;
+            let limits = (case.lower, case.upper);
+            draw::take(&mut of[i], &counts, check, limits, drawing.options);
         }
     }
     for (corner, of) in corners.into_iter().zip(of) {

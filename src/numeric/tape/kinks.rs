@@ -2,6 +2,8 @@
 //! of a table.
 
 use super::{Binary, Op, Tape, Unary};
+use crate::numeric::Interval;
+use crate::numeric::number::Ordered;
 
 /// Equal parts of the line that are looked at for a change; two changes that undo one another
 /// within one of them are not seen.
@@ -57,6 +59,24 @@ impl Tape {
             here = there;
         }
         places
+    }
+
+    /// True where a `min`, a `max` or an absolute value may change its side within these ranges: a
+    /// second derivative says nothing of how far the result leaves its tangent there. What a curve
+    /// does at its rows, its own derivatives enclose.
+    ///
+    /// # Panics
+    /// If `ranges` is shorter than [`Tape::inputs`].
+    pub fn may_kink_within(&self, ranges: &[Interval]) -> bool {
+        let values = self.run(ranges);
+        let zero = Interval::point(0.0);
+        self.ops.iter().any(|op| match *op {
+            Op::Unary(Unary::Abs, x) => values[x as usize].order(&zero).is_none(),
+            Op::Binary(Binary::Min | Binary::Max, a, b) => {
+                values[a as usize].order(&values[b as usize]).is_none()
+            }
+            _ => false,
+        })
     }
 
     fn branches(&self, op: &Op) -> bool {
@@ -117,6 +137,17 @@ mod tests {
         let found = kinks(formula, &[0.0], &[1.0]);
         assert_eq!(found.len(), 2);
         assert!((found[0] - 0.51).abs() < 1e-15 && (found[1] - 0.53).abs() < 1e-15, "{found:?}");
+    }
+
+    #[test]
+    fn a_kink_is_seen_where_sides_may_change() {
+        let tape = Tape::of(2, |x| x[0].clone().min(x[1].clone() * 2.0) + x[0].clone().abs());
+        let within = |a: (f64, f64), b: (f64, f64)| {
+            tape.may_kink_within(&[Interval::new(a.0, a.1), Interval::new(b.0, b.1)])
+        };
+        assert!(!within((1.0, 2.0), (3.0, 4.0)));
+        assert!(within((1.0, 7.0), (3.0, 4.0)));
+        assert!(within((-1.0, 2.0), (3.0, 4.0)));
     }
 
     #[test]
