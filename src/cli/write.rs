@@ -13,10 +13,13 @@ use std::path::Path;
 /// When the file cannot be written; it is then as it was.
 pub(crate) fn atomically(path: &Path, bytes: &[u8]) -> Result<(), Refusal> {
     whole(path, bytes).map_err(|error| {
-        Refusal::new(
-            format!("cannot write `{}`: {}", path.display(), reason(&error)),
-            "name a file in a folder that exists and can be written to",
-        )
+        let help = match error.kind() {
+            std::io::ErrorKind::PermissionDenied => {
+                "allow writing to it and to its folder, or name another file"
+            }
+            _ => "name a file in a folder that exists and can be written to",
+        };
+        Refusal::new(format!("cannot write `{}`: {}", path.display(), reason(&error)), help)
     })
 }
 
@@ -25,6 +28,10 @@ fn whole(path: &Path, bytes: &[u8]) -> std::io::Result<()> {
     let there = std::fs::metadata(&target).ok();
     if there.as_ref().is_some_and(|m| !m.is_file()) {
         return std::fs::write(&target, bytes);
+    }
+    // A rename would put a new file in the place of one that is protected from writing.
+    if there.as_ref().is_some_and(|m| m.permissions().readonly()) {
+        return Err(std::io::ErrorKind::PermissionDenied.into());
     }
     let folder = match target.parent() {
         Some(folder) if !folder.as_os_str().is_empty() => folder,
@@ -68,6 +75,23 @@ mod tests {
         let refusal = atomically(&folder.path().join("no/report.json"), b"x").unwrap_err();
         assert!(refusal.message.contains("there is no such file"), "{}", refusal.message);
         assert!(refusal.help.is_some());
+    }
+
+    #[test]
+    fn a_protected_file_is_left_alone() {
+        let folder = tempfile::tempdir().unwrap();
+        let path = folder.path().join("spindle.gap");
+        std::fs::write(&path, b"old").unwrap();
+        let writable = std::fs::metadata(&path).unwrap().permissions();
+        let mut protected = writable.clone();
+        protected.set_readonly(true);
+        std::fs::set_permissions(&path, protected).unwrap();
+        let refusal = atomically(&path, b"new").unwrap_err();
+        assert!(refusal.message.ends_with("its permissions forbid it"), "{}", refusal.message);
+        assert!(refusal.help.is_some_and(|help| help.starts_with("allow writing")));
+        assert_eq!(std::fs::read(&path).unwrap(), b"old");
+        assert_eq!(std::fs::read_dir(folder.path()).unwrap().count(), 1);
+        std::fs::set_permissions(&path, writable).unwrap();
     }
 
     #[cfg(unix)]

@@ -19,8 +19,10 @@ pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec
             Owner::Fill(fill) => assembly.subject(fill).span,
         };
         let condition = assembly.condition(beyond.condition);
-        let reached = if beyond.temperature.0 == beyond.temperature.1 {
-            with_unit(beyond.temperature.0, unit, Round::Nearest)
+        // The ends of one temperature may differ by its rounding.
+        let end = |si: f64| with_unit(si, unit, Round::Nearest);
+        let reached = if end(beyond.temperature.0) == end(beyond.temperature.1) {
+            end(beyond.temperature.0)
         } else {
             range(beyond.temperature)
         };

@@ -161,9 +161,13 @@ impl<'t> Resolver<'_, '_, 't> {
                     share.span(),
                     format!("a share of {} cannot be shown", self.cx.text(share.span())),
                 );
-                self.cx.refuse(finding.help(match value >= 1.0 {
-                    true => "all of them are `by worst case`; a share is such as `99.99 %`",
-                    false => "state a share between 0 and 100 %, such as `99.99 %`",
+                let bare = share.unit.is_none() && value > 1.0 && value < 100.0;
+                self.cx.refuse(finding.help(if bare {
+                    format!("write `{} %`", self.cx.text(share.span()))
+                } else if value >= 1.0 {
+                    "all of them are `by worst case`; a share is such as `99.99 %`".to_string()
+                } else {
+                    "state a share between 0 and 100 %, such as `99.99 %`".to_string()
                 }))
             }
             tree::Method::Rss { sigma: Some(n) } | tree::Method::Cpk(n) => self.cx.refuse(
