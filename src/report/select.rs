@@ -189,6 +189,8 @@ pub struct SpacerLength {
     #[serde(serialize_with = "name_of")]
     #[cfg_attr(test, schemars(with = "String"))]
     pub unit_of_mean: &'static Unit,
+    /// The requirements of the subject at these conditions that such a mean is beyond.
+    pub beyond: Vec<String>,
 }
 
 fn name_of<S: Serializer>(unit: &&'static Unit, serializer: S) -> Result<S::Ok, S::Error> {

@@ -150,3 +150,32 @@ fn wrong_calls_are_refused_with_a_way_out() {
     assert_eq!(ran.status, 2);
     assert!(ran.errors.contains("unknown-dimension"), "{}", ran.errors);
 }
+
+#[test]
+fn a_spacer_whose_mean_is_beyond_a_limit_says_so() {
+    let spec = "\
+assembly \"Play\"
+lengths in mm
+temperatures in degC
+condition cold -30
+condition warm  90
+part hub of aluminium_6082_t6 { depth = 60 ±0.1 }
+part ring of steel_100cr6 { width = 20 ±0.1 }
+part spacer of pom_c { length = 39.5 ±0.05 }
+gap play = hub.depth - ring.width - spacer.length {
+  require \"P-1\" -1 .. 1
+  require \"P-2\" -50 .. 50
+}
+";
+    let bench = Bench::new(&[("play.gap", spec)]);
+    let line = "select play.gap --spacer spacer.length --between cold,warm --of play";
+    let ran = bench.run(line);
+    assert!(ran.output.contains("such a mean is beyond P-1: change other sizes"), "{}", ran.output);
+    assert!(ran.output.lines().all(|l| l.chars().count() <= 80), "{}", ran.output);
+    let json = bench.run(&format!("{line} --as json")).output;
+    let json: serde_json::Value = serde_json::from_str(&json).unwrap();
+    assert_eq!(json["spacer"]["beyond"], serde_json::json!(["P-1"]));
+    let wide = spec.replace("-1 .. 1", "-60 .. 60");
+    let ran = Bench::new(&[("play.gap", &wide)]).run(line);
+    assert!(ran.output.contains("at both") && !ran.output.contains("beyond"), "{}", ran.output);
+}

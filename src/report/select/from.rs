@@ -6,7 +6,9 @@ use super::{
 };
 use crate::evaluate::select::{self, Governing, Obstacle, Rank, Selections};
 use crate::findings::words;
-use crate::model::{Assembly, ConditionId, DimensionId, Form, SubjectId, SubjectKind};
+use crate::model::{
+    Assembly, ConditionId, DimensionId, Form, Quantity, Requirement, SubjectId, SubjectKind,
+};
 use crate::report::caution::{self, Caution};
 use crate::units::{Kind, Unit};
 
@@ -149,7 +151,36 @@ fn spacer_length(assembly: &Assembly, spacer: &select::Spacer) -> SpacerLength {
         mean: of_mean.from_si(spacer.mean),
         means_stated: (of_mean.from_si(spacer.means_now.0), of_mean.from_si(spacer.means_now.1)),
         unit_of_mean: of_mean,
+        beyond: beyond(assembly, spacer),
     }
+}
+
+/// The requirements at the two conditions whose limits the mean of a spacer is beyond.
+fn beyond(assembly: &Assembly, spacer: &select::Spacer) -> Vec<String> {
+    let (a, b) = spacer.between;
+    let passes = |r: &Requirement| {
+        let mean = match r.quantity {
+            Quantity::Interference => -spacer.mean,
+            Quantity::RadialClearance => 0.5 * spacer.mean,
+            _ => spacer.mean,
+        };
+        r.lower.as_ref().is_some_and(|l| mean < l.value)
+            || r.upper.as_ref().is_some_and(|u| mean > u.value)
+    };
+    let free = |r: &Requirement| {
+        matches!(
+            r.quantity,
+            Quantity::Gap
+                | Quantity::Value
+                | Quantity::Clearance
+                | Quantity::Interference
+                | Quantity::RadialClearance
+        )
+    };
+    let of_it = assembly.requirements.iter().filter(|r| {
+        r.subject == spacer.subject && (r.conditions.contains(&a) || r.conditions.contains(&b))
+    });
+    of_it.filter(|r| free(r) && passes(r)).map(|r| words::requirement(assembly, r)).collect()
 }
 
 fn requirement(assembly: &Assembly, index: usize) -> String {

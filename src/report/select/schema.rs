@@ -87,6 +87,7 @@ fn whole() -> Selected {
             mean: 0.3,
             means_stated: (0.2, 0.4),
             unit_of_mean: mm(),
+            beyond: vec!["R-2".into()],
         }),
         cautions: vec!["stress and force"],
     }

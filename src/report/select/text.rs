@@ -238,6 +238,13 @@ fn spacer(spacer: &SpacerLength, look: Look) -> String {
     );
     paragraph(&mut out, &now, Role::Plain, look);
     paragraph(&mut out, &then, Role::Plain, look);
+    if !spacer.beyond.is_empty() {
+        let note = format!(
+            "such a mean is beyond {}: change other sizes with it, and ask again",
+            spacer.beyond.join(", ")
+        );
+        paragraph(&mut out, &note, Role::Plain, look);
+    }
     out
 }
 
