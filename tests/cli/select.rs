@@ -173,7 +173,7 @@ gap play = hub.depth - ring.width - spacer.length {
     assert!(ran.output.contains("such a mean is beyond P-1: change other sizes"), "{}", ran.output);
     assert!(ran.output.lines().all(|l| l.chars().count() <= 80), "{}", ran.output);
     let json = bench.run(&format!("{line} --as json")).output;
-    let json: serde_json::Value = serde_json::from_str(&json).unwrap();
+    let json: Value = serde_json::from_str(&json).unwrap();
     assert_eq!(json["spacer"]["beyond"], serde_json::json!(["P-1"]));
     let wide = spec.replace("-1 .. 1", "-60 .. 60");
     let ran = Bench::new(&[("play.gap", &wide)]).run(line);
