@@ -41,6 +41,10 @@ pub(super) fn find(assembly: &Assembly, evaluation: &Evaluation, found: &mut Vec
                     "nothing is computed beyond yield, and a wall that has yielded stays wider: \
                      charge less, take a thicker wall or a stronger material"
                 }
+                SubjectKind::Restraint(_) => {
+                    "nothing is computed beyond yield, and preload lost to it does not come back: \
+                     take less preload, more area, or a stronger material"
+                }
                 _ => {
                     "nothing is computed beyond yield, and interference lost to it does not come \
                      back: take less interference, a thicker ring or a stronger material"
