@@ -86,7 +86,10 @@ pub(crate) fn settle(
     if drawing.options.detail == Detail::Full {
         lots::settle(assembly, &cases, &mut statistics, drawing);
     }
-    evaluation.assembly_yield = Some(together::assembly(assembly, &cases, &statistics, drawing));
+    // Nobody knows the yield where a share is missing.
+    let all_known = evaluation.verdicts.iter().filter(|v| asked(v)).all(|v| v.figure.is_some());
+    evaluation.assembly_yield =
+        all_known.then(|| together::assembly(assembly, &cases, &statistics, drawing));
     let judged: Vec<(usize, Statistics)> =
         cases.iter().map(|c| c.verdict).zip(statistics).collect();
     for (verdict, statistics) in judged {

@@ -183,3 +183,23 @@ fn detail_says_the_worst_lot() {
     let until = ran.output.find("\nconditions\n").unwrap();
     insta::assert_snapshot!(&ran.output[..until]);
 }
+
+#[test]
+fn no_yield_is_claimed_where_a_condition_could_not_be_computed() {
+    let spec = "\
+assembly \"Cold stack\"
+lengths in mm
+temperatures in degC
+condition room 20
+condition cold -250
+part case of aluminium_6082_t6 { depth = 30.2 ±0.1 spread normal }
+part block of steel_c45 { width = 30 ±0.1 spread normal }
+gap play = case.depth - block.width { require >= 0.05 for 99 % of assemblies }
+";
+    let bench = Bench::new(&[("cold.gap", spec)]);
+    let ran = bench.run("check cold.gap");
+    assert!(ran.output.contains("not computed"), "{}", ran.output);
+    assert!(!ran.output.contains("yield"), "{}", ran.output);
+    let warm = Bench::new(&[("cold.gap", &spec.replace("cold -250", "cold -50"))]);
+    assert!(warm.run("check cold.gap").output.contains("first-pass yield"));
+}

@@ -197,14 +197,26 @@ fn free<'a>(account: &Account, kind: &'static str, figure: &'a Figure) -> Block<
 /// Across what, and which quantity; a gap and a result are their own quantity.
 fn what(measure: Option<Measure>, quantity: &str) -> String {
     let quantity = if matches!(quantity, "gap" | "value") { "" } else { quantity };
-    let words = [measure.map_or("", Measure::word), quantity];
+    // A radial clearance says so itself.
+    let measure = measure.map_or("", Measure::word);
+    let measure = if quantity.starts_with(measure) { "" } else { measure };
+    let words = [measure, quantity];
     words.into_iter().filter(|word| !word.is_empty()).collect::<Vec<_>>().join(" ")
 }
 
 #[cfg(test)]
 mod tests {
-    use super::with_unit;
+    use super::{what, with_unit};
+    use crate::report::Measure;
     use crate::units::find;
+
+    #[test]
+    fn a_heading_says_across_what_once() {
+        assert_eq!(what(Some(Measure::Radial), "radial clearance"), "radial clearance");
+        assert_eq!(what(Some(Measure::Diametral), "clearance"), "diametral clearance");
+        assert_eq!(what(Some(Measure::Linear), "gap"), "linear");
+        assert_eq!(what(None, "pressure"), "pressure");
+    }
 
     #[test]
     fn figures_say_their_unit_once() {
