@@ -48,13 +48,21 @@ fn sampled(tape: &Tape, ranges: &[Interval]) -> (f64, f64, usize) {
 /// Holds both ends of a figure against a million draws and against its own corners.
 #[track_caller]
 fn hold(run: &Run, subject: &str, quantity: Quantity, condition: &str) {
+    let range = &run.figure(subject, quantity, Some(condition)).range;
+    assert!(range.least.met, "{subject} {quantity:?} at {condition}: {range:?}");
+    hold_greatest(run, subject, quantity, condition);
+}
+
+/// As [`hold`], of a figure whose least may be no more than a bound.
+#[track_caller]
+fn hold_greatest(run: &Run, subject: &str, quantity: Quantity, condition: &str) {
     let figure = run.figure(subject, quantity, Some(condition));
     let asked = response(&run.assembly, subject, quantity, Some(condition));
     let (least, greatest, count) = sampled(&asked.tape, &asked.ranges);
     let what = format!("{subject} {quantity:?} at {condition}");
     assert_eq!(count, DRAWS);
     let range = &figure.range;
-    assert!(range.least.met && range.greatest.met, "{what}: {range:?}");
+    assert!(range.greatest.met, "{what}: {range:?}");
     assert!(
         range.least.bound <= least && greatest <= range.greatest.bound,
         "{what}: drawn {least:e} .. {greatest:e}, proven {:e} .. {:e}",
@@ -64,7 +72,7 @@ fn hold(run: &Run, subject: &str, quantity: Quantity, condition: &str) {
     // The draws must have been worth making: they cover most of what is proven.
     let proven = range.greatest.bound - range.least.bound;
     assert!(greatest - least > 0.6 * proven, "{what}: {:e} of {proven:e}", greatest - least);
-    for end in [&range.least, &range.greatest] {
+    for end in [&range.least, &range.greatest].into_iter().filter(|end| end.met) {
         let corner: Vec<f64> = asked
             .unknowns
             .iter()
@@ -204,6 +212,31 @@ result closure = (core.bore after first) - core.bore
     hold(&run, "first", Quantity::Stress(PartId(0)), "run");
     hold(&run, "second", Quantity::Stress(PartId(2)), "run");
     hold(&run, "closure", Quantity::Value, "run");
+    // Pressed on both faces, over thirteen unknowns: the search gives up, but near to the end.
+    let sleeve = &run.figure("first", Quantity::Stress(PartId(1)), Some("run")).range;
+    let asked = response(&run.assembly, "first", Quantity::Stress(PartId(1)), Some("run"));
+    let (least, greatest, _) = sampled(&asked.tape, &asked.ranges);
+    assert!(sleeve.least.bound <= least && greatest <= sleeve.greatest.bound, "{sleeve:?}");
+    assert!(sleeve.greatest.bound < 1.01 * sleeve.greatest.reached, "{sleeve:?}");
+    assert!(sleeve.least.bound > 0.6 * sleeve.least.reached, "{sleeve:?}");
+}
+
+#[test]
+fn magnets_between_core_and_sleeve_lie_within_what_is_proven() {
+    let run = run(include_str!("../specs/assemblies/magnet-sleeve.gap"));
+    for (quantity, subject) in [
+        (Quantity::Pressure, "seat"),
+        (Quantity::Pressure, "grip"),
+        (Quantity::Stress(PartId(2)), "grip"),
+    ] {
+        hold(&run, subject, quantity, "cold");
+        hold(&run, subject, quantity, "hot");
+    }
+    // What presses in the bore and what presses on the outside undo one another here.
+    for condition in ["assembly", "cold"] {
+        hold(&run, "grip", Quantity::Stress(PartId(1)), condition);
+    }
+    hold_greatest(&run, "grip", Quantity::Stress(PartId(1)), "hot");
 }
 
 #[test]

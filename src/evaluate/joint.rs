@@ -12,7 +12,7 @@ use super::elastic;
 use super::expression::value;
 use super::scene::{At, Scene, Unable};
 use super::temperature;
-use crate::mechanics::{contact, joint as formulas};
+use crate::mechanics::joint as formulas;
 use crate::model::{
     Datum, DimensionId, Fit, Form, Joint, Owner, PartId, Quantity, SubjectId, Unknown,
 };
@@ -48,26 +48,29 @@ pub(crate) fn quantity(
 ) -> Result<Recorded, Unable> {
     let Some(joint) = &fit.joint else { return super::expression::clearance(scene, at, fit) };
     let stack = Stack::of(scene.assembly, subject);
-    let pressures = stack.pressures(scene, at)?;
-    carried(scene, at, subject, joint, (&stack, &pressures), (quantity, of_yield))
+    carried(scene, at, subject, joint, (&stack, None), (quantity, of_yield))
 }
 
-/// What follows from the pressures in a stack.
+/// A quantity of one joint of a stack. `banded` is the pressure of a joint of two rings where it is
+/// another than that of rings free to slide.
 fn carried(
     scene: &Scene<'_>,
     at: At,
     subject: SubjectId,
     joint: &Joint,
-    (stack, pressures): (&Stack, &[Recorded]),
+    (stack, banded): (&Stack, Option<Recorded>),
     (quantity, of_yield): (Quantity, bool),
 ) -> Result<Recorded, Unable> {
     let place = stack.contact_of(subject);
-    let pressure = pressures[place].clone();
+    if let Quantity::Stress(part) = quantity {
+        let stress = stress(scene, at, (stack, banded), part)?;
+        return Ok(if of_yield { stress / yield_strength(scene, at, part)? } else { stress });
+    }
+    let pressure = match banded {
+        Some(pressure) => pressure,
+        None => stack.pressure(scene, at, place)?,
+    };
     Ok(match quantity {
-        Quantity::Stress(part) => {
-            let stress = stress(scene, at, stack, pressures, part)?;
-            if of_yield { stress / yield_strength(scene, at, part)? } else { stress }
-        }
         Quantity::Torque | Quantity::AxialForce => {
             let friction = scene.unknown(Unknown::Friction(subject));
             let length = value(scene, at, &joint.length)?;
@@ -92,13 +95,17 @@ pub(crate) fn yield_strength(scene: &Scene<'_>, at: At, part: PartId) -> Result<
 fn stress(
     scene: &Scene<'_>,
     at: At,
-    stack: &Stack,
-    pressures: &[Recorded],
+    (stack, banded): (&Stack, Option<Recorded>),
     part: PartId,
 ) -> Result<Recorded, Unable> {
     let place = stack.ring_of(part);
     let ring = stack.ring(scene, at, place)?;
-    let (inside, outside) = contact::faces(pressures, place);
+    let none = Recorded::exact(0.0);
+    let (inside, outside) = match banded {
+        Some(pressure) if place == 0 => (none, pressure),
+        Some(pressure) => (pressure, none),
+        None => stack.faces(scene, at, place)?,
+    };
     // The general form is the same at rest, but its enclosure is wider there.
     if !stack.turns(scene, at, place) {
         return Ok(ring.greatest_von_mises_at_rest(inside, outside));
@@ -118,8 +125,7 @@ pub(crate) fn after(
     let stack = Stack::of(scene.assembly, fit);
     let place = stack.ring_of(dimension.part);
     let ring = stack.ring(scene, at, place)?;
-    let pressures = stack.pressures(scene, at)?;
-    let (inside, outside) = contact::faces(&pressures, place);
+    let (inside, outside) = stack.faces(scene, at, place)?;
     let diameter =
         if dimension.form == Form::Radius { 2.0 * dimension.nominal } else { dimension.nominal };
     let strain = if stack.is_bore(place, diameter) {

@@ -54,6 +54,12 @@ pub fn extremes_within(tape: &Tape, ranges: &[Interval], gap: f64, most_boxes: u
     Extremes { least: search(Side::Least), greatest: search(Side::Greatest) }
 }
 
+/// Pieces that are looked at plainly before a search looks closer: most end sooner.
+const PLAIN_BOXES: usize = 32;
+
+/// How many plain looks a closer one counts for, so that a search that gives up takes no longer.
+const CLOSE_LOOK: usize = 8;
+
 /// A box with what is known of the formula on it.
 #[derive(Debug, Clone)]
 struct Piece {
@@ -66,6 +72,27 @@ impl Piece {
     fn of(tape: &Tape, ranges: Vec<Interval>) -> Self {
         let (value, slopes) = tape.gradient(&ranges);
         Piece { ranges, value, slopes }
+    }
+
+    /// A part of this piece: what is known of the whole holds of it too.
+    fn smaller(&self, tape: &Tape, ranges: Vec<Interval>) -> Self {
+        let (value, slopes) = tape.gradient(&ranges);
+        let mut part = Piece { ranges, ..self.clone() };
+        part.learn(value, &slopes);
+        part
+    }
+
+    /// Looks closer, at the cost of many plain looks.
+    fn sharpen(&mut self, tape: &Tape) {
+        let (value, slopes) = tape.centred_gradient(&self.ranges);
+        self.learn(value, &slopes);
+    }
+
+    fn learn(&mut self, value: Interval, slopes: &[Interval]) {
+        self.value = self.value.intersection(value).unwrap_or(value);
+        for (slope, found) in self.slopes.iter_mut().zip(slopes) {
+            *slope = slope.intersection(*found).unwrap_or(*found);
+        }
     }
 }
 
@@ -121,6 +148,8 @@ struct Search<'a> {
     at: Vec<f64>,
     /// Widths of the whole box.
     whole: Vec<f64>,
+    /// Pieces looked at so far.
+    looked_at: usize,
 }
 
 impl<'a> Search<'a> {
@@ -140,6 +169,7 @@ impl<'a> Search<'a> {
             reached: f64::NEG_INFINITY,
             at: Vec::new(),
             whole: Vec::new(),
+            looked_at: 1,
         }
     }
 
@@ -151,12 +181,11 @@ impl<'a> Search<'a> {
         // What was settled without being split further: its bound counts to the end.
         let mut settled = f64::NEG_INFINITY;
         open.push(self.examine(whole));
-        let mut looked_at = 1;
         let mut bound = f64::INFINITY;
         while let Some(worst) = open.pop() {
             bound = worst.bound.max(settled);
             let close = bound.is_finite() && bound <= self.reached + self.allowed();
-            if close || looked_at >= self.most_boxes {
+            if close || self.looked_at >= self.most_boxes {
                 break;
             }
             let Some((first, second)) = self.split(&worst.piece) else {
@@ -168,8 +197,8 @@ impl<'a> Search<'a> {
                 continue;
             };
             for ranges in [first, second] {
-                looked_at += 1;
-                let examined = self.examine(Piece::of(self.tape, ranges));
+                self.looked_at += 1;
+                let examined = self.examine(worst.piece.smaller(self.tape, ranges));
                 if examined.bound > self.reached {
                     open.push(examined);
                 }
@@ -194,7 +223,8 @@ impl<'a> Search<'a> {
     /// Sends what has a proven sign to its end, bounds the piece, and tries points in it.
     fn examine(&mut self, mut piece: Piece) -> Open {
         let mut bound = f64::INFINITY;
-        loop {
+        let mut sharp = false;
+        let (corner, here) = loop {
             bound = bound.min(self.side.turn(piece.value).hi());
             let mut corner = Vec::with_capacity(piece.ranges.len());
             let mut moved = false;
@@ -212,20 +242,40 @@ impl<'a> Search<'a> {
                 // The corner is the whole piece.
                 return Open { bound: here.hi(), piece };
             }
-            if !moved || bound <= self.reached {
-                break;
+            if bound <= self.reached {
+                break (corner, here);
             }
-            // On the smaller piece more signs may be certain.
-            piece = Piece::of(self.tape, piece.ranges);
-        }
+            if moved {
+                // On the smaller piece more signs may be certain.
+                piece = piece.smaller(self.tape, piece.ranges.clone());
+                sharp = false;
+            } else if !sharp && (self.closely() || !piece.slopes.iter().all(|s| s.is_bounded())) {
+                piece.sharpen(self.tape);
+                self.looked_at += CLOSE_LOOK;
+                sharp = true;
+            } else {
+                break (corner, here);
+            }
+        };
+        // The mean value form about the middle is the tightest where little is known of the slopes,
+        // that about the likely corner where the wrong signs are nearly excluded.
         let middle: Vec<f64> = piece.ranges.iter().map(|r| r.mid()).collect();
-        let mut form = self.try_point(&middle);
-        for ((range, slope), m) in piece.ranges.iter().zip(&piece.slopes).zip(&middle) {
-            if !range.is_point() {
-                form = form + self.side.turn(*slope) * (*range - *m);
+        let at_middle = self.try_point(&middle);
+        for (place, value) in [(&middle, at_middle), (&corner, here)] {
+            let mut form = value;
+            for ((range, slope), m) in piece.ranges.iter().zip(&piece.slopes).zip(place) {
+                if !range.is_point() {
+                    form = form + self.side.turn(*slope) * (*range - *m);
+                }
             }
+            bound = bound.min(form.hi());
         }
-        Open { bound: bound.min(form.hi()), piece }
+        Open { bound, piece }
+    }
+
+    /// True when plain looks have not led to an end.
+    fn closely(&self) -> bool {
+        self.looked_at > PLAIN_BOXES
     }
 
     /// Evaluates at a point, keeps it if it is the best so far, returns the enclosure (turned).
@@ -253,7 +303,9 @@ impl<'a> Search<'a> {
             // Where nothing is known of a slope, widths of different units tell nothing: the widest of
             // its kind goes first.
             let cost = if slope.is_bounded() {
-                slope.magnitude() * width
+                // What a closer look leaves open is how far the slope varies, not how steep it is.
+                let uncertain = if self.closely() { slope.width() } else { slope.magnitude() };
+                uncertain * width
             } else {
                 f64::MAX * (width / self.whole[i]).min(1.0)
             };

@@ -5,6 +5,7 @@
 //! enclosed constant. The gradient is taken backwards over the tape (one sweep for all inputs); its
 //! local slopes come from [`Dual`], so that the rules of differentiation stand in one place.
 
+mod centred;
 mod columns;
 mod kinks;
 mod recorded;
@@ -161,6 +162,13 @@ impl Tape {
     /// The first result and its derivative with respect to every input.
     pub fn gradient<N: Ordered>(&self, inputs: &[N]) -> (N, Vec<N>) {
         let values = self.run(inputs);
+        let slopes = self.sweep(&values, &[]);
+        (values[self.outputs[0] as usize].clone(), slopes)
+    }
+
+    /// One sweep backwards over the values of all operations up to the first result. `taken` names
+    /// the operand that a `min` or `max` is known to be, where it is known.
+    fn sweep<N: Ordered>(&self, values: &[N], taken: &[Option<u32>]) -> Vec<N> {
         let output = self.outputs[0] as usize;
         let mut adjoint = vec![N::exact(0.0); self.ops.len()];
         adjoint[output] = N::exact(1.0);
@@ -181,14 +189,17 @@ impl Tape {
                 Op::Constant(_) => {}
                 Op::Unary(f, x) => pass(x, f.run(moving(x)).slope),
                 Op::Powi(x, n) => pass(x, moving(x).powi(n).slope),
-                Op::Binary(f, x, y) => {
-                    pass(x, f.run(moving(x), fixed(y)).slope);
-                    pass(y, f.run(fixed(x), moving(y)).slope);
-                }
+                Op::Binary(f, x, y) => match taken.get(i) {
+                    Some(&Some(operand)) => pass(operand, N::exact(1.0)),
+                    _ => {
+                        pass(x, f.run(moving(x), fixed(y)).slope);
+                        pass(y, f.run(fixed(x), moving(y)).slope);
+                    }
+                },
                 Op::Apply(x, c) => pass(x, moving(x).apply(&self.curves[c as usize]).slope),
             }
         }
-        (values[output].clone(), slopes)
+        slopes
     }
 
     /// The first result, its gradient and its matrix of second derivatives, row by row.

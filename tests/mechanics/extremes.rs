@@ -35,7 +35,7 @@ fn compound<N: Number>(asked: Asked, x: &[N]) -> N {
     match asked {
         Asked::Pressure(k) => p[k].clone(),
         Asked::VonMises(k) => {
-            let (p_a, p_b) = contact::faces(&p, k);
+            let (p_a, p_b) = contact::faces(&rings, &delta, k);
             rings[k].greatest_von_mises_at_rest(p_a, p_b)
         }
         Asked::Gap(k) => contact::gaps(&rings, &delta).remove(k) * 1e6,

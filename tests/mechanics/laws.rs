@@ -75,8 +75,8 @@ proptest! {
             prop_assert!(found[k] * (1.0 - 1e-9) <= proven[k].hi());
         }
         for k in 0..4 {
-            let (p_a, p_b) = contact::faces(&found, k);
-            let (a, b) = contact::faces(&proven, k);
+            let (p_a, p_b) = contact::faces(&point, &deltas(&drawn, |b| b.member), k);
+            let (a, b) = contact::faces(&boxed, &deltas(&drawn, Between::interval), k);
             let stress = point[k].greatest_von_mises(p_a, p_b);
             let enclosed = boxed[k].greatest_von_mises(a, b);
             prop_assert!(enclosed.lo() <= stress * (1.0 + 1e-9));
@@ -103,8 +103,11 @@ proptest! {
         let p = contact::pressures(&point, &delta);
         let gaps = contact::gaps(&point, &delta);
         for k in 0..3 {
-            let (a, b) = contact::faces(&p, k);
-            let (c, d) = contact::faces(&p, k + 1);
+            let (a, b) = contact::faces(&point, &delta, k);
+            let (c, d) = contact::faces(&point, &delta, k + 1);
+            for (one, other) in [(b, p[k]), (c, p[k])] {
+                prop_assert!((one - other).abs() <= 1e-9 * p[k].max(1e3), "{one} {other}");
+            }
             let r = point[k].outside;
             let apart = r * (point[k + 1].bore_strain(c, d) - point[k].outside_strain(a, b));
             prop_assert!((apart - delta[k] - gaps[k]).abs() <= 1e-15, "{apart} {} {}", delta[k], gaps[k]);

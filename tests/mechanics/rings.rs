@@ -90,7 +90,7 @@ fn pressures_gaps_and_stresses_of_compounds() {
             .iter()
             .enumerate()
             .map(|(k, ring)| {
-                let (p_a, p_b) = contact::faces(&p, k);
+                let (p_a, p_b) = contact::faces(&rings, &delta, k);
                 ring.greatest_von_mises(p_a, p_b)
             })
             .collect();

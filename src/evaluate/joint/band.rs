@@ -133,13 +133,12 @@ fn banded(
 ) -> Result<Recorded, Unable> {
     let stack = Stack::of(scene.assembly, subject);
     let kappa = coupling(scene, at, subject, joint, &stack)?;
-    let mut pressures = stack.pressures(scene, at)?;
-    let (least, greatest) = formulas::pressure_band(pressures[0].clone(), kappa);
-    pressures[0] = match end {
+    let (least, greatest) = formulas::pressure_band(stack.pressure(scene, at, 0)?, kappa);
+    let pressure = match end {
         End::Least => least,
         End::Greatest => greatest,
     };
-    carried(scene, at, subject, joint, (&stack, &pressures), what)
+    carried(scene, at, subject, joint, (&stack, Some(pressure)), what)
 }
 
 /// κ of a joint of two rings.

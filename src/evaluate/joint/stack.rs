@@ -126,8 +126,34 @@ impl Stack {
         })
     }
 
-    /// Pressures in all contacts, Pa.
-    pub(super) fn pressures(&self, scene: &Scene<'_>, at: At) -> Result<Vec<Recorded>, Unable> {
+    /// Pressure in one contact, Pa.
+    pub(super) fn pressure(
+        &self,
+        scene: &Scene<'_>,
+        at: At,
+        place: usize,
+    ) -> Result<Recorded, Unable> {
+        let (rings, interference) = self.pressed(scene, at)?;
+        Ok(contact::pressures(&rings, &interference)[place].clone())
+    }
+
+    /// Pressures in the bore and on the outside of one ring, Pa.
+    pub(super) fn faces(
+        &self,
+        scene: &Scene<'_>,
+        at: At,
+        place: usize,
+    ) -> Result<(Recorded, Recorded), Unable> {
+        let (rings, interference) = self.pressed(scene, at)?;
+        Ok(contact::faces(&rings, &interference, place))
+    }
+
+    /// The rings, and the radial interference in each contact, m.
+    fn pressed(
+        &self,
+        scene: &Scene<'_>,
+        at: At,
+    ) -> Result<(Vec<Ring<Recorded>>, Vec<Recorded>), Unable> {
         let rings = (0..self.parts.len())
             .map(|place| self.ring(scene, at, place))
             .collect::<Result<Vec<_>, _>>()?;
@@ -137,7 +163,7 @@ impl Stack {
             let free = -expression::clearance(scene, at, fit)?;
             interference.push((free - smoothing(fit)) * 0.5);
         }
-        Ok(contact::pressures(&rings, &interference))
+        Ok((rings, interference))
     }
 }
 
