@@ -112,6 +112,8 @@ struct Plan<'a> {
     inputs: Vec<Input>,
     lower: Option<f64>,
     upper: Option<f64>,
+    /// Whether its mean and deviation are asked for, as no line may tell them.
+    sides: bool,
 }
 
 #[derive(Clone, Copy)]
@@ -169,6 +171,7 @@ pub(super) fn run(
                 inputs,
                 lower: check.lower,
                 upper: check.upper,
+                sides: check.response.tape.has_sides(),
             });
         }
     }
@@ -248,13 +251,17 @@ fn block(
             &mut scratch,
             |_, at, result| match result {
                 Column::Fixed(x) => {
-                    moments.merge(Moments::of(&[x]));
+                    if plan.sides {
+                        moments.merge(Moments::of(&[x]));
+                    }
                     if breaks(x) {
                         row.fill(true);
                     }
                 }
                 Column::Drawn(result) => {
-                    moments.merge(Moments::of(result));
+                    if plan.sides {
+                        moments.merge(Moments::of(result));
+                    }
                     for (failing, &x) in row[at..].iter_mut().zip(result) {
                         *failing |= breaks(x);
                     }

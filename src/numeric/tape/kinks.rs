@@ -61,6 +61,14 @@ impl Tape {
         places
     }
 
+    /// True where a `min`, a `max` or an absolute value is part of the formula.
+    pub fn has_sides(&self) -> bool {
+        let sides = |op: &Op| {
+            matches!(op, Op::Unary(Unary::Abs, _) | Op::Binary(Binary::Min | Binary::Max, ..))
+        };
+        self.ops.iter().any(sides)
+    }
+
     /// True where a `min`, a `max` or an absolute value may change its side within these ranges: a
     /// second derivative says nothing of how far the result leaves its tangent there. What a curve
     /// does at its rows, its own derivatives enclose.
@@ -145,6 +153,8 @@ mod tests {
         let within = |a: (f64, f64), b: (f64, f64)| {
             tape.may_kink_within(&[Interval::new(a.0, a.1), Interval::new(b.0, b.1)])
         };
+        assert!(tape.has_sides());
+        assert!(!Tape::of(1, |x| x[0].clone().exp()).has_sides());
         assert!(!within((1.0, 2.0), (3.0, 4.0)));
         assert!(within((1.0, 7.0), (3.0, 4.0)));
         assert!(within((-1.0, 2.0), (3.0, 4.0)));
