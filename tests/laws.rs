@@ -332,3 +332,32 @@ fn a_tail_needs_three_over_its_share_measured_values() {
     assert!(warned(2222, "by Cpk 1") && !warned(2223, "by Cpk 1"));
     assert!(!warned(10, "by worst case"));
 }
+
+#[test]
+fn a_quantity_that_only_seems_to_leave_its_domain_is_decided() {
+    // The argument is 1 − x/(x + y), always within 0 … 1; taken apart it goes below −1 or above 1.
+    let text = |result: &str, limit: &str| {
+        format!(
+            "assembly \"near the edge\"\nlengths in mm\ncondition shop 20\n\
+             part a of steel_c45 {{ x = 5 ±4.9; y = 3 ±2 }}\n\
+             result r = {result} {{ require \"R\" {limit} }}\n"
+        )
+    };
+    let share = "(1 - a.x / (a.x + a.y))";
+    for (result, limit) in [
+        (format!("sin(acos({share}))"), "<= 1"),
+        (format!("asin({share})"), "0 .. 90 deg"),
+        (format!("sqrt({share})"), "0 .. 1"),
+        (format!("sqrt({share}) / {share}"), ">= 1"),
+    ] {
+        let outcome = run(&text(&result, limit)).verdict("R", "shop").outcome;
+        assert_eq!(outcome, Outcome::Holds, "{result}");
+    }
+    // With a little more it has no value for some.
+    for (result, limit) in
+        [(format!("sqrt({share} - 0.1)"), ">= 0"), (format!("acos(2 * {share})"), ">= 0 deg")]
+    {
+        let outcome = run(&text(&result, limit)).verdict("R", "shop").outcome;
+        assert_eq!(outcome, Outcome::Undecided, "{result}");
+    }
+}

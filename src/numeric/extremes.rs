@@ -49,9 +49,23 @@ pub fn extremes(tape: &Tape, ranges: &[Interval], gap: f64) -> Extremes {
 /// again and can do with a coarse answer.
 pub fn extremes_within(tape: &Tape, ranges: &[Interval], gap: f64, most_boxes: usize) -> Extremes {
     let breaks: Vec<Vec<f64>> = (0..tape.inputs()).map(|i| tape.breakpoints(i)).collect();
-    let whole = Piece::of(tape, ranges.to_vec());
-    let search = |side| Search::new(tape, &breaks, gap, most_boxes, side).run(whole.clone());
-    Extremes { least: search(Side::Least), greatest: search(Side::Greatest) }
+    let mut whole = Piece::of(tape, ranges.to_vec());
+    let search = |tape: &Tape, gap, most, whole: &Piece| {
+        let one = |side| Search::new(tape, &breaks, gap, most, side).run(whole.clone());
+        Extremes { least: one(Side::Least), greatest: one(Side::Greatest) }
+    };
+    if whole.value.is_bounded() {
+        return search(tape, gap, most_boxes, &whole);
+    }
+    // No value is known for some of it. It may be that a root or a quotient only seems to leave what
+    // it is defined for: its argument has a search of its own.
+    let held = tape.held(ranges, |argument| {
+        let most = most_boxes.min(ARGUMENT_BOXES);
+        let found = search(argument, 0.0, most, &Piece::of(argument, ranges.to_vec()));
+        Interval::new(found.least.bound, found.greatest.bound)
+    });
+    whole = Piece::of(&held, whole.ranges);
+    search(&held, gap, most_boxes, &whole)
 }
 
 /// Pieces that are looked at plainly before a search looks closer: most end sooner.
@@ -59,6 +73,10 @@ const PLAIN_BOXES: usize = 32;
 
 /// How many plain looks a closer one counts for, so that a search that gives up takes no longer.
 const CLOSE_LOOK: usize = 8;
+
+/// Most pieces that are looked at to show that the argument of a root or a quotient keeps to what that
+/// is defined for.
+const ARGUMENT_BOXES: usize = 2_000;
 
 /// A box with what is known of the formula on it.
 #[derive(Debug, Clone)]
@@ -374,6 +392,30 @@ mod tests {
         let e = extremes(&tape, &ranges(&[(-1.0, 1.0)]), 1e-9);
         assert!(!e.greatest.met && e.greatest.bound == f64::INFINITY);
         assert!(!e.least.met && e.least.bound == f64::NEG_INFINITY);
+    }
+
+    #[test]
+    fn an_argument_that_only_seems_to_leave_its_domain_is_no_obstacle() {
+        // y = 1 − x/(x + z) is at most 1 and at least 0.09; plainly it goes down to −9.
+        let part = |x: &[Recorded]| {
+            Recorded::exact(1.0) - x[0].clone() / (x[0].clone() + x[1].clone() - x[0].clone() * 0.5)
+        };
+        let over = ranges(&[(0.1, 1.0), (0.6, 1.0)]);
+        let tape = Tape::of(2, |x| part(x).acos().sin() * x[1].clone());
+        let (plain, _) = tape.gradient(&over);
+        assert_eq!(plain, Interval::ENTIRE);
+        let e = extremes(&tape, &over, 1e-9);
+        assert!(e.least.met && e.greatest.met, "{e:?}");
+        for x in [0.1, 0.3, 0.7, 1.0] {
+            for z in [0.6, 0.8, 1.0] {
+                let value = tape.value(&[x, z]);
+                assert!(e.least.bound <= value && value <= e.greatest.bound, "{value} {e:?}");
+            }
+        }
+        // A hair beyond, and some have none: nothing is claimed of it.
+        let tape = Tape::of(2, |x| ((part(x) - 0.5).sqrt()).atan());
+        let e = extremes(&tape, &over, 1e-9);
+        assert!(!e.least.met && e.greatest.bound == f64::INFINITY, "{e:?}");
     }
 
     #[test]

@@ -7,6 +7,7 @@
 
 mod centred;
 mod columns;
+mod domain;
 mod kinks;
 mod recorded;
 
@@ -238,16 +239,21 @@ impl Tape {
     fn run_into<N: Number>(&self, inputs: &[N], values: &mut Vec<N>) {
         values.clear();
         for op in &self.ops {
-            let at = |x: u32| values[x as usize].clone();
-            let value = match *op {
-                Op::Input(n) => inputs[n as usize].clone(),
-                Op::Constant(c) => N::enclosed(c),
-                Op::Unary(f, x) => f.run(at(x)),
-                Op::Powi(x, n) => at(x).powi(n),
-                Op::Binary(f, x, y) => f.run(at(x), at(y)),
-                Op::Apply(x, c) => at(x).apply(&self.curves[c as usize]),
-            };
+            let value = self.step(*op, inputs, values);
             values.push(value);
+        }
+    }
+
+    #[inline(always)]
+    fn step<N: Number>(&self, op: Op, inputs: &[N], values: &[N]) -> N {
+        let at = |x: u32| values[x as usize].clone();
+        match op {
+            Op::Input(n) => inputs[n as usize].clone(),
+            Op::Constant(c) => N::enclosed(c),
+            Op::Unary(f, x) => f.run(at(x)),
+            Op::Powi(x, n) => at(x).powi(n),
+            Op::Binary(f, x, y) => f.run(at(x), at(y)),
+            Op::Apply(x, c) => at(x).apply(&self.curves[c as usize]),
         }
     }
 }
