@@ -13,7 +13,7 @@ use crate::numeric::tape::Tape;
 pub(crate) fn contributors(response: &Response, range: &Range) -> Vec<Contributor> {
     let from: Vec<f64> = range.least.corner.iter().map(|c| c.1).collect();
     let to: Vec<f64> = range.greatest.corner.iter().map(|c| c.1).collect();
-    let parts = integrate(&response.tape, &from, &to, &pieces(&response.tape, &from, &to));
+    let parts = integrate(&response.tape, &from, &to);
     let (_, sensitivities) = response.tape.gradient(&response.middle);
     let whole: f64 = parts.iter().sum();
     let share = |part: f64| if whole == 0.0 { 0.0 } else { part / whole };
@@ -33,22 +33,17 @@ pub(crate) fn contributors(response: &Response, range: &Range) -> Vec<Contributo
     list
 }
 
-/// The smooth pieces of the straight line between two points, as shares of it.
-pub(crate) fn pieces(tape: &Tape, from: &[f64], to: &[f64]) -> Vec<(f64, f64)> {
-    let kinks = tape.kinks_along(from, to);
-    let starts = std::iter::once(0.0).chain(kinks.iter().copied());
-    let ends = kinks.iter().copied().chain(std::iter::once(1.0));
-    starts.zip(ends).collect()
-}
-
 /// What each input adds along the straight line from one point to another: `Δx_i·∫₀¹ ∂r/∂x_i dt`.
 ///
 /// Each smooth piece is integrated by itself: one rule across a contact that opens would be off by
 /// several per cent.
-pub(crate) fn integrate(tape: &Tape, from: &[f64], to: &[f64], pieces: &[(f64, f64)]) -> Vec<f64> {
+pub(crate) fn integrate(tape: &Tape, from: &[f64], to: &[f64]) -> Vec<f64> {
+    let kinks = tape.kinks_along(from, to);
+    let starts = std::iter::once(0.0).chain(kinks.iter().copied());
+    let pieces = starts.zip(kinks.iter().copied().chain(std::iter::once(1.0)));
     let mut parts = vec![0.0; from.len()];
     let mut point = from.to_vec();
-    for (t, weight) in pieces.iter().flat_map(|&(a, b)| gauss_legendre_16().points(a, b)) {
+    for (t, weight) in pieces.flat_map(|(a, b)| gauss_legendre_16().points(a, b)) {
         for ((x, a), b) in point.iter_mut().zip(from).zip(to) {
             *x = a + t * (b - a);
         }

@@ -4,7 +4,7 @@ use super::outcome::{BeyondData, PartTemperature};
 use super::scene::{At, Scene};
 use super::temperature;
 use crate::model::{Assembly, Owner, PartId, SubjectId, SubjectKind};
-use crate::numeric::Interval;
+use crate::numeric::{Interval, Recorded};
 
 /// A temperature may lie this far beyond the data, K: 293 K and 20 °C are the same to every table.
 pub(crate) const SLACK: f64 = 0.2;
@@ -20,7 +20,8 @@ pub(crate) fn temperatures(assembly: &Assembly) -> Vec<PartTemperature> {
     let mut list = Vec::new();
     for condition in assembly.condition_ids() {
         for &owner in &owners {
-            let range = hull(assembly, At::Condition(condition), owner);
+            let range =
+                hull(assembly, |scene| temperature::of(scene, At::Condition(condition), owner));
             list.push(PartTemperature {
                 owner,
                 condition,
@@ -32,9 +33,10 @@ pub(crate) fn temperatures(assembly: &Assembly) -> Vec<PartTemperature> {
     list
 }
 
-fn hull(assembly: &Assembly, at: At, owner: Owner) -> Interval {
+/// Everything that a temperature, or a part of one, may be.
+pub(crate) fn hull(assembly: &Assembly, part: impl FnOnce(&Scene<'_>) -> Recorded) -> Interval {
     // Each unknown occurs once in a temperature, so the natural enclosure is the hull.
-    match Scene::record(assembly, &[], &[], |scene| Ok(temperature::of(scene, at, owner))) {
+    match Scene::record(assembly, &[], &[], |scene| Ok(part(scene))) {
         Ok(response) => response.tape.value(&response.ranges),
         Err(_) => Interval::ENTIRE,
     }

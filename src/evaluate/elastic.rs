@@ -1,9 +1,10 @@
 //! Elastic data of a part at its temperature. Pa, kg/m³.
 
 use super::outcome::Property as Named;
-use super::scene::{Scene, Unable};
+use super::scene::{At, Scene, Unable};
+use super::temperature;
 use crate::materials::{Material, Property};
-use crate::model::{Datum, PartId, Unknown};
+use crate::model::{Datum, Owner, PartId, Unknown};
 use crate::numeric::{Number, Recorded};
 
 /// Young's modulus at a temperature, with the scatter of the part's lot.
@@ -47,6 +48,21 @@ pub(crate) fn property(
     let property = stated(scene, part, named)?;
     let lot = scene.assembly.part(part).lot;
     Ok(scattered(scene, property, Unknown::DataScatter(lot, which), temperature))
+}
+
+/// A stress as it is asked for: in Pa, or as a share of the part's yield strength at its temperature.
+pub(crate) fn shown(
+    scene: &Scene<'_>,
+    at: At,
+    part: PartId,
+    stress: Recorded,
+    of_yield: bool,
+) -> Result<Recorded, Unable> {
+    if !of_yield {
+        return Ok(stress);
+    }
+    let t = temperature::of(scene, at, Owner::Part(part));
+    Ok(stress / property(scene, part, Datum::Yield, t)?)
 }
 
 /// A property at a temperature, with a scatter of its own.

@@ -3,7 +3,7 @@
 use super::expression::value;
 use super::scene::{At, Scene, Unable};
 use super::size::strain_of_lot;
-use super::{elastic, joint, temperature};
+use super::{elastic, temperature};
 use crate::materials::{Expansion, Expansions};
 use crate::mechanics::ring::Ring;
 use crate::mechanics::{expansion, filling as formulas};
@@ -54,8 +54,7 @@ pub(crate) fn quantity(
     match (quantity, wall) {
         (Quantity::Stress(part), Some(wall)) => {
             let stress = formulas::closed_cylinder_von_mises(&wall, pressure);
-            let strength = || joint::yield_strength(scene, at, part);
-            Ok(if of_yield { stress / strength()? } else { stress })
+            elastic::shown(scene, at, part, stress, of_yield)
         }
         _ => Ok(pressure),
     }

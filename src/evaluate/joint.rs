@@ -11,11 +11,8 @@ mod stack;
 use super::elastic;
 use super::expression::value;
 use super::scene::{At, Scene, Unable};
-use super::temperature;
 use crate::mechanics::joint as formulas;
-use crate::model::{
-    Datum, DimensionId, Fit, Form, Joint, Owner, PartId, Quantity, SubjectId, Unknown,
-};
+use crate::model::{DimensionId, Fit, Form, Joint, PartId, Quantity, SubjectId, Unknown};
 use crate::numeric::{Number, Recorded};
 use stack::Stack;
 pub(crate) use stack::nominal;
@@ -64,7 +61,7 @@ fn carried(
     let place = stack.contact_of(subject);
     if let Quantity::Stress(part) = quantity {
         let stress = stress(scene, at, (stack, banded), part)?;
-        return Ok(if of_yield { stress / yield_strength(scene, at, part)? } else { stress });
+        return elastic::shown(scene, at, part, stress, of_yield);
     }
     let pressure = match banded {
         Some(pressure) => pressure,
@@ -83,12 +80,6 @@ fn carried(
         }
         _ => pressure,
     })
-}
-
-/// Yield strength of a part at its temperature, Pa.
-pub(crate) fn yield_strength(scene: &Scene<'_>, at: At, part: PartId) -> Result<Recorded, Unable> {
-    let t = temperature::of(scene, at, Owner::Part(part));
-    elastic::property(scene, part, Datum::Yield, t)
 }
 
 /// Greatest von Mises stress in a ring of the stack, Pa.

@@ -1,7 +1,7 @@
 //! Quantities of parts that hold each other.
 
 use super::expression::{self, value};
-use super::joint::{nominal, yield_strength};
+use super::joint::nominal;
 use super::scene::{At, Scene, Unable};
 use super::{elastic, temperature};
 use crate::mechanics::restraint as formulas;
@@ -54,7 +54,7 @@ pub(crate) fn quantity(
     let place = restraint.members.iter().position(|m| m.part == part && m.area.is_some());
     let area = area(scene, subject, place.unwrap_or(0));
     let stress = formulas::stress(force, area);
-    Ok(if of_yield { stress / yield_strength(scene, at, part)? } else { stress })
+    elastic::shown(scene, at, part, stress, of_yield)
 }
 
 /// The length that the springs take up together, m.
@@ -65,13 +65,7 @@ fn take_up(
     restraint: &Restraint,
 ) -> Result<Recorded, Unable> {
     match restraint.start {
-        Start::Misfit => {
-            let lengths = |hold: Hold| {
-                let side = restraint.members.iter().filter(|m| m.hold == hold);
-                side.map(|m| value(scene, at, &m.length)).collect::<Result<Vec<_>, _>>()
-            };
-            Ok(formulas::misfit(&lengths(Hold::Squeezed)?, &lengths(Hold::Stretched)?))
-        }
+        Start::Misfit => misfit(restraint, |member| value(scene, at, &member.length)),
         // What closes the gap and goes on is what the springs take up.
         Start::Gap(gap) => match &scene.assembly.subject(gap).kind {
             SubjectKind::Gap(opening) => Ok(-value(scene, at, opening)?),
@@ -83,6 +77,18 @@ fn take_up(
     }
 }
 
+/// Of lengths, or of changes of length, what is squeezed less what is stretched, m.
+fn misfit(
+    restraint: &Restraint,
+    length: impl Fn(&Member) -> Result<Recorded, Unable>,
+) -> Result<Recorded, Unable> {
+    let of = |hold: Hold| {
+        let side = restraint.members.iter().filter(|m| m.hold == hold);
+        side.map(&length).collect::<Result<Vec<_>, _>>()
+    };
+    Ok(formulas::misfit(&of(Hold::Squeezed)?, &of(Hold::Stretched)?))
+}
+
 fn preloaded(
     scene: &Scene<'_>,
     at: At,
@@ -92,14 +98,7 @@ fn preloaded(
 ) -> Result<Recorded, Unable> {
     let preload = scene.unknown(Unknown::Preload(subject));
     let compliance_then = compliance(scene, then, subject, restraint)?;
-    let mut growth = Recorded::exact(0.0);
-    for member in &restraint.members {
-        let change = expression::change(scene, at, then, &member.length)?;
-        growth = match member.hold {
-            Hold::Squeezed => growth + change,
-            Hold::Stretched => growth - change,
-        };
-    }
+    let growth = misfit(restraint, |member| expression::change(scene, at, then, &member.length))?;
     Ok(formulas::taken_up(preload, compliance_then, growth))
 }
 

@@ -2,9 +2,7 @@
 
 use super::ranges;
 use super::scene::{At, Scene, Way};
-use crate::model::{
-    Assembly, Condition, ConditionId, History, OwnTemperature, Owner, Thermal, Unknown,
-};
+use crate::model::{Assembly, ConditionId, History, OwnTemperature, Owner, Thermal, Unknown};
 use crate::numeric::{Number, Recorded};
 
 /// The temperature of a part or fill in a state of the world.
@@ -42,33 +40,15 @@ pub(crate) struct Stated {
 
 /// The temperature of a part or fill in a condition, what is asked for apart from its tolerance.
 pub(crate) fn stated(scene: &Scene<'_>, id: ConditionId, owner: Owner) -> Stated {
-    let condition = scene.assembly.condition(id);
-    let about = |unknown: Unknown| {
-        let middle = ranges::middle(scene.assembly, unknown);
-        Stated { nominal: Recorded::exact(middle), tolerance: scene.unknown(unknown) - middle }
+    let none = || Recorded::exact(0.0);
+    let sum = |stated: Stated, term: Term| match term {
+        Term::Asked(t) => Stated { nominal: stated.nominal + t, ..stated },
+        Term::About(t, middle) => {
+            Stated { nominal: stated.nominal + middle, tolerance: stated.tolerance + (t - middle) }
+        }
     };
-    let shared = |owner: Option<Owner>| match &condition.thermal {
-        Thermal::Uniform(_) if !condition.is_range() => about(Unknown::Temperature(id)),
-        Thermal::Uniform(_) => Stated {
-            nominal: scene.unknown(Unknown::Temperature(id)),
-            tolerance: Recorded::exact(0.0),
-        },
-        Thermal::History(history) => Stated {
-            nominal: in_history(scene, id, history, owner),
-            tolerance: scene.unknown(Unknown::Temperature(id)),
-        },
-    };
-    let own = || about(Unknown::OwnTemperature { condition: id, owner });
-    let above = |base: Stated| {
-        let own = own();
-        Stated { nominal: base.nominal + own.nominal, tolerance: base.tolerance + own.tolerance }
-    };
-    match condition.state(owner).and_then(|s| s.temperature.as_ref()) {
-        None => shared(Some(owner)),
-        Some(OwnTemperature::Absolute(_)) => own(),
-        Some(OwnTemperature::Above { base: Some(base), .. }) => above(stated(scene, id, *base)),
-        Some(OwnTemperature::Above { base: None, .. }) => above(shared(None)),
-    }
+    let terms = terms(scene, id, owner).into_iter();
+    terms.fold(Stated { nominal: none(), tolerance: none() }, sum)
 }
 
 /// The temperature of a part or fill in a condition with everything in the middle of its limits, K.
@@ -78,31 +58,50 @@ pub(crate) fn at_middle(assembly: &Assembly, id: ConditionId, owner: Owner) -> f
 }
 
 fn in_condition(scene: &Scene<'_>, id: ConditionId, owner: Owner) -> Recorded {
-    let condition = scene.assembly.condition(id);
-    let own = || scene.unknown(Unknown::OwnTemperature { condition: id, owner });
-    match condition.state(owner).and_then(|s| s.temperature.as_ref()) {
-        None => common(scene, id, condition, Some(owner)),
-        Some(OwnTemperature::Absolute(_)) => own(),
-        Some(OwnTemperature::Above { base: Some(base), .. }) => {
-            in_condition(scene, id, *base) + own()
-        }
-        Some(OwnTemperature::Above { base: None, .. }) => {
-            common(scene, id, condition, None) + own()
-        }
-    }
+    let terms = terms(scene, id, owner).into_iter();
+    terms.fold(Recorded::exact(0.0), |sum, term| match term {
+        Term::Asked(t) | Term::About(t, _) => sum + t,
+    })
 }
 
-/// The condition's temperature for whoever has no row: its own column of a history, else `ambient`.
-fn common(
-    scene: &Scene<'_>,
-    id: ConditionId,
-    condition: &Condition,
-    owner: Option<Owner>,
-) -> Recorded {
-    let shared = scene.unknown(Unknown::Temperature(id));
-    match &condition.thermal {
-        Thermal::Uniform(_) => shared,
-        Thermal::History(history) => in_history(scene, id, history, owner) + shared,
+/// A summand of a temperature, K.
+enum Term {
+    /// Asked for as it is: a range, the times of a history.
+    Asked(Recorded),
+    /// An unknown with its middle: what it is off by is a tolerance.
+    About(Recorded, f64),
+}
+
+/// What the temperature of a part or fill in a condition is the sum of.
+fn terms(scene: &Scene<'_>, id: ConditionId, owner: Owner) -> Vec<Term> {
+    let condition = scene.assembly.condition(id);
+    let about =
+        |unknown| Term::About(scene.unknown(unknown), ranges::middle(scene.assembly, unknown));
+    // Of whoever has no row: its own column of a history, else `ambient`.
+    let shared = |owner: Option<Owner>| {
+        let temperature = Unknown::Temperature(id);
+        match &condition.thermal {
+            Thermal::Uniform(_) if condition.is_range() => {
+                vec![Term::Asked(scene.unknown(temperature))]
+            }
+            Thermal::Uniform(_) => vec![about(temperature)],
+            Thermal::History(history) => vec![
+                Term::Asked(in_history(scene, id, history, owner)),
+                // A band is about zero already.
+                Term::About(scene.unknown(temperature), 0.0),
+            ],
+        }
+    };
+    let own = || about(Unknown::OwnTemperature { condition: id, owner });
+    let above = |mut base: Vec<Term>| {
+        base.push(own());
+        base
+    };
+    match condition.state(owner).and_then(|s| s.temperature.as_ref()) {
+        None => shared(Some(owner)),
+        Some(OwnTemperature::Absolute(_)) => vec![own()],
+        Some(OwnTemperature::Above { base: Some(base), .. }) => above(terms(scene, id, *base)),
+        Some(OwnTemperature::Above { base: None, .. }) => above(shared(None)),
     }
 }
 

@@ -5,7 +5,7 @@
 //! temperature has gone, all going together from reference to the condition. Loads, moisture and
 //! speed stay those of the condition.
 
-use super::contributor::{integrate, pieces};
+use super::contributor::integrate;
 use super::outcome::{Chosen, PartShift, Verdict};
 use super::scene::{At, Scene, Shift, Way};
 use super::{depends, quantity};
@@ -36,7 +36,7 @@ pub(crate) fn shifts(assembly: &Assembly, verdict: &Verdict, members: &[Chosen])
         std::iter::repeat_n(t, owners.len()).chain(response.middle.iter().copied()).collect()
     };
     let (from, to) = (ends(0.0), ends(1.0));
-    let shares = integrate(&response.tape, &from, &to, &pieces(&response.tape, &from, &to));
+    let shares = integrate(&response.tape, &from, &to);
     let mut list: Vec<PartShift> = owners
         .iter()
         .zip(shares)

@@ -84,19 +84,16 @@ struct Felt {
 }
 
 impl Felt {
-    fn read(assembly: &Assembly, condition: ConditionId, owner: Owner) -> Option<Self> {
+    fn read(assembly: &Assembly, condition: ConditionId, owner: Owner) -> Self {
         let hull = |part: fn(temperature::Stated) -> Recorded| {
-            let record = |scene: &Scene<'_>| Ok(part(temperature::stated(scene, condition, owner)));
-            // Each unknown occurs once, so the natural enclosure is the hull.
-            let response = Scene::record(assembly, &[], &[], record).ok()?;
-            Some(response.tape.value(&response.ranges))
+            data_range::hull(assembly, |scene| part(temperature::stated(scene, condition, owner)))
         };
-        Some(Felt {
+        Felt {
             owner,
-            nominal: hull(|t| t.nominal)?,
-            tolerance: hull(|t| t.tolerance)?,
+            nominal: hull(|t| t.nominal),
+            tolerance: hull(|t| t.tolerance),
             valid: assembly.material_of(owner).map_or(Interval::ENTIRE, |m| m.valid()),
-        })
+        }
     }
 }
 
@@ -105,7 +102,7 @@ impl Axis {
         let felt: Vec<Felt> = depends::owners(assembly, requirement.subject)
             .into_iter()
             .map(|owner| Felt::read(assembly, condition, owner))
-            .collect::<Option<_>>()?;
+            .collect();
         let first = felt.first()?.nominal;
         let near = |a: f64, b: f64| (a - b).abs() < SAME;
         let alike = felt

@@ -179,6 +179,33 @@ impl<'a> Context<'a> {
         None
     }
 
+    /// Refuses to compute what `need` asks for of a material, named at `stated`, that does not state the
+    /// property it takes; `example` is a value of it.
+    pub(crate) fn lacks<T>(
+        &mut self,
+        material: &str,
+        stated: Span,
+        need: Span,
+        property: &str,
+        example: &str,
+    ) -> Option<T> {
+        // A material that was not found has been reported.
+        if material.is_empty() {
+            return None;
+        }
+        self.refuse(
+            Diagnostic::new(
+                Code::MissingProperty,
+                stated,
+                format!("the material `{material}` states no `{property}`"),
+            )
+            .label(need, "needed here")
+            .help(format!(
+                "state it: `material my_{material} like {material} {{ {property} {example} }}`"
+            )),
+        )
+    }
+
     /// What the head of a file says.
     pub(crate) fn head(&self, file: FileId) -> &Head {
         self.heads.get(&file).unwrap_or(&self.fallback)

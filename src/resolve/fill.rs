@@ -200,20 +200,7 @@ impl<'t> Resolver<'_, '_, 't> {
         stated: Span,
         need: Span,
     ) -> Option<T> {
-        if material.is_empty() {
-            return None;
-        }
-        self.cx.refuse(
-            Diagnostic::new(
-                Code::MissingProperty,
-                stated,
-                format!("the material `{material}` states no `bulk modulus`"),
-            )
-            .label(need, "needed here")
-            .help(format!(
-                "state it: `material my_{material} like {material} {{ bulk modulus 1.6 GPa }}`"
-            )),
-        )
+        self.cx.lacks(material, stated, need, "bulk modulus", "1.6 GPa")
     }
 
     fn positive(&mut self, written: &tree::Quantity, volume: Scenario) -> Option<Scenario> {
@@ -223,7 +210,7 @@ impl<'t> Resolver<'_, '_, 't> {
         self.cx.refuse(Diagnostic::new(
             Code::ValueOutOfRange,
             written.span(),
-            "a volume has to stay above nought",
+            "a volume has to stay above 0",
         ))
     }
 

@@ -366,7 +366,7 @@ impl<'t> Resolver<'_, '_, 't> {
                         Diagnostic::new(
                             Code::ValueOutOfRange,
                             quantity.span(),
-                            "a clearance while joining is not below nought",
+                            "a clearance while joining is not below 0",
                         )
                         .help("state the room wanted, as `insertion clearance 0.02`"),
                     );
@@ -388,7 +388,7 @@ impl<'t> Resolver<'_, '_, 't> {
                 Diagnostic::new(
                     Code::ValueOutOfRange,
                     rz.span,
-                    "a roughness is one height, not below nought",
+                    "a roughness is one height, not below 0",
                 )
                 .help("state the greatest Rz of the drawing, as `Rz 6 um`"),
             );
@@ -431,19 +431,7 @@ impl<'t> Resolver<'_, '_, 't> {
     pub(super) fn lacks<T>(&mut self, part: PartId, property: &str, need: Span) -> Option<T> {
         let part = &self.cx.parts[part.index()];
         let (material, span) = (part.material.name.clone(), part.material_span);
-        // A material that was not found has been reported.
-        if material.is_empty() {
-            return None;
-        }
-        self.cx.refuse(
-            Diagnostic::new(
-                Code::MissingProperty,
-                span,
-                format!("the material `{material}` states no `{property}`"),
-            )
-            .label(need, "needed here")
-            .help(format!("state it: `material my_{material} like {material} {{ {property} … }}`")),
-        )
+        self.cx.lacks(&material, span, need, property, "…")
     }
 }
 

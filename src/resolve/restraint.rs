@@ -43,7 +43,7 @@ impl<'t> Resolver<'_, '_, 't> {
                 return self.cx.refuse(Diagnostic::new(
                     Code::ValueOutOfRange,
                     written.span,
-                    format!("the {what} of a member has to stay above nought"),
+                    format!("the {what} of a member has to stay above 0"),
                 ));
             }
         }
@@ -114,7 +114,7 @@ impl<'t> Resolver<'_, '_, 't> {
                         Diagnostic::new(
                             Code::ValueOutOfRange,
                             preload.force.span(),
-                            "a preload cannot be below nought: nothing pulls across an open face",
+                            "a preload cannot be below 0: nothing pulls across an open face",
                         )
                         .help("state the force that squeezes, from nought up"),
                     );

@@ -1,7 +1,7 @@
 //! `select --spacer`: which quantity and which conditions are meant, and the length itself.
 
-use super::super::refusal::Refusal;
 use super::{SelectArguments, dimension};
+use crate::cli::refusal::Refusal;
 use crate::evaluate::select::{NoSpacer, Spacer, spacer};
 use crate::model::{Assembly, ConditionId, DimensionId, SubjectId};
 

@@ -33,7 +33,7 @@ impl Resolver<'_, '_, '_> {
             }
             let name = self.cx.parts[ring.part.index()].name.clone();
             let message = match word {
-                _ if size <= 0.0 => format!("the {word} of `{name}` is not above nought"),
+                _ if size <= 0.0 => format!("the {word} of `{name}` is not above 0"),
                 "bore" => format!("the bore of `{name}` is not smaller than its contact"),
                 _ => format!("the outside of `{name}` is not larger than its contact"),
             };
@@ -51,7 +51,7 @@ impl Resolver<'_, '_, '_> {
         Some(())
     }
 
-    /// The length of contact: along the axis, above nought.
+    /// The length of contact: along the axis, above 0.
     pub(super) fn contact_length(&mut self, length: &Operand, line: Span) -> Option<Arc<Expr>> {
         let found = self.operand(length, line, Form::Linear)?;
         if let ExprKind::Size { dimension, .. } = found.kind
@@ -75,13 +75,13 @@ impl Resolver<'_, '_, '_> {
             Diagnostic::new(
                 Code::ValueOutOfRange,
                 found.span,
-                "a length of contact has to be above nought",
+                "a length of contact has to be above 0",
             )
             .help("state how long the rings touch, as `length 20`"),
         )
     }
 
-    /// Refuses a friction below nought, or so great that per cent are meant.
+    /// Refuses a friction below 0, or so great that per cent are meant.
     pub(super) fn possible_friction(
         &mut self,
         friction: Scenario,
