@@ -18,6 +18,7 @@ mod samples;
 mod select;
 mod standards_laws;
 mod statistics_laws;
+mod statistics_of_temperature;
 mod support;
 mod syntax;
 mod tidy;
